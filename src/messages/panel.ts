@@ -1,0 +1,160 @@
+/**
+ * What the extension host and the panel's page say to each other. Plain data only: it crosses a process. Every message to
+ * the page carries the document and its version; the page drops what is older than what it shows. The page sends ids and
+ * values, never commands or paths. Decoders for unknown data are in `decodePanel.ts`.
+ */
+
+/** Complex numbers as two lists; null where not known. */
+export interface PointList {
+  readonly re: readonly (number | null)[];
+  readonly im: readonly (number | null)[];
+}
+
+export interface GoalView {
+  /** Index in the description's goals. */
+  readonly id: number;
+  /** `return loss ≥ 12 dB` */
+  readonly title: string;
+  /** `uplink`, `2 × uplink into 50 Ω`; empty where the goal has no place. */
+  readonly place: string;
+  readonly ok: boolean;
+  /** `20.7 dB`, `∞`, or `not known`. */
+  readonly valueText: string;
+  /** `worst: wet bark, 868.2 MHz`, or the reason why it is not known. */
+  readonly detail: string;
+  /** `8.7 dB to spare`, `2.6 dB short`. */
+  readonly marginText: string;
+  /** −1 … 1 for the bar, 0 at the limit; null where not known. */
+  readonly bar: number | null;
+  /** Line in the document, from 0. */
+  readonly line: number;
+}
+
+export interface BandView {
+  readonly name: string;
+  readonly startHz: number;
+  readonly stopHz: number;
+  readonly watch: boolean;
+}
+
+export interface TraceView {
+  /** `load` for a single case. */
+  readonly caseName: string;
+  readonly reflection: PointList;
+  /** |Γ| against the source in dB (0 or below), and transducer gain; null where not known or −infinite. */
+  readonly reflectionDb: readonly (number | null)[];
+  readonly gainDb: readonly (number | null)[];
+  readonly reason: string | null;
+}
+
+/** A circle of the chart's plane. */
+export interface DiscView {
+  readonly centreRe: number;
+  readonly centreIm: number;
+  readonly radius: number;
+  readonly label: string;
+}
+
+/** A goal as a bar in one of the two plots: the trace must stay below (`at most`) or above it. */
+export interface MaskView {
+  readonly plot: 'reflection' | 'gain';
+  readonly side: 'at most' | 'at least';
+  readonly levelDb: number;
+  readonly startHz: number;
+  readonly stopHz: number;
+  readonly ok: boolean;
+  readonly goalId: number;
+}
+
+export interface PathStepView {
+  readonly name: string;
+  readonly arc: { readonly re: readonly number[]; readonly im: readonly number[] };
+}
+
+/** Everything at the marker, for one case. */
+export interface MarkerCaseView {
+  readonly caseName: string;
+  /** `Γ 0.065 ∠ −168° · 44.0 − j1.2 Ω · 23.8 dB` */
+  readonly text: string;
+  readonly loadReflection: { readonly re: number; readonly im: number } | null;
+  readonly steps: readonly PathStepView[];
+  readonly inputReflection: { readonly re: number; readonly im: number } | null;
+}
+
+export interface MarkerView {
+  readonly frequencyHz: number;
+  /** `866.5 MHz` */
+  readonly text: string;
+  readonly cases: readonly MarkerCaseView[];
+}
+
+export type LadderSymbol =
+  | 'load' | 'source' | 'resistor' | 'inductor' | 'capacitor' | 'branch' | 'line' | 'stub open' | 'stub short' | 'transformer' | 'block' | 'bridge' | 'open' | 'unsolved';
+
+export interface LadderRowView {
+  /** The element's name; `load` and `source` for the ends. */
+  readonly id: string;
+  readonly name: string;
+  readonly orientation: 'series' | 'shunt' | 'through' | 'end';
+  readonly symbol: LadderSymbol;
+  readonly value: string;
+  readonly reactance: string;
+  readonly impedanceAfter: string;
+  readonly voltage: string;
+  readonly current: string;
+  readonly heat: string;
+  readonly note: string;
+  /** Line in the document, from 0; null where it is in none. */
+  readonly line: number | null;
+  /** True where the value can be stepped or edited from the table. */
+  readonly editable: boolean;
+}
+
+export interface ProblemView {
+  readonly severity: 'error' | 'warning' | 'info';
+  readonly message: string;
+  readonly line: number;
+}
+
+/** One whole picture. Everything that a person reads is text made by the host, so panel, hover and report agree. */
+export interface PanelView {
+  readonly title: string;
+  readonly fileName: string;
+  readonly pinned: boolean;
+  /** `3 of 4 hold`; empty where the description has no goals. */
+  readonly verdict: string;
+  readonly goals: readonly GoalView[];
+  readonly problems: readonly ProblemView[];
+  readonly cautions: readonly string[];
+  readonly z0Ohm: number;
+  readonly frequencyHz: readonly number[];
+  readonly bands: readonly BandView[];
+  readonly traces: readonly TraceView[];
+  readonly discs: readonly DiscView[];
+  readonly masks: readonly MaskView[];
+  readonly marker: MarkerView | null;
+  readonly ladder: readonly LadderRowView[];
+}
+
+export type ToPage =
+  | { readonly type: 'view'; readonly document: string; readonly version: number; readonly view: PanelView }
+  /** The numbers shown are older than the text; `reason` where they cannot be renewed. */
+  | { readonly type: 'stale'; readonly document: string; readonly version: number; readonly reason: string | null; readonly problems: readonly ProblemView[] }
+  | { readonly type: 'marker'; readonly document: string; readonly version: number; readonly request: number; readonly marker: MarkerView | null; readonly refusal: string | null }
+  /** The cursor in the editor is on this element or goal. */
+  | { readonly type: 'cursor'; readonly document: string; readonly version: number; readonly elementId: string | null; readonly goalId: number | null }
+  | { readonly type: 'nothing'; readonly document: ''; readonly version: 0; readonly message: string };
+
+export type ToHost =
+  | { readonly type: 'ready' }
+  | { readonly type: 'move marker'; readonly document: string; readonly request: number; readonly frequencyHz: number }
+  /** As typed by the person: `868 MHz`. */
+  | { readonly type: 'type marker'; readonly document: string; readonly request: number; readonly text: string }
+  | { readonly type: 'reveal line'; readonly document: string; readonly line: number }
+  | { readonly type: 'point at element'; readonly document: string; readonly elementId: string | null }
+  | { readonly type: 'step value'; readonly document: string; readonly version: number; readonly elementId: string; readonly direction: 'up' | 'down' }
+  | { readonly type: 'set value'; readonly document: string; readonly version: number; readonly elementId: string; readonly text: string }
+  | { readonly type: 'copy'; readonly document: string; readonly what: 'chart svg' | 'ladder csv' | 'ladder markdown'; readonly text: string }
+  | { readonly type: 'save'; readonly document: string; readonly what: 'chart svg' | 'chart png'; readonly base64: string }
+  | { readonly type: 'pin'; readonly document: string; readonly pinned: boolean }
+  | { readonly type: 'failure'; readonly message: string };
