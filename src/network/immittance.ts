@@ -2,6 +2,7 @@ import { complexArray, type ComplexArray } from './complex';
 import { fileReflection } from './fileReflection';
 import type { Impedance } from './impedance';
 import { partImmittance } from './partImmittance';
+import { forget, knownImmittance, unknownImmittance, writeQuotient, writeRatio } from './ratio';
 
 /**
  * An impedance at n frequencies as a ratio Z = numerator / denominator (Ω over a plain number), so that an open
@@ -15,9 +16,6 @@ export interface Immittance {
   /** Why points are not known, in one short sentence; null where all are. */
   readonly reason: string | null;
 }
-
-/** Ratios whose larger part leaves 1/RATIO_LIMIT … RATIO_LIMIT are rescaled, so that products of many stay finite. */
-const RATIO_LIMIT = 1e30;
 
 /** The impedance at each of `frequencyHz` (Hz, ≥ 0). Points that cannot be told are not known, with the reason. */
 export function sampleImpedance(impedance: Impedance, frequencyHz: Float64Array): Immittance {
@@ -85,34 +83,6 @@ export function impedanceOf(z: Immittance): ComplexArray {
   return impedance;
 }
 
-/** A known immittance of all zeros, to be filled with `writeRatio`. */
-export function knownImmittance(length: number, reason: string | null = null): Immittance {
-  return { numerator: complexArray(length), denominator: complexArray(length), known: new Uint8Array(length).fill(1), reason };
-}
-
-/** Not known anywhere. */
-export function unknownImmittance(length: number, reason: string): Immittance {
-  const result = knownImmittance(length, reason);
-  for (let k = 0; k < length; k++) forget(result, k);
-  return result;
-}
-
-/** Marks point k as not known. */
-export function forget(z: Immittance, k: number): void {
-  z.known[k] = 0;
-  z.numerator.re[k] = z.numerator.im[k] = z.denominator.re[k] = z.denominator.im[k] = NaN;
-}
-
-/** Writes one point, rescaled where it is very large or very small. Not both may be 0. */
-export function writeRatio(z: Immittance, k: number, nRe: number, nIm: number, dRe: number, dIm: number): void {
-  const largest = Math.max(Math.abs(nRe), Math.abs(nIm), Math.abs(dRe), Math.abs(dIm));
-  const factor = largest > RATIO_LIMIT || largest < 1 / RATIO_LIMIT ? 1 / largest : 1;
-  z.numerator.re[k] = nRe * factor;
-  z.numerator.im[k] = nIm * factor;
-  z.denominator.re[k] = dRe * factor;
-  z.denominator.im[k] = dIm * factor;
-}
-
 function constantRatio(length: number, nRe: number, nIm: number, dRe: number, dIm: number): Immittance {
   const result = knownImmittance(length);
   for (let k = 0; k < length; k++) writeRatio(result, k, nRe, nIm, dRe, dIm);
@@ -171,22 +141,4 @@ function sampleTable(table: Extract<Impedance, { form: 'table' }>, frequencyHz: 
   }
   const reason = known.every((point) => point === 1) ? null : 'the table does not reach that frequency';
   return fromReflection(reflection, table.referenceOhm, known, reason);
-}
-
-/** top / bottom by Smith's method; a division by 0 is +∞ + j0. */
-function writeQuotient(into: ComplexArray, k: number, topRe: number, topIm: number, bottomRe: number, bottomIm: number): void {
-  if (bottomRe === 0 && bottomIm === 0) {
-    into.re[k] = Infinity;
-    into.im[k] = 0;
-  } else if (Math.abs(bottomRe) >= Math.abs(bottomIm)) {
-    const r = bottomIm / bottomRe;
-    const d = bottomRe + bottomIm * r;
-    into.re[k] = (topRe + topIm * r) / d;
-    into.im[k] = (topIm - topRe * r) / d;
-  } else {
-    const r = bottomRe / bottomIm;
-    const d = bottomRe * r + bottomIm;
-    into.re[k] = (topRe * r + topIm) / d;
-    into.im[k] = (topIm * r - topRe) / d;
-  }
 }
