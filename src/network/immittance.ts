@@ -89,13 +89,14 @@ function constantRatio(length: number, nRe: number, nIm: number, dRe: number, dI
   return result;
 }
 
-/** Sum of impedances, or of admittances: (n1 d2 + n2 d1)/(d1 d2), or n1 n2/(n1 d2 + n2 d1). No member: a wire, or nothing. */
+/** No member in series is a wire, none in parallel is nothing at all. */
 function combine(members: readonly Impedance[], frequencyHz: Float64Array, how: 'series' | 'parallel'): Immittance {
   if (members.length === 0) return sampleImpedance({ form: how === 'series' ? 'short' : 'open' }, frequencyHz);
-  return members.map((member) => sampleImpedance(member, frequencyHz)).reduce((first, second) => joinTwo(first, second, how));
+  return members.map((member) => sampleImpedance(member, frequencyHz)).reduce((first, second) => joinImmittances(first, second, how));
 }
 
-function joinTwo(first: Immittance, second: Immittance, how: 'series' | 'parallel'): Immittance {
+/** Two impedances one after the other, (n1 d2 + n2 d1)/(d1 d2), or side by side, n1 n2/(n1 d2 + n2 d1). */
+export function joinImmittances(first: Immittance, second: Immittance, how: 'series' | 'parallel'): Immittance {
   const result = knownImmittance(first.known.length, first.reason ?? second.reason);
   const { numerator: n1, denominator: d1 } = first;
   const { numerator: n2, denominator: d2 } = second;
