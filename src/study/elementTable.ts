@@ -1,0 +1,90 @@
+import { elementAbcd, throughElements, type Cascade } from '../network/cascade';
+import type { Complex, ComplexArray } from '../network/complex';
+import type { Element, Orientation } from '../network/element';
+import { impedanceOf, reflectionOf, type Immittance } from '../network/immittance';
+import type { ElementKind, ElementResult } from './evaluation';
+import { orientationOf } from './orientation';
+import { firstMiddle, placeOfBand, stressedBands } from './place';
+import { sampleLoad } from './sampleCase';
+import type { Sampler } from './sampler';
+import { uncoveredElement } from './uncoveredElement';
+import { named } from './obstacles';
+import { worstStress } from './worstStress';
+
+/**
+ * The ladder as a table, from the load to the source: what each element is, and what is seen just after it in the first
+ * case at the middle of the first band; voltage, current and heat are the worst over the judged bands and all cases.
+ */
+export function elementTable(sampler: Sampler): readonly ElementResult[] {
+  const { problem, ladder } = sampler;
+  const frequencyHz = firstMiddle(problem);
+  const point = Float64Array.of(frequencyHz);
+  const firstCase = problem.cases[0];
+  const stress = worstStress(sampler, stressedBands(problem).map(placeOfBand));
+  let seen: Immittance = sampleLoad(firstCase, point);
+  let reason = seen.known[0] ? null : named(firstCase.name === null ? 'load' : `load ${firstCase.name}`, seen.reason ?? 'not known there');
+  return ladder.map((element, at) => {
+    seen = throughElements([element], seen, point);
+    if (reason === null && !seen.known[0]) reason = uncoveredElement([element], frequencyHz) ?? seen.reason ?? 'not known there';
+    const own = ownImmittance(element, point);
+    const after = seen.known[0] === 1;
+    return {
+      name: element.name,
+      orientation: orientationOf(element),
+      ...identity(element),
+      frequencyHz,
+      ...own,
+      impedanceAfterOhm: after ? first(impedanceOf(seen)) : null,
+      reflectionAfter: after ? first(reflectionOf(seen, problem.z0Ohm)) : null,
+      peakVoltageV: stress.elements?.[at].peakVoltageV ?? null,
+      rmsCurrentA: stress.elements?.[at].rmsCurrentA ?? null,
+      dissipationW: stress.elements?.[at].dissipationW ?? null,
+      reason: reason ?? stress.reason,
+    };
+  });
+}
+
+type Identity = Pick<ElementResult, 'kind' | 'value' | 'unit' | 'fitted'>;
+
+const units = { resistor: 'Ω', inductor: 'H', capacitor: 'F' } as const;
+
+function identity(element: Element): Identity {
+  const unvalued = (kind: ElementKind, fitted: boolean): Identity => ({ kind, value: null, unit: null, fitted });
+  switch (element.form) {
+    case 'branch': {
+      if (element.branch.form !== 'part') return unvalued('branch', true);
+      const { kind, value } = element.branch.part;
+      return { kind, value, unit: units[kind], fitted: true };
+    }
+    case 'bridge': return { kind: 'bridge', value: 0, unit: 'Ω', fitted: false };
+    case 'not fitted': return unvalued(element.kind ?? 'branch', false);
+    case 'line':
+    case 'stub': return { kind: element.form, value: element.line.lengthM, unit: 'm', fitted: true };
+    case 'transformer':
+    case 'block': return unvalued(element.form, true);
+    case 'unsolved': return unvalued(element.kind ?? 'branch', false);
+    case 'faulty': return unvalued(element.orientation === 'through' ? 'block' : 'branch', false);
+  }
+}
+
+/** Reactance and susceptance of what stands alone in series or across; infinite ones, and those of two-ports, are null. */
+function ownImmittance(element: Element, point: Float64Array): { reactanceOhm: number | null; susceptanceS: number | null } {
+  const orientation = orientationOf(element);
+  if (orientation === 'through') return { reactanceOhm: null, susceptanceS: null };
+  const abcd = elementAbcd(element, point);
+  if (!abcd.known[0]) return { reactanceOhm: null, susceptanceS: null };
+  const [numerator, denominator] = impedanceEntries(abcd, orientation);
+  return { reactanceOhm: imaginaryOf(numerator, denominator), susceptanceS: imaginaryOf(denominator, numerator) };
+}
+
+/** Z = b/d of a series element, a/c of one across. */
+const impedanceEntries = (abcd: Cascade, orientation: Orientation): readonly [Complex, Complex] =>
+  orientation === 'series' ? [first(abcd.b), first(abcd.d)] : [first(abcd.a), first(abcd.c)];
+
+function imaginaryOf(top: Complex, bottom: Complex): number | null {
+  const size = bottom.re * bottom.re + bottom.im * bottom.im;
+  const value = (top.im * bottom.re - top.re * bottom.im) / size;
+  return Number.isFinite(value) ? value + 0 : null;
+}
+
+const first = (values: ComplexArray): Complex => ({ re: values.re[0], im: values.im[0] });

@@ -1,0 +1,18 @@
+/** Points of an arc on the chart. */
+export const arcPoints = 33;
+/** A line's arc has a point for so many degrees of its turn (twice its electrical length) … */
+export const lineArcStepDeg = 5;
+/** … up to so many points. */
+export const lineArcPointsAtMost = 361;
+
+/** A bandwidth is looked for from the band's middle divided by this to the middle times this. */
+export const bandwidthReach = 100;
+/** Points looked at in one go while stepping outwards, and while closing in on an edge. */
+export const bandwidthBlockPoints = 64;
+/** Width of the first block as a natural logarithm of frequency; each next one is as wide as all before it. */
+export const bandwidthFirstBlock = 0.005;
+/** An edge is closed in on until the bracket is this narrow relative to the frequency. */
+export const bandwidthPrecision = 1e-10;
+
+/** |Γ| above 1 by no more than this is a rounded 1. */
+export const totalReflectionSlack = 1e-9;

@@ -1,0 +1,24 @@
+import { mismatchLossDb, vswr } from '../network/figures';
+import { totalReflectionSlack } from './limits';
+
+/** Why VSWR and mismatch loss have no value where more comes back than was sent. */
+export const aboveTotal = 'the reflection is above 1, where VSWR and mismatch loss have no value';
+
+/** VSWR of |Γ|: infinite at total reflection (within rounding), NaN above it. */
+export function vswrOf(magnitude: number): number {
+  return magnitude < 1 ? vswr(magnitude) : magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;
+}
+
+/** Mismatch loss of |Γ| in dB: infinite at total reflection (within rounding), NaN above it. */
+export function mismatchLossOf(magnitude: number): number {
+  return magnitude < 1 ? mismatchLossDb(magnitude) : magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;
+}
+
+/** |Γ| of a VSWR (≥ 1, may be infinite). Source: Pozar, Microwave Engineering, §2.4. */
+export const reflectionOfVswr = (ratio: number): number => (ratio === Infinity ? 1 : (ratio - 1) / (ratio + 1));
+
+/** |Γ| of a mismatch loss in dB (≥ 0, may be infinite): √(1 − 10^(−L/10)). */
+export const reflectionOfMismatchLoss = (lossDb: number): number => Math.sqrt(-Math.expm1((-lossDb * Math.LN10) / 10));
+
+/** |Γ| of a return loss in dB (may be infinite). */
+export const reflectionOfReturnLoss = (lossDb: number): number => 10 ** (-lossDb / 20);

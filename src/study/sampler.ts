@@ -1,0 +1,141 @@
+import { cascade, throughElements, type Cascade } from '../network/cascade';
+import { complexArray, type ComplexArray } from '../network/complex';
+import type { Element } from '../network/element';
+import { efficiency, powerWaveReflection, transducerGain } from '../network/figures';
+import { sampleImpedance, type Immittance } from '../network/immittance';
+import type { Impedance } from '../network/impedance';
+import { ladderStress, type Stress } from './ladderStress';
+import { named } from './obstacles';
+import type { Place } from './place';
+import type { Problem } from './problem';
+import { sampleLoad, sampleSource } from './sampleCase';
+import { uncoveredElement } from './uncoveredElement';
+
+/** One load through the ladder at the frequencies of one place. Figures are worked out when first asked for. */
+export interface Trace {
+  /** Null for a single load, and for a goal's own (`into`). */
+  readonly caseName: string | null;
+  readonly frequencyHz: Float64Array;
+  readonly load: Immittance;
+  readonly source: Immittance;
+  readonly network: Cascade;
+  /** Looking into the ladder from the source. */
+  readonly input: Immittance;
+  /** 0 where the load, the source or an element is not known. */
+  readonly known: Uint8Array;
+  readonly firstUnknown: number | null;
+  /** Why the first point that is not known is so. */
+  readonly reason: string | null;
+  /** Against the source, power waves. */
+  reflection(): ComplexArray;
+  /** Transducer gain as a power ratio. */
+  gain(): Float64Array;
+  /** 0 … 1; NaN where no power enters the ladder. */
+  efficiency(): Float64Array;
+  /** Of each element, from the load on, and last of the load, at the power available. */
+  stress(): readonly Stress[];
+}
+
+/** Samples of one problem with one ladder, shared between everything that asks for the same place and load. */
+export interface Sampler {
+  readonly problem: Problem;
+  readonly ladder: readonly Element[];
+  /** `load`: a case by its index, or an impedance instead of every case. */
+  trace(place: Place, load: number | Impedance): Trace;
+}
+
+interface Grid {
+  readonly network: Cascade;
+  readonly source: Immittance;
+  readonly traces: Map<number | Impedance, Trace>;
+}
+
+export function sampler(problem: Problem, ladder: readonly Element[]): Sampler {
+  const grids = new Map<string, Grid>();
+  const gridOf = (place: Place): Grid => {
+    const found = place.key === null ? undefined : grids.get(place.key);
+    if (found) return found;
+    const grid: Grid = {
+      network: cascade(ladder, place.frequencyHz),
+      source: sampleSource(problem.source, problem.bands, place.frequencyHz, place.band),
+      traces: new Map(),
+    };
+    if (place.key !== null) grids.set(place.key, grid);
+    return grid;
+  };
+  return {
+    problem,
+    ladder,
+    trace(place, load) {
+      const grid = gridOf(place);
+      const found = grid.traces.get(load);
+      if (found) return found;
+      const made = makeTrace(problem, ladder, place, grid, load);
+      grid.traces.set(load, made);
+      return made;
+    },
+  };
+}
+
+function makeTrace(problem: Problem, ladder: readonly Element[], place: Place, grid: Grid, which: number | Impedance): Trace {
+  const { frequencyHz } = place;
+  const { network, source } = grid;
+  const ofCase = typeof which === 'number';
+  const caseName = ofCase ? problem.cases[which].name : null;
+  const load = ofCase ? sampleLoad(problem.cases[which], frequencyHz) : sampleImpedance(which, frequencyHz);
+  const known = new Uint8Array(frequencyHz.length);
+  let firstUnknown: number | null = null;
+  for (let k = 0; k < known.length; k++) {
+    known[k] = load.known[k] & network.known[k] & source.known[k];
+    if (!known[k] && firstUnknown === null) firstUnknown = k;
+  }
+  const input = inputOf(network, load, ladder);
+  const loadName = caseName === null ? 'load' : `load ${caseName}`;
+  return {
+    caseName, frequencyHz, load, source, network, input, known, firstUnknown,
+    reason: firstUnknown === null ? null : reasonAt(firstUnknown, loadName, load, source, ladder, network),
+    reflection: once(() => powerWaveReflection(input, source)),
+    gain: once(() => gainOf(network, source, load)),
+    efficiency: once(() => efficiency(network, load)),
+    stress: once(() => ladderStress(ladder, load, source, frequencyHz, problem.availablePowerW)),
+  };
+}
+
+/** (a N + b D) / (c N + d D), element by element where that is 0/0 (an open behind an open). */
+function inputOf(network: Cascade, load: Immittance, ladder: readonly Element[]): Immittance {
+  const { a, b, c, d } = network;
+  const { numerator: n, denominator: e } = load;
+  const length = n.re.length;
+  const numerator = complexArray(length);
+  const denominator = complexArray(length);
+  const known = new Uint8Array(length);
+  for (let k = 0; k < length; k++) {
+    const nRe = n.re[k], nIm = n.im[k], dRe = e.re[k], dIm = e.im[k];
+    numerator.re[k] = a.re[k] * nRe - a.im[k] * nIm + b.re[k] * dRe - b.im[k] * dIm;
+    numerator.im[k] = a.re[k] * nIm + a.im[k] * nRe + b.re[k] * dIm + b.im[k] * dRe;
+    denominator.re[k] = c.re[k] * nRe - c.im[k] * nIm + d.re[k] * dRe - d.im[k] * dIm;
+    denominator.im[k] = c.re[k] * nIm + c.im[k] * nRe + d.re[k] * dIm + d.im[k] * dRe;
+    known[k] = network.known[k] & load.known[k];
+    const empty = numerator.re[k] === 0 && numerator.im[k] === 0 && denominator.re[k] === 0 && denominator.im[k] === 0;
+    if (known[k] && empty) return throughElements(ladder, load, network.frequencyHz);
+  }
+  return { numerator, denominator, known, reason: load.reason ?? network.reason };
+}
+
+/** An element that lets nothing through has a gain of 0, whatever stands behind it. */
+function gainOf(network: Cascade, source: Immittance, load: Immittance): Float64Array {
+  const gain = transducerGain(network, source, load);
+  for (let k = 0; k < gain.length; k++) if (network.scale.re[k] === 0 && network.scale.im[k] === 0) gain[k] = 0;
+  return gain;
+}
+
+function reasonAt(k: number, loadName: string, load: Immittance, source: Immittance, ladder: readonly Element[], network: Cascade): string {
+  if (!load.known[k]) return named(loadName, load.reason ?? 'not known there');
+  if (network.known[k]) return named('source', source.reason ?? 'not known there');
+  return uncoveredElement(ladder, network.frequencyHz[k]) ?? network.reason ?? 'the ladder is not known there';
+}
+
+function once<T>(make: () => T): () => T {
+  let made: { readonly value: T } | null = null;
+  return () => (made ??= { value: make() }).value;
+}
