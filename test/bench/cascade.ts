@@ -1,0 +1,155 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { abs, add, complex, divide, matrix, multiply, subtract, type Complex, type Matrix } from 'mathjs';
+import type { Element } from '../../src/network/element';
+import { sampleImpedance } from '../../src/network/immittance';
+import { ladderKernel } from '../../src/network/ladderKernel';
+import { idealPart } from '../../src/network/part';
+import { atLeast, atMost, type BenchRow } from './benchRow';
+import { medianTimeNs } from './medianTime';
+
+// A ladder of 8 lossy parts × 1,001 points, values changed at each call, |Γ| and transducer gain written at each point.
+
+const POINTS = 1001;
+const RUNS = 9;
+const frequencyHz = Float64Array.from({ length: POINTS }, (_, k) => 700e6 + (500e6 * k) / (POINTS - 1));
+
+interface Row {
+  readonly orientation: 'series' | 'shunt';
+  readonly kind: 'inductor' | 'capacitor';
+  readonly value: number;
+}
+
+const rows: readonly Row[] = [
+  { orientation: 'series', kind: 'inductor', value: 6.8e-9 },
+  { orientation: 'shunt', kind: 'capacitor', value: 2.2e-12 },
+  { orientation: 'series', kind: 'inductor', value: 4.7e-9 },
+  { orientation: 'shunt', kind: 'capacitor', value: 3.3e-12 },
+  { orientation: 'series', kind: 'capacitor', value: 22e-12 },
+  { orientation: 'shunt', kind: 'inductor', value: 12e-9 },
+  { orientation: 'series', kind: 'inductor', value: 3.9e-9 },
+  { orientation: 'shunt', kind: 'capacitor', value: 1.5e-12 },
+];
+
+const Q_AT_HZ = 900e6;
+const qOf = (kind: Row['kind']): number => (kind === 'inductor' ? 40 : 180);
+
+interface Result {
+  readonly timeNs: number;
+  readonly magnitude: ArrayLike<number>;
+  readonly gain: ArrayLike<number>;
+}
+
+export function bench(): BenchRow[] {
+  const ours = withKernel();
+  const name = `cascade of ${rows.length} elements × ${POINTS} points`;
+  const found: BenchRow[] = [];
+  const library = withMatrixLibrary();
+  check(ours, library, 'mathjs');
+  found.push(atLeast(name, library.timeNs / ours.timeNs, '× faster than mathjs', 1000));
+  const script = withNumpy();
+  if (script !== null) {
+    check(ours, script, 'numpy');
+    found.push(atLeast(name, script.timeNs / ours.timeNs, '× faster than numpy', 3));
+  }
+  const compiled = withCompiler();
+  if (compiled !== null) {
+    check(ours, compiled, 'C++');
+    found.push(atMost(name, ours.timeNs / compiled.timeNs, '× the time of C++ -O3', 4));
+  }
+  return found;
+}
+
+function withKernel(): Result {
+  const ladder = rows.map(({ orientation, kind, value }, i): Element => ({
+    form: 'branch', name: `X${i}`, orientation, pair: false,
+    branch: { form: 'part', part: { ...idealPart(kind, value), loss: { law: 'skin effect', q: qOf(kind), atHz: Q_AT_HZ } } },
+  }));
+  const source = sampleImpedance({ form: 'constant', impedanceOhm: { re: 50, im: 0 } }, frequencyHz);
+  const capacitanceF = 1 / (2 * Math.PI * 868e6 * 37);
+  const load = sampleImpedance({
+    form: 'series',
+    members: [{ form: 'constant', impedanceOhm: { re: 18, im: 0 } }, { form: 'part', part: idealPart('capacitor', capacitanceF) }],
+  }, frequencyHz);
+  const kernel = ladderKernel(ladder, frequencyHz, source, load);
+  const timeNs = medianTimeNs((call) => {
+    kernel.setValue(0, rows[0].value * (1 + 1e-6 * call));
+    kernel.evaluate();
+  }, { runs: RUNS, leastMs: 100 });
+  kernel.setValue(0, rows[0].value);
+  kernel.evaluate();
+  return { timeNs, magnitude: kernel.reflectionMagnitude, gain: kernel.gain };
+}
+
+/** The textbook way: a 2×2 matrix for each element at each frequency, multiplied. */
+function withMatrixLibrary(): Result {
+  const magnitude = new Float64Array(POINTS);
+  const gain = new Float64Array(POINTS);
+  const timeNs = medianTimeNs(() => {
+    for (let k = 0; k < POINTS; k++) {
+      const omega = 2 * Math.PI * frequencyHz[k];
+      let product: Matrix = matrix([[complex(1, 0), complex(0, 0)], [complex(0, 0), complex(1, 0)]] as never);
+      for (const { orientation, kind, value } of rows) {
+        const stated = 2 * Math.PI * Q_AT_HZ;
+        const resistance = ((kind === 'inductor' ? stated * value : 1 / (stated * value)) / qOf(kind)) * Math.sqrt(frequencyHz[k] / Q_AT_HZ);
+        const z = complex(resistance, kind === 'inductor' ? omega * value : -1 / (omega * value));
+        const one = orientation === 'series' ? [[complex(1, 0), z], [complex(0, 0), complex(1, 0)]] : [[complex(1, 0), complex(0, 0)], [divide(1, z), complex(1, 0)]];
+        product = multiply(matrix(one as never), product) as Matrix;
+      }
+      const load = complex(18, (-37 * 868e6) / frequencyHz[k]);
+      const column = multiply(product, matrix([[load], [complex(1, 0)]] as never)) as Matrix;
+      const v = column.get([0, 0]) as unknown as Complex;
+      const i = column.get([1, 0]) as unknown as Complex;
+      const bottom = add(v, multiply(50, i)) as Complex;
+      magnitude[k] = Number(abs(divide(subtract(v, multiply(50, i)), bottom) as Complex));
+      gain[k] = (4 * 50 * 18) / Number(abs(bottom)) ** 2;
+    }
+  }, { runs: 3, leastMs: 1 });
+  return { timeNs, magnitude, gain };
+}
+
+function withNumpy(): Result | null {
+  if (!runs('python3', ['-c', 'import numpy'])) return null;
+  return parse(execFileSync('python3', [besides('cascade.py'), String(RUNS), '500'], { encoding: 'utf8' }));
+}
+
+function withCompiler(): Result | null {
+  if (!runs('g++', ['--version'])) return null;
+  const folder = mkdtempSync(join(tmpdir(), 'ohmward-bench-'));
+  try {
+    const program = join(folder, 'cascade');
+    execFileSync('g++', ['-O3', '-o', program, besides('cascade.cpp')]);
+    return parse(execFileSync(program, [String(RUNS), '2000'], { encoding: 'utf8' }));
+  } finally {
+    rmSync(folder, { recursive: true, force: true });
+  }
+}
+
+const besides = (file: string): string => fileURLToPath(new URL(file, import.meta.url));
+
+/** Whether a program is there and says yes; a bench whose program is not installed is left out. */
+function runs(program: string, args: readonly string[]): boolean {
+  try {
+    execFileSync(program, args, { stdio: 'ignore' });
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+function parse(output: string): Result {
+  const [time, ...points] = output.trim().split('\n');
+  const pairs = points.map((line) => line.split(' ').map(Number));
+  return { timeNs: Number(time), magnitude: pairs.map(([m]) => m), gain: pairs.map(([, g]) => g) };
+}
+
+/** Times of different results would say nothing. */
+function check(ours: Result, other: Result, who: string): void {
+  for (let k = 0; k < POINTS; k++) {
+    const difference = Math.max(Math.abs(ours.magnitude[k] - other.magnitude[k]), Math.abs(ours.gain[k] - other.gain[k]));
+    if (!(difference < 1e-9)) throw new Error(`${who} gets another result at ${frequencyHz[k]} Hz: off by ${difference}`);
+  }
+}
