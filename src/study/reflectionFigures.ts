@@ -5,13 +5,14 @@ import { totalReflectionSlack } from './limits';
 export const aboveTotal = 'the reflection is above 1, where VSWR and mismatch loss have no value';
 
 /** VSWR of |Γ|: infinite at total reflection (within rounding), NaN above it. */
-export function vswrOf(magnitude: number): number {
-  return magnitude < 1 ? vswr(magnitude) : magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;
-}
+export const vswrOf = (magnitude: number): number => totalOr(magnitude, vswr);
 
 /** Mismatch loss of |Γ| in dB: infinite at total reflection (within rounding), NaN above it. */
-export function mismatchLossOf(magnitude: number): number {
-  return magnitude < 1 ? mismatchLossDb(magnitude) : magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;
+export const mismatchLossOf = (magnitude: number): number => totalOr(magnitude, mismatchLossDb);
+
+function totalOr(magnitude: number, figure: (magnitude: number) => number): number {
+  if (magnitude < 1 - totalReflectionSlack) return figure(magnitude);
+  return magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;
 }
 
 /** |Γ| of a VSWR (≥ 1, may be infinite). Source: Pozar, Microwave Engineering, §2.4. */

@@ -1,9 +1,10 @@
-import { cascade, throughElements, type Cascade } from '../network/cascade';
-import { complexArray, type ComplexArray } from '../network/complex';
+import { cascade, type Cascade } from '../network/cascade';
+import type { ComplexArray } from '../network/complex';
 import type { Element } from '../network/element';
 import { efficiency, powerWaveReflection, transducerGain } from '../network/figures';
 import { sampleImpedance, type Immittance } from '../network/immittance';
 import type { Impedance } from '../network/impedance';
+import { throughNetwork } from '../network/throughElements';
 import { ladderStress, type Stress } from './ladderStress';
 import { named } from './obstacles';
 import type { Place } from './place';
@@ -89,44 +90,16 @@ function makeTrace(problem: Problem, ladder: readonly Element[], place: Place, g
     known[k] = load.known[k] & network.known[k] & source.known[k];
     if (!known[k] && firstUnknown === null) firstUnknown = k;
   }
-  const input = inputOf(network, load, ladder);
+  const input = throughNetwork(network, load);
   const loadName = caseName === null ? 'load' : `load ${caseName}`;
   return {
     caseName, frequencyHz, load, source, network, input, known, firstUnknown,
     reason: firstUnknown === null ? null : reasonAt(firstUnknown, loadName, load, source, ladder, network),
     reflection: once(() => powerWaveReflection(input, source)),
-    gain: once(() => gainOf(network, source, load)),
+    gain: once(() => transducerGain(network, source, load)),
     efficiency: once(() => efficiency(network, load)),
     stress: once(() => ladderStress(ladder, load, source, frequencyHz, problem.availablePowerW)),
   };
-}
-
-/** (a N + b D) / (c N + d D), element by element where that is 0/0 (an open behind an open). */
-function inputOf(network: Cascade, load: Immittance, ladder: readonly Element[]): Immittance {
-  const { a, b, c, d } = network;
-  const { numerator: n, denominator: e } = load;
-  const length = n.re.length;
-  const numerator = complexArray(length);
-  const denominator = complexArray(length);
-  const known = new Uint8Array(length);
-  for (let k = 0; k < length; k++) {
-    const nRe = n.re[k], nIm = n.im[k], dRe = e.re[k], dIm = e.im[k];
-    numerator.re[k] = a.re[k] * nRe - a.im[k] * nIm + b.re[k] * dRe - b.im[k] * dIm;
-    numerator.im[k] = a.re[k] * nIm + a.im[k] * nRe + b.re[k] * dIm + b.im[k] * dRe;
-    denominator.re[k] = c.re[k] * nRe - c.im[k] * nIm + d.re[k] * dRe - d.im[k] * dIm;
-    denominator.im[k] = c.re[k] * nIm + c.im[k] * nRe + d.re[k] * dIm + d.im[k] * dRe;
-    known[k] = network.known[k] & load.known[k];
-    const empty = numerator.re[k] === 0 && numerator.im[k] === 0 && denominator.re[k] === 0 && denominator.im[k] === 0;
-    if (known[k] && empty) return throughElements(ladder, load, network.frequencyHz);
-  }
-  return { numerator, denominator, known, reason: load.reason ?? network.reason };
-}
-
-/** An element that lets nothing through has a gain of 0, whatever stands behind it. */
-function gainOf(network: Cascade, source: Immittance, load: Immittance): Float64Array {
-  const gain = transducerGain(network, source, load);
-  for (let k = 0; k < gain.length; k++) if (network.scale.re[k] === 0 && network.scale.im[k] === 0) gain[k] = 0;
-  return gain;
 }
 
 function reasonAt(k: number, loadName: string, load: Immittance, source: Immittance, ladder: readonly Element[], network: Cascade): string {

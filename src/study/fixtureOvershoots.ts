@@ -1,5 +1,5 @@
 import { reflectionOf } from '../network/immittance';
-import { totalReflectionSlack } from './limits';
+import { fixtureOvershootSlack } from './limits';
 import type { Problem } from './problem';
 import { sampleLoad } from './sampleCase';
 
@@ -19,7 +19,7 @@ export function fixtureOvershoots(problem: Pick<Problem, 'cases' | 'z0Ohm'>): re
     if (loadCase.load.form !== 'file' || loadCase.fixture.length === 0) return [];
     const { frequencyHz } = loadCase.load.data;
     const after = largestReflection(loadCase, frequencyHz, problem.z0Ohm);
-    if (!(after.reflection > 1 + totalReflectionSlack)) return [];
+    if (!(after.reflection > 1 + fixtureOvershootSlack)) return [];
     const before = largestReflection({ ...loadCase, fixture: [] }, frequencyHz, problem.z0Ohm);
     return [{ caseName: loadCase.name, ...after, reflectionBefore: before.reflection }];
   });
