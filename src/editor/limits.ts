@@ -1,0 +1,23 @@
+/** A file of measurements or parts larger than this is not read by the editor. */
+export const MAX_FILE_BYTES = 256 * 1024 * 1024;
+
+/** Bytes of a file between two pauses in which the editor can do other things. */
+export const READ_CHUNK_BYTES = 1024 * 1024;
+
+/** Names that one pattern (`files vendor/*.s2p`) may stand for. */
+export const MAX_PATTERN_FILES = 2_000;
+
+/** Rounds of loading: the description's files, then those that a drawer names; more would be a circle. */
+export const MAX_LOADING_ROUNDS = 4;
+
+/** Files of one description. */
+export const MAX_FILES = 4_000;
+
+/** Folders that are watched at the same time. */
+export const MAX_WATCHED_FOLDERS = 64;
+
+/** Where one evaluation takes longer than this, the next one waits as long as the last took, so that typing stays smooth. */
+export const SMOOTH_STUDY_MS = 30;
+
+/** No evaluation waits longer than this for a pause in the typing. */
+export const MAX_STUDY_DELAY_MS = 400;

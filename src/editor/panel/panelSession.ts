@@ -1,0 +1,220 @@
+import * as vscode from 'vscode';
+import { elementAt, markerView, panelView, readMarkerText } from '../../assistance/panelView';
+import { setValue, steppedValue } from '../../assistance/steppedValue';
+import { lineMap } from '../../base/lineMap';
+import { decodeToHost } from '../../messages/decodePanel';
+import { pageHtml } from '../../messages/pageHtml';
+import type { ProblemView, ToHost, ToPage } from '../../messages/panel';
+import type { DocumentStudies, Study } from '../documentStudies';
+import type { Log } from '../log';
+import { copyText, savePicture } from './exports';
+import type { ElementHighlight } from './elementHighlight';
+import type { ValueEdits } from './valueEdits';
+
+export interface PanelServices {
+  readonly extensionUri: vscode.Uri;
+  readonly studies: DocumentStudies;
+  readonly edits: ValueEdits;
+  readonly highlight: ElementHighlight;
+  readonly log: Log;
+}
+
+/** What is kept of a panel over a reload of the window. */
+export interface PanelState {
+  /** The description's address; null where none was shown yet. */
+  document: string | null;
+  pinned: boolean;
+  markerHz: number | null;
+}
+
+/** One panel: what it shows, and what its page asks for. */
+export interface PanelSession {
+  readonly panel: vscode.WebviewPanel;
+  readonly state: Readonly<PanelState>;
+  show(document: vscode.TextDocument | null): void;
+  setPinned(pinned: boolean): void;
+  /** The cursor in the description's editor. */
+  cursorAt(document: vscode.TextDocument, offset: number): void;
+  readonly onDidChangeState: vscode.Event<void>;
+}
+
+/** An evaluation that takes longer than this marks the picture as old. */
+const STALE_AFTER_MS = 150;
+
+const NOTHING = 'Open a match description (a file that ends in .match.yaml), and its picture appears here.';
+
+function freshNonce(): string {
+  const bytes = crypto.getRandomValues(new Uint8Array(18));
+  return btoa(String.fromCharCode(...bytes)).replace(/\+/g, '-').replace(/\//g, '_');
+}
+
+const fileNameOf = (document: vscode.TextDocument) => document.uri.path.split('/').at(-1) ?? '';
+
+function problemsOf({ text, assessment }: Study): ProblemView[] {
+  const lines = lineMap(text);
+  return assessment.diagnostics.map(({ severity, message, span }) => ({ severity, message, line: lines.positionAt(span.start).line }));
+}
+
+async function revealLine(document: vscode.TextDocument, line: number): Promise<void> {
+  if (line >= document.lineCount) return;
+  const at = document.lineAt(line).range;
+  const start = new vscode.Position(line, document.lineAt(line).firstNonWhitespaceCharacterIndex);
+  const column = vscode.window.visibleTextEditors.find((editor) => editor.document === document)?.viewColumn ?? vscode.ViewColumn.One;
+  const editor = await vscode.window.showTextDocument(document, { viewColumn: column, selection: new vscode.Range(start, start) });
+  editor.revealRange(at, vscode.TextEditorRevealType.InCenterIfOutsideViewport);
+}
+
+export function createPanelSession(panel: vscode.WebviewPanel, services: PanelServices, initial: PanelState): PanelSession {
+  const { studies, edits, highlight, log } = services;
+  const state: PanelState = { ...initial };
+  const changed = new vscode.EventEmitter<void>();
+  let shown: vscode.TextDocument | null = null;
+  let staleTimer: ReturnType<typeof setTimeout> | undefined;
+
+  const send = (message: ToPage) => void panel.webview.postMessage(message).then(undefined, (error: unknown) => log.failure('telling the panel', error));
+  const idOf = (document: vscode.TextDocument) => document.uri.toString();
+
+  const sendStudy = (study: Study) => {
+    clearTimeout(staleTimer);
+    const { document, version, assessment } = study;
+    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz });
+    if (view !== null) send({ type: 'view', document: idOf(document), version, view });
+    else send({ type: 'stale', document: idOf(document), version, reason: 'The text cannot be evaluated as it is.', problems: problemsOf(study) });
+  };
+  const sendAll = () => {
+    if (shown === null) {
+      send({ type: 'nothing', document: '', version: 0, message: NOTHING });
+      return;
+    }
+    const study = studies.latest(shown);
+    if (study) sendStudy(study);
+    else void studies.current(shown); // it comes by itself when it is finished
+  };
+  const show = (document: vscode.TextDocument | null) => {
+    if (document === shown) return;
+    shown = document;
+    highlight.clear();
+    panel.title = document === null ? 'Ohmward' : `Ohmward: ${fileNameOf(document)}`;
+    if (document !== null && state.document !== idOf(document)) {
+      state.document = idOf(document);
+      state.markerHz = null;
+      changed.fire();
+    }
+    sendAll();
+  };
+  const setPinned = (pinned: boolean) => {
+    if (state.pinned === pinned) return;
+    state.pinned = pinned;
+    changed.fire();
+    sendAll();
+  };
+
+  const moveMarker = (document: vscode.TextDocument, request: number, frequencyHz: number | { refusal: string }) => {
+    const study = studies.latest(document);
+    const answer = (marker: ReturnType<typeof markerView>, refusal: string | null) =>
+      send({ type: 'marker', document: idOf(document), version: study?.version ?? document.version, request, marker, refusal });
+    if (typeof frequencyHz !== 'number') {
+      answer(null, frequencyHz.refusal);
+    } else {
+      const marker = study && markerView(study.assessment, frequencyHz);
+      if (marker) {
+        state.markerHz = frequencyHz;
+        changed.fire();
+      }
+      answer(marker, marker ? null : 'Nothing is known at this frequency.');
+    }
+  };
+
+  const handle = async (message: ToHost): Promise<void> => {
+    if (message.type === 'ready') {
+      sendAll();
+      return;
+    }
+    if (message.type === 'failure') {
+      log.failure('the panel’s page', new Error(message.message));
+      return;
+    }
+    const document = shown;
+    if (document === null || message.document !== idOf(document) || document.isClosed) return;
+    switch (message.type) {
+      case 'move marker':
+        moveMarker(document, message.request, message.frequencyHz);
+        break;
+      case 'type marker':
+        moveMarker(document, message.request, readMarkerText(message.text));
+        break;
+      case 'reveal line':
+        await revealLine(document, message.line);
+        break;
+      case 'point at element': {
+        const study = studies.latest(document);
+        if (study) highlight.show(study, message.elementId);
+        break;
+      }
+      case 'step value':
+        await edits.apply(document, (assessment) => steppedValue(assessment, message.elementId, message.direction));
+        break;
+      case 'set value':
+        await edits.apply(document, (assessment) => setValue(assessment, message.elementId, message.text));
+        break;
+      case 'copy':
+        await copyText(message.text);
+        break;
+      case 'save':
+        await savePicture(document, message);
+        break;
+      case 'pin':
+        setPinned(message.pinned);
+        break;
+    }
+  };
+
+  const dist = vscode.Uri.joinPath(services.extensionUri, 'dist');
+  panel.webview.options = { enableScripts: true, localResourceRoots: [dist] };
+  const icon = (theme: string) => vscode.Uri.joinPath(services.extensionUri, 'media', 'icons', `panel-${theme}.svg`);
+  panel.iconPath = { light: icon('light'), dark: icon('dark') };
+  const subscriptions = vscode.Disposable.from(
+    changed,
+    panel.webview.onDidReceiveMessage((raw: unknown) => {
+      const message = decodeToHost(raw);
+      if (message === null) {
+        log.failure('the panel’s page', new Error('a message that is none was dropped'));
+        return;
+      }
+      handle(message).catch((error: unknown) => log.failure(`the panel: ${message.type}`, error));
+    }),
+    studies.onDidFinish((study) => {
+      if (study.document === shown) sendStudy(study);
+    }),
+    studies.onDidFail(({ document, message }) => {
+      if (document === shown) send({ type: 'stale', document: idOf(document), version: document.version, reason: message, problems: [] });
+    }),
+    vscode.workspace.onDidChangeTextDocument(({ document, contentChanges }) => {
+      if (document !== shown || contentChanges.length === 0) return;
+      clearTimeout(staleTimer);
+      staleTimer = setTimeout(() => send({ type: 'stale', document: idOf(document), version: document.version, reason: null, problems: [] }), STALE_AFTER_MS);
+    }),
+  );
+  panel.onDidDispose(() => {
+    clearTimeout(staleTimer);
+    highlight.clear();
+    subscriptions.dispose();
+  });
+  panel.webview.html = pageHtml({
+    cspSource: panel.webview.cspSource,
+    nonce: freshNonce(),
+    scriptUri: panel.webview.asWebviewUri(vscode.Uri.joinPath(dist, 'webview.js')).toString(),
+    styleUri: panel.webview.asWebviewUri(vscode.Uri.joinPath(dist, 'webview.css')).toString(),
+  });
+
+  return {
+    panel, state, show, setPinned,
+    cursorAt(document, offset) {
+      const study = studies.latest(document);
+      if (document !== shown || study?.version !== document.version) return;
+      const { elementId, goalId } = elementAt(study.assessment, offset);
+      send({ type: 'cursor', document: idOf(document), version: study.version, elementId, goalId });
+    },
+    onDidChangeState: changed.event,
+  };
+}

@@ -1,0 +1,40 @@
+import * as vscode from 'vscode';
+import { registerCommands } from './commands';
+import { publishDiagnostics } from './diagnostics';
+import { createDocumentStudies } from './documentStudies';
+import { createFileStore } from './fileStore';
+import type { Assistance } from './guarded';
+import { createLog } from './log';
+import { createElementHighlight } from './panel/elementHighlight';
+import { createPanelHost } from './panel/panelHost';
+import { createValueEdits } from './panel/valueEdits';
+import { registerCompletion } from './providers/completion';
+import { registerFixes } from './providers/fixes';
+import { registerFormatting } from './providers/formatting';
+import { registerHover } from './providers/hover';
+import { registerInlayHints } from './providers/inlayHints';
+import { registerLinks } from './providers/links';
+import { registerNames } from './providers/names';
+import { registerOutline } from './providers/outline';
+import { createStatusItem } from './statusItem';
+
+/** Starts the extension; the same in both extension hosts, with Node and without. */
+export function start(context: vscode.ExtensionContext): void {
+  const log = createLog();
+  const store = createFileStore(log);
+  const studies = createDocumentStudies(store, log);
+  const edits = createValueEdits(studies, log);
+  const highlight = createElementHighlight();
+  const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, edits, highlight, log });
+  const assistance: Assistance = { studies, log };
+  const register = [
+    registerHover, registerInlayHints, registerLinks, registerOutline, registerNames, registerCompletion, registerFixes, registerFormatting,
+  ];
+  context.subscriptions.push(
+    log, store, studies, highlight, panels,
+    publishDiagnostics(studies),
+    createStatusItem(studies),
+    registerCommands({ studies, panels, edits, log }),
+    ...register.map((feature) => feature(assistance)),
+  );
+}
