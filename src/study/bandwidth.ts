@@ -1,9 +1,8 @@
 import { casesOf } from './casesOf';
 import type { Goal, GoalResult } from './goal';
-import { bandwidthBlockPoints, bandwidthFirstBlock } from './limits';
 import { middleOf, placesOf } from './place';
 import type { Sampler, Trace } from './sampler';
-import { spanAround, type Curve, type Edge, type SpanAround } from './spanAround';
+import { largestAround, spanAround, type Curve, type Edge, type SpanAround } from './spanAround';
 import { holds, judged, notKnown, wantsLarge } from './verdict';
 import { worseOf, type Worst } from './worst';
 
@@ -19,7 +18,7 @@ interface Bandwidth {
 /**
  * Bandwidth in Hz: the unbroken span around the band's middle (geometric mean of its ends) in which the return loss is at
  * least 10 dB; or, `at N dB`, in which the gain is within N dB of its largest value there. 0 where the middle itself is
- * outside. Edges are found to 1e-10 of the frequency, far beyond the points of the band, within what is known of load and
+ * outside. Edges are found to 1e-9 of the frequency, far beyond the points of the band, within what is known of load and
  * ladder; where an edge is not reached, the value is a lower bound and the reason says so: enough for a lower limit that
  * it meets, never enough for an upper one.
  */
@@ -57,34 +56,10 @@ function bandwidthAround(goal: Goal, middleHz: number, traceAt: (frequencyHz: Fl
     const trace = traceAt(frequencyHz);
     return trace.gain().map((value, k) => (trace.known[k] ? value : NaN));
   };
-  return widthOf(spanBelowPeak(gain, 10 ** (-goal.bandwidthDropDb / 10), middleHz));
-}
-
-/** The peak is the largest gain met before it has fallen by the drop from its value at the middle. */
-function spanBelowPeak(gain: Curve, share: number, middleHz: number): SpanAround | null {
+  // The peak is the largest gain met before it has fallen by the drop from its value at the middle.
+  const share = 10 ** (-goal.bandwidthDropDb / 10);
   const atMiddle = gain(Float64Array.of(middleHz))[0];
-  const hill = spanAround(gain, atMiddle * share, middleHz);
-  return hill && spanAround(gain, peakNear(gain, hill, middleHz) * share, middleHz);
-}
-
-/**
- * The largest value around the largest sample, by looking closer three times between its neighbours: a parabola's top is
- * then known to rounding.
- */
-function peakNear(gain: Curve, { largest, largestAtHz }: SpanAround, middleHz: number): number {
-  let value = largest;
-  let atHz = largestAtHz;
-  let reach = 2 * Math.max(Math.abs(Math.log(largestAtHz / middleHz)), bandwidthFirstBlock) / bandwidthBlockPoints;
-  for (let round = 0; round < 3; round++, reach /= 16) {
-    const around = Float64Array.from({ length: 65 }, (_, k) => atHz * (1 + (reach * (k - 32)) / 32));
-    gain(around).forEach((each, k) => {
-      if (each > value) {
-        value = each;
-        atHz = around[k];
-      }
-    });
-  }
-  return value;
+  return widthOf(spanAround(gain, share * largestAround(gain, share * atMiddle, middleHz), middleHz));
 }
 
 function widthOf(span: SpanAround | null): Bandwidth {

@@ -1,7 +1,8 @@
 import { bandResults } from './bandResults';
 import { elementTable } from './elementTable';
 import type { Evaluation } from './evaluation';
-import { judgeGoal, type YieldAnswer } from './judgeGoal';
+import { judgeGoal } from './judgeGoal';
+import type { YieldAnswer } from './judgeYield';
 import { unsolvedElements } from './obstacles';
 import { sweepPlace } from './place';
 import type { Problem } from './problem';

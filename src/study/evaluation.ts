@@ -81,6 +81,7 @@ export interface ElementResult {
 export interface ImpedancePath {
   readonly caseName: string | null;
   readonly frequencyHz: number;
+  /** Reflection of the load against z0; null where it is not known there (then there are no steps). */
   readonly load: Complex | null;
   readonly steps: readonly PathStep[];
 }

@@ -3,19 +3,11 @@ import { countParts } from './countParts';
 import { directCurrent } from './directCurrent';
 import type { Goal, GoalResult } from './goal';
 import { judgePoints } from './judgePoints';
-import { judgeYield } from './judgeYield';
+import { judgeYield, type YieldAnswer } from './judgeYield';
 import { ladderObstacle } from './obstacles';
 import { judgeRejection } from './rejection';
 import type { Sampler } from './sampler';
 import { judged, judgedCondition, notKnown } from './verdict';
-
-/** What a study of random builds found, for `yield` goals. */
-export interface YieldAnswer {
-  /** Share of builds that meet every other goal, 0 … 1; null where it is not known. */
-  readonly yield?: number | null;
-  /** Why it is not known, e.g. that no part has a tolerance. */
-  readonly yieldReason?: string | null;
-}
 
 /**
  * One goal against one ladder. A goal that cannot be told is missed, with the reason: while an element is unsolved or could

@@ -1,11 +1,13 @@
-import { loadName } from './ladderNames';
+import { casesOf } from './casesOf';
 import type { Goal, GoalResult } from './goal';
 import { placesOf } from './place';
 import { pointValues, type PointQuantity } from './pointQuantities';
 import type { Sampler } from './sampler';
-import { casesOf } from './casesOf';
 import { judged, notKnown, wantsLarge } from './verdict';
 import { worseOf, worstIndex, type Worst } from './worst';
+
+/** Counts as an element's name in goals on voltage, current and dissipation. */
+export const loadName = 'load';
 
 /**
  * A goal on a quantity that has a value at every frequency: the worst over its places and cases decides, by the side on

@@ -1,3 +1,4 @@
+import { largerColumn } from '../network/abcdPoint';
 import { elementAbcd, type Cascade } from '../network/cascade';
 import type { Element } from '../network/element';
 import type { Immittance } from '../network/immittance';
@@ -86,10 +87,13 @@ function walk(element: Element, before: State, frequencyHz: Float64Array): Step 
     vIm[k] = a.re[k] * xIm + a.im[k] * xRe + b.re[k] * yIm + b.im[k] * yRe;
     iRe[k] = c.re[k] * xRe - c.im[k] * xIm + d.re[k] * yRe - d.im[k] * yIm;
     iIm[k] = c.re[k] * xIm + c.im[k] * xRe + d.re[k] * yIm + d.im[k] * yRe;
-    // An open in series with an open is an open, a short across a short is a short; the product of matrices says 0/0.
+    // Nothing gets through, and what is behind has no say: an open in series with an open, a short across a short.
     if (vRe[k] === 0 && vIm[k] === 0 && iRe[k] === 0 && iIm[k] === 0) {
-      if (isShunt(element)) iRe[k] = 1;
-      else vRe[k] = 1;
+      const [v, i] = largerColumn(abcd, k);
+      vRe[k] = v.re;
+      vIm[k] = v.im;
+      iRe[k] = i.re;
+      iIm[k] = i.im;
     }
   }
   const { state, divisor } = normalised(vRe, vIm, iRe, iIm);

@@ -7,12 +7,14 @@ export const lineArcPointsAtMost = 361;
 
 /** A bandwidth is looked for from the band's middle divided by this to the middle times this. */
 export const bandwidthReach = 100;
-/** Points looked at in one go while stepping outwards, and while closing in on an edge. */
-export const bandwidthBlockPoints = 64;
+/** Points looked at in one go while stepping outwards … */
+export const bandwidthBlockPoints = 32;
+/** … and while closing in on an edge. */
+export const edgePoints = 16;
 /** Width of the first block as a natural logarithm of frequency; each next one is as wide as all before it. */
 export const bandwidthFirstBlock = 0.005;
 /** An edge is closed in on until the bracket is this narrow relative to the frequency. */
-export const bandwidthPrecision = 1e-10;
+export const bandwidthPrecision = 1e-9;
 
 /** |Γ| this near to 1 is a rounded 1: total reflection. */
 export const totalReflectionSlack = 1e-12;

@@ -4,13 +4,13 @@ import type { Band, Problem } from './problem';
 /** Frequencies at which something is judged together. */
 export interface Place {
   /** The same for the same frequencies and band, so that samples can be shared; null where that is not worth it. */
-  readonly key: string | null;
+  readonly key: string | Float64Array | null;
   readonly frequencyHz: Float64Array;
   /** The band whose source serves all points; null where each frequency finds its own. */
   readonly band: string | null;
 }
 
-export const placeOfBand = (band: Band): Place => ({ key: `band ${band.name}`, frequencyHz: band.frequencyHz, band: band.name });
+export const placeOfBand = (band: Band): Place => ({ key: band.frequencyHz, frequencyHz: band.frequencyHz, band: band.name });
 
 export const sweepPlace = (problem: Problem): Place => ({ key: 'sweep', frequencyHz: problem.sweepHz, band: null });
 

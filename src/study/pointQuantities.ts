@@ -46,12 +46,12 @@ export function inUnit(share: number, unit: string): number {
 }
 
 function inputResistance(trace: Trace): PointValues {
-  return { values: impedanceOf(trace.input).re, reasonOfNaN: 'the input resistance has no value there' };
+  return { values: impedanceOf(trace.input()).re, reasonOfNaN: 'the input resistance has no value there' };
 }
 
 /** An open has no sign of reactance: it counts as infinite on the side that the goal forbids. */
 function inputReactance(trace: Trace, goal: Goal): PointValues {
-  const { re, im } = impedanceOf(trace.input);
+  const { re, im } = impedanceOf(trace.input());
   const forbidden = wantsLarge(goal) ? -Infinity : Infinity;
   return { values: im.map((value, k) => (Number.isFinite(re[k]) && Number.isFinite(value) ? value : forbidden)), reasonOfNaN: 'the input reactance has no value there' };
 }

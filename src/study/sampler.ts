@@ -21,7 +21,7 @@ export interface Trace {
   readonly source: Immittance;
   readonly network: Cascade;
   /** Looking into the ladder from the source. */
-  readonly input: Immittance;
+  input(): Immittance;
   /** 0 where the load, the source or an element is not known. */
   readonly known: Uint8Array;
   readonly firstUnknown: number | null;
@@ -52,7 +52,7 @@ interface Grid {
 }
 
 export function sampler(problem: Problem, ladder: readonly Element[]): Sampler {
-  const grids = new Map<string, Grid>();
+  const grids = new Map<string | Float64Array, Grid>();
   const gridOf = (place: Place): Grid => {
     const found = place.key === null ? undefined : grids.get(place.key);
     if (found) return found;
@@ -90,12 +90,12 @@ function makeTrace(problem: Problem, ladder: readonly Element[], place: Place, g
     known[k] = load.known[k] & network.known[k] & source.known[k];
     if (!known[k] && firstUnknown === null) firstUnknown = k;
   }
-  const input = throughNetwork(network, load);
+  const input = once(() => throughNetwork(network, load));
   const loadName = caseName === null ? 'load' : `load ${caseName}`;
   return {
     caseName, frequencyHz, load, source, network, input, known, firstUnknown,
     reason: firstUnknown === null ? null : reasonAt(firstUnknown, loadName, load, source, ladder, network),
-    reflection: once(() => powerWaveReflection(input, source)),
+    reflection: once(() => powerWaveReflection(input(), source)),
     gain: once(() => transducerGain(network, source, load)),
     efficiency: once(() => efficiency(network, load)),
     stress: once(() => ladderStress(ladder, load, source, frequencyHz, problem.availablePowerW)),

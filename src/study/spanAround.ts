@@ -1,4 +1,4 @@
-import { bandwidthBlockPoints, bandwidthFirstBlock, bandwidthPrecision, bandwidthReach } from './limits';
+import { bandwidthBlockPoints, bandwidthFirstBlock, bandwidthPrecision, bandwidthReach, edgePoints } from './limits';
 
 /** Something over frequency, as samples: NaN where not known. */
 export type Curve = (frequencyHz: Float64Array) => Float64Array;
@@ -12,9 +12,20 @@ export interface Edge {
 export interface SpanAround {
   readonly low: Edge;
   readonly high: Edge;
-  /** Largest value met at the points looked at, and where. */
-  readonly largest: number;
-  readonly largestAtHz: number;
+}
+
+/** Distances from the middle, as natural logarithms of frequency: the last point that is inside and the first that is not. */
+interface Crossing {
+  readonly inside: number;
+  readonly outside: number;
+  /** True where the curve is not known at `outside`, rather than below the threshold. */
+  readonly unknown: boolean;
+}
+
+/** The largest value met so far. */
+interface Top {
+  value: number;
+  atHz: number;
 }
 
 /**
@@ -22,60 +33,72 @@ export interface SpanAround {
  * not known, at the middle itself.
  *
  * Looked at in blocks of points outwards, each as wide (in octaves) as all before it, so that a gap narrower than a
- * sixty-fourth of its distance from the middle can be missed. Edges are then closed in on by dividing the bracket again
- * and again: to 1e-10 of the frequency.
+ * thirty-second of its distance from the middle can be missed. Edges are then closed in on by dividing the bracket again
+ * and again, to 1e-9 of the frequency.
  */
 export function spanAround(curve: Curve, threshold: number, middleHz: number): SpanAround | null {
-  const atMiddle = curve(Float64Array.of(middleHz))[0];
-  if (!(atMiddle >= threshold)) return null;
-  const best = { value: atMiddle, atHz: middleHz };
-  const low = edge(curve, threshold, middleHz, -1, best);
-  const high = edge(curve, threshold, middleHz, 1, best);
-  return { low, high, largest: best.value, largestAtHz: best.atHz };
+  if (!(curve(Float64Array.of(middleHz))[0] >= threshold)) return null;
+  return { low: edge(curve, threshold, middleHz, -1), high: edge(curve, threshold, middleHz, 1) };
 }
 
-function edge(curve: Curve, threshold: number, middleHz: number, side: -1 | 1, best: { value: number; atHz: number }): Edge {
+/**
+ * The largest value of a curve around a middle, going outwards both ways until it is below the threshold or not known; then
+ * by looking closer between the neighbours of the largest point, three times: a parabola's top is found to rounding.
+ */
+export function largestAround(curve: Curve, threshold: number, middleHz: number): number {
+  const top: Top = { value: curve(Float64Array.of(middleHz))[0], atHz: middleHz };
+  firstCrossing(curve, threshold, middleHz, -1, top);
+  firstCrossing(curve, threshold, middleHz, 1, top);
+  let reach = (2 * Math.max(Math.abs(Math.log(top.atHz / middleHz)), bandwidthFirstBlock)) / bandwidthBlockPoints;
+  for (let round = 0; round < 3; round++, reach /= 8) {
+    const centreHz = top.atHz;
+    const around = Float64Array.from({ length: 2 * bandwidthBlockPoints + 1 }, (_, k) => centreHz * Math.exp(reach * (k / bandwidthBlockPoints - 1)));
+    raise(top, curve(around), around, around.length);
+  }
+  return top.value;
+}
+
+function edge(curve: Curve, threshold: number, middleHz: number, side: -1 | 1): Edge {
+  let crossing = firstCrossing(curve, threshold, middleHz, side, null);
+  if (crossing === null) return { frequencyHz: middleHz * Math.exp(side * Math.log(bandwidthReach)), end: 'far' };
+  while (crossing.outside - crossing.inside > bandwidthPrecision) {
+    const closer = firstOutside(curve, threshold, middleHz, side, crossing.inside, crossing.outside, edgePoints, null);
+    // The far end of the bracket is outside by construction; only rounding of exp can make it look otherwise.
+    if (closer === null) break;
+    crossing = closer;
+  }
+  return { frequencyHz: middleHz * Math.exp(side * crossing.inside), end: crossing.unknown ? 'unknown' : 'crossed' };
+}
+
+function firstCrossing(curve: Curve, threshold: number, middleHz: number, side: -1 | 1, top: Top | null): Crossing | null {
   const reach = Math.log(bandwidthReach);
   let inside = 0;
-  let width = bandwidthFirstBlock;
+  let end = bandwidthFirstBlock;
   while (inside < reach) {
-    const end = Math.min(inside + width, reach);
-    const found = firstOutside(curve, threshold, middleHz, side, inside, end, best);
-    if (found !== null) return closeIn(curve, threshold, middleHz, side, found.before, found.at, best);
+    const found = firstOutside(curve, threshold, middleHz, side, inside, end, bandwidthBlockPoints, top);
+    if (found !== null) return found;
     inside = end;
-    width = inside;
-  }
-  return { frequencyHz: middleHz * Math.exp(side * reach), end: 'far' };
-}
-
-/** Distances from the middle in nepers of frequency: the first looked at that is below or not known, and the one before it. */
-function firstOutside(
-  curve: Curve, threshold: number, middleHz: number, side: -1 | 1, from: number, to: number, best: { value: number; atHz: number },
-): { before: number; at: number; unknown: boolean } | null {
-  const distances = Float64Array.from({ length: bandwidthBlockPoints }, (_, k) => from + ((to - from) * (k + 1)) / bandwidthBlockPoints);
-  const frequencyHz = distances.map((distance) => middleHz * Math.exp(side * distance));
-  const values = curve(frequencyHz);
-  for (let k = 0; k < values.length; k++) {
-    if (!(values[k] >= threshold)) return { before: k === 0 ? from : distances[k - 1], at: distances[k], unknown: Number.isNaN(values[k]) };
-    if (values[k] > best.value) {
-      best.value = values[k];
-      best.atHz = frequencyHz[k];
-    }
+    end = Math.min(2 * end, reach);
   }
   return null;
 }
 
-function closeIn(
-  curve: Curve, threshold: number, middleHz: number, side: -1 | 1, from: number, to: number, best: { value: number; atHz: number },
-): Edge {
-  let before = from;
-  let at = to;
-  let unknown = false;
-  do {
-    const found = firstOutside(curve, threshold, middleHz, side, before, at, best);
-    // The far end of the bracket is outside by construction; only rounding of exp can make it look otherwise.
-    if (found === null) break;
-    ({ before, at, unknown } = found);
-  } while (at - before > bandwidthPrecision);
-  return { frequencyHz: middleHz * Math.exp(side * before), end: unknown ? 'unknown' : 'crossed' };
+function firstOutside(
+  curve: Curve, threshold: number, middleHz: number, side: -1 | 1, from: number, to: number, points: number, top: Top | null,
+): Crossing | null {
+  const distances = Float64Array.from({ length: points }, (_, k) => from + ((to - from) * (k + 1)) / points);
+  const frequencyHz = distances.map((distance) => middleHz * Math.exp(side * distance));
+  const values = curve(frequencyHz);
+  const first = values.findIndex((value) => !(value >= threshold));
+  if (top) raise(top, values, frequencyHz, first < 0 ? points : first);
+  if (first < 0) return null;
+  return { inside: first === 0 ? from : distances[first - 1], outside: distances[first], unknown: Number.isNaN(values[first]) };
+}
+
+function raise(top: Top, values: Float64Array, frequencyHz: Float64Array, count: number): void {
+  for (let k = 0; k < count; k++) {
+    if (!(values[k] > top.value)) continue;
+    top.value = values[k];
+    top.atHz = frequencyHz[k];
+  }
 }

@@ -12,8 +12,8 @@ export function traceCase(trace: Trace, z0Ohm: number): CaseTrace {
     known,
     reason: trace.reason,
     reflection: blankComplex(trace.reflection(), known),
-    chartReflection: blankComplex(reflectionOf(trace.input, z0Ohm), known),
-    impedanceOhm: blankComplex(impedanceOf(trace.input), known),
+    chartReflection: blankComplex(reflectionOf(trace.input(), z0Ohm), known),
+    impedanceOhm: blankComplex(impedanceOf(trace.input()), known),
     gainDb: trace.gain().map((ratio, k) => (known[k] ? decibels(ratio) : NaN)),
     efficiency: trace.efficiency().map((share, k) => (known[k] ? share : NaN)),
   };

@@ -73,6 +73,24 @@ describe('stress by hand', () => {
   });
 });
 
+describe('stress of a block', () => {
+  // A matched pad of 3 dB from a file; invented, the same at both points.
+  const half = Math.SQRT1_2;
+  const pad = { ports: 2, frequencyHz: points(0.9e9, 1.1e9), referenceOhm: points(50, 50), sRe: points(0, half, half, 0, 0, half, half, 0), sIm: new Float64Array(8) };
+  const block: Element = { form: 'block', name: 'F1', data: pad, reversed: false };
+  it('half of the power stays in it; voltage and current are those of the source\'s side', () => {
+    const [f1, load] = stressOf(problemOf({ availablePowerW: 2, ladder: [block] }));
+    [Math.SQRT2 * 10, 0.2, 1].forEach((expected, k) => near(at(f1)[k], expected, 1e-9));
+    near(at(load)[2], 1, 1e-9);
+  });
+  it('one that lets nothing through still has a voltage at its input', () => {
+    const wall: Element = { ...block, data: { ...pad, sRe: points(1, 0, 0, 1, 1, 0, 0, 1) } };
+    const [f1, load] = stressOf(problemOf({ availablePowerW: 2, ladder: [wall] }));
+    near(at(f1)[0], Math.SQRT2 * 20, 1e-9);
+    assert.deepEqual(at(load), [0, 0, 0]);
+  });
+});
+
 describe('stress of opens, shorts and resonances', () => {
   // E = 20 V rms from 50 Ω.
   const stressed = (load: Problem['cases'][number]['load'], ladder: Element[]) => stressOf(problemOf({ availablePowerW: 2, load, ladder }));
@@ -115,6 +133,18 @@ describe('stress along a line', () => {
     const load = { form: 'reflection', reflection: { re: 0, im: -0.5 }, referenceOhm: 50 } as const;
     const stress = at(stressOf(problemOf({ availablePowerW: 2, load, ladder: [{ form: 'line', name: 'T1', line: lineOf(50, 0.4, 1e9) }] }))[0]);
     same(stress, [Math.SQRT2 * 15, 0.3, 0]);
+  });
+  it('is what one finds by cutting the line into many pieces, with loss too', () => {
+    for (const lossDb of [0, 0.5, 3]) {
+      const pieces = 400;
+      const whole = lineOf(35, 1.1, 1e9, lossDb);
+      const piece = { ...whole, lengthM: whole.lengthM / pieces, conductorLossDb: lossDb / pieces };
+      const load = ohms(12, 40);
+      const cut = stressOf(problemOf({ load, ladder: Array.from({ length: pieces }, (): Element => ({ form: 'line', name: 'T1', line: piece })) })).slice(0, -1);
+      const [voltage, current] = at(stressOf(problemOf({ load, ladder: [{ form: 'line', name: 'T1', line: whole }] }))[0]);
+      near(voltage, Math.max(...cut.map((stress) => at(stress)[0])), 1e-3);
+      near(current, Math.max(...cut.map((stress) => at(stress)[1])), 1e-3);
+    }
   });
   it('a lossy line heats by what it loses', () => {
     const [, , heat] = at(stressOf(problemOf({ availablePowerW: 2, ladder: [{ form: 'line', name: 'T1', line: lineOf(50, 0.4, 1e9, 3) }] }))[0]);
