@@ -59,6 +59,7 @@ function bandwidthAround(goal: Goal, middleHz: number, traceAt: (frequencyHz: Fl
   // The peak is the largest gain met before it has fallen by the drop from its value at the middle.
   const share = 10 ** (-goal.bandwidthDropDb / 10);
   const atMiddle = gain(Float64Array.of(middleHz))[0];
+  if (atMiddle === 0) return { value: 0, atLeast: null };
   return widthOf(spanAround(gain, share * largestAround(gain, share * atMiddle, middleHz), middleHz));
 }
 

@@ -15,9 +15,9 @@ export function judged(goal: Goal, value: number, frequencyHz: number | null, ca
   return { goal, ok: holds(goal, value), value: finite(value), margin: finite(margin), frequencyHz, caseName, reason: null };
 }
 
-/** A condition without a value: 1 where met, 0 where not. */
+/** A condition without a value: 1 where met, 0 where not; the margin is 1 or −1. */
 export function judgedCondition(goal: Goal, met: boolean): GoalResult {
-  return { goal, ok: met, value: met ? 1 : 0, margin: met ? 1 : 0, frequencyHz: null, caseName: null, reason: null };
+  return { goal, ok: met, value: met ? 1 : 0, margin: met ? 1 : -1, frequencyHz: null, caseName: null, reason: null };
 }
 
 /** True for goals that set a lower limit. */

@@ -53,6 +53,11 @@ describe('bandwidth', () => {
     assert.deepEqual([result.ok, result.value, result.margin, result.reason], [false, 0, -1e6, null]);
   });
 
+  it('a load that takes no power has none in gain', () => {
+    const result = judge(around({ form: 'short' }), goalOf('bandwidth', '<=', 1e6, { ...place, bandwidthDropDb: 3 }));
+    assert.deepEqual([result.ok, result.value, result.reason], [true, 0, null]);
+  });
+
   it('the worst case and the worst band', () => {
     const problem = problemOf({ load: { calm: resonator(50, 5), sharp: resonator(50, 50) }, bands: [band('spot', points(f0))] });
     const result = judge(problem, goalOf('bandwidth', '>=', 1, { unit: 'Hz' }));

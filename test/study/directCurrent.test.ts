@@ -59,7 +59,7 @@ describe('conditions on direct current', () => {
     const met = judge(problemOf({ ladder }), goalOf('dc path'));
     assert.deepEqual([met.ok, met.value, met.frequencyHz, met.caseName, met.reason], [true, 1, null, null, null]);
     const missed = judge(problemOf({ ladder }), goalOf('dc block'));
-    assert.deepEqual([missed.ok, missed.value], [false, 0]);
+    assert.deepEqual([met.margin, missed.ok, missed.value, missed.margin], [1, false, 0, -1]);
     const unknown = judge(problemOf({ ladder: [block] }), goalOf('dc block'));
     assert.deepEqual([unknown.ok, unknown.value, unknown.margin], [false, null, null]);
     assert.match(unknown.reason!, /F1/);
