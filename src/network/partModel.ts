@@ -24,14 +24,14 @@ export interface PartModel {
 }
 
 /**
- * Reduces a part's figures (not its measured data) to its law.
+ * Reduces a part's figures (not its measured data) to its law, at its own value or at another with the same figures.
  *
  * - Q is that of the value alone: R = |X|/q, with X = ωL or 1/(ωC), without SRF's capacitance or ESL.
  * - Skin effect: R(f) = |X(atHz)|/q · √(f/atHz).
  * - SRF: C = 1/((2π·SRF)²·L) across L and its loss.
  */
-export function partModel(part: Part): PartModel {
-  const { kind, value, loss, eslH } = part;
+export function partModel(part: Part, value = part.value): PartModel {
+  const { kind, loss, eslH } = part;
   const coil = kind === 'inductor';
   const elastance = kind === 'capacitor' ? 1 / value : 0;
   let constantOhm = kind === 'resistor' ? value : 0;

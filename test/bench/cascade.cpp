@@ -61,8 +61,8 @@ int main(int argc, char **argv) {
     for (int call = 0; call < calls; call++) {
       // Other values each time, as a solver has them; the last call is that of the reference ladder.
       const double x = 1 + 1e-6 * (calls - 1 - call);
-      ladder = {part(true, true, 6.8e-9 * x), part(false, false, 2.2e-12), part(true, true, 4.7e-9), part(false, false, 3.3e-12),
-                part(true, false, 22e-12), part(false, true, 12e-9), part(true, true, 3.9e-9), part(false, false, 1.5e-12)};
+      ladder = {part(true, true, 6.8e-9 * x), part(false, false, 2.2e-12 * x), part(true, true, 4.7e-9 * x), part(false, false, 3.3e-12 * x),
+                part(true, false, 22e-12 * x), part(false, true, 12e-9 * x), part(true, true, 3.9e-9 * x), part(false, false, 1.5e-12 * x)};
       evaluate();
     }
     const std::chrono::duration<double, std::nano> took = std::chrono::steady_clock::now() - start;

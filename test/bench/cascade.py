@@ -24,12 +24,12 @@ def impedance(coil, value):
 
 
 def evaluate(x):
-    ladder = [(True, True, 6.8e-9 * x), (False, False, 2.2e-12), (True, True, 4.7e-9), (False, False, 3.3e-12),
+    ladder = [(True, True, 6.8e-9), (False, False, 2.2e-12), (True, True, 4.7e-9), (False, False, 3.3e-12),
               (True, False, 22e-12), (False, True, 12e-9), (True, True, 3.9e-9), (False, False, 1.5e-12)]
     v = load
     i = np.ones(POINTS, complex)
     for series, coil, value in ladder:
-        z = impedance(coil, value)
+        z = impedance(coil, value * x)
         if series:
             v = v + z * i
         else:
