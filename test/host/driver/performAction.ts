@@ -19,13 +19,16 @@ function locate(page: Page, place: Place, selector: string): Locator {
   return page.frameLocator('iframe.webview >> nth=-1').frameLocator('#active-frame').locator(selector).first();
 }
 
+/** The function whose source a suite sent; it runs in the page, not here. */
+const functionOf = (source: string) => (0, eval)(`(${source})`) as (root: Element) => unknown;
+
 async function accessibility(page: Page): Promise<AccessibilityViolation[]> {
   const source = await readFile(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
   const root = locate(page, 'panel', ':root');
-  await root.evaluate(`() => { ${source}\n }`);
-  const found = await root.evaluate(`() => axe.run(document, { resultTypes: ['violations'] }).then((results) => results.violations.map((violation) => ({
+  await root.evaluate(functionOf(`() => { ${source}\n }`));
+  const found = await root.evaluate(functionOf(`() => axe.run(document, { resultTypes: ['violations'] }).then((results) => results.violations.map((violation) => ({
     id: violation.id, impact: String(violation.impact), help: violation.help, targets: violation.nodes.map((node) => node.target.join(' ')),
-  })))`);
+  })))`));
   return found as AccessibilityViolation[];
 }
 
@@ -70,7 +73,7 @@ export async function performAction({ page, picturesFolder, phase, policyViolati
         ? page.locator(action.selector).count()
         : page.frameLocator('iframe.webview >> nth=-1').frameLocator('#active-frame').locator(action.selector).count();
     case 'evaluate':
-      return locate(page, action.in, ':root').evaluate(action.script);
+      return locate(page, action.in, ':root').evaluate(functionOf(action.script));
     case 'viewport':
       return page.setViewportSize({ width: action.width, height: action.height });
     case 'media':

@@ -3,14 +3,17 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { format } from 'node:util';
 import { chromium } from 'playwright-core';
-import { chromiumArguments, prepareChromium } from '../prepareChromium';
+import { chromiumArguments, prepareChromium } from '../preparePrograms';
 import { prepareServedEditor } from '../prepareEditor';
 import { startEditorServer } from './editorServer';
 import { pageBridge } from './pageBridge';
 import { performAction } from './performAction';
 
+/** The editor in a browser writes its state down every five seconds, and cannot while the page unloads. */
+const STORED_AFTER_MS = 6_000;
+
 /** What the editor itself says about its own start, of no use to whoever reads a test run. */
-const isNoise = (line: string) => /connection token|^Creating a socket|Service Worker|ChatSessionStore|builtin extensions|vsda|open-vsx|extensions gallery/i.test(line);
+const isNoise = (line: string) => /connection token|^Creating a socket|Service Worker|ChatSessionStore|builtin extensions|vsda|open-vsx|extensions gallery|\[lifecycle\]/i.test(line);
 
 /**
  * The editor as a program that the test runner can start: the served editor in a headless browser. Takes the desktop
@@ -64,6 +67,7 @@ async function main(): Promise<number> {
       payload: JSON.stringify([['extensionDevelopmentPath', remote(extension)], ['extensionTestsPath', remote(tests)]]),
     });
     for (; phase <= phases; phase++) {
+      if (phase > 1) await new Promise((resolve) => setTimeout(resolve, STORED_AFTER_MS));
       const code = await new Promise<number>((resolve, reject) => {
         end = resolve;
         setTimeout(() => reject(new Error(`The suite did not end within ${limitMs} ms.`)), limitMs).unref();

@@ -45,6 +45,14 @@ export async function prepareChromium(): Promise<string> {
   return installed;
 }
 
+/** The program that the editor searches folders with; the editor's package would fetch its own from elsewhere. */
+export async function prepareSearchProgram(): Promise<string> {
+  const found = onPath(['rg']);
+  if (found !== null) return found;
+  await installPackages(['ripgrep']);
+  return onPath(['rg']) ?? '/usr/bin/rg';
+}
+
 /** What building native modules takes. */
 export async function prepareCompilers(): Promise<void> {
   const needed: string[] = [];
