@@ -22,6 +22,10 @@ export type Element =
   /** A two-port; port 1 toward the source unless reversed. */
   | { readonly form: 'block'; readonly name: string; readonly data: NetworkData; readonly reversed: boolean }
   /** Not yet chosen. Analysis cannot go past it; `study/unknown.ts` says what may be put here. */
-  | { readonly form: 'unsolved'; readonly name: string; readonly orientation: Orientation; readonly kind: PartKind | 'line' | 'stub' | null }
+  | {
+      readonly form: 'unsolved'; readonly name: string; readonly orientation: Orientation; readonly kind: PartKind | 'line' | 'stub' | null;
+      /** True where two equal parts are asked for, one in each leg; what is chosen then makes a branch with `pair`. */
+      readonly pair?: boolean;
+    }
   /** Could not be read; reported elsewhere. Everything beyond it is not known, for this reason. */
   | { readonly form: 'faulty'; readonly name: string; readonly orientation: Orientation; readonly reason: string };
