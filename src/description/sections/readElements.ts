@@ -1,6 +1,7 @@
 import type { Span } from '../../base/span';
 import { elementsAtMost } from '../limits';
-import { readElementKey, readElementPhrase } from '../phrase/readElement';
+import { readElementKey } from '../phrase/readElementKey';
+import { readElementPhrase } from '../phrase/readElementPhrase';
 import type { ElementSyntax } from '../syntax';
 import { splitScalar } from '../tree/splitMissingSpace';
 import type { ListNode, MappingNode, TreeEntry, TreeNode } from '../tree/treeNode';

@@ -70,7 +70,10 @@ export function yamlTree(text: string): YamlTree {
   const sound = diagnostics.length === 0 && composed.errors.length === 0;
   const unexplained = addRemaining(diagnostics, composed.errors, repaired, text);
   const { contents } = composed.document ?? {};
-  const root = contents ? treeNode(contents, repaired, (diagnostic) => diagnostics.push(diagnostic)) : null;
+  // A complex key is a mistake of its own only where YAML has nothing to say about its line.
+  const complexKeys: Diagnostic[] = [];
+  const root = contents ? treeNode(contents, repaired, (diagnostic) => complexKeys.push(diagnostic)) : null;
+  diagnostics.push(...complexKeys.filter(({ span }) => !unexplained.includes(lineAt(text, span.start).start)));
   diagnostics.push(...silentComments(composed.tokens, repaired));
   const report = (diagnostic: Diagnostic) => void diagnostics.push(diagnostic);
   return { root: root && checkKeys(joinFlowCommas(splitMissingSpace(root, report), text, report), report), diagnostics, sound, unexplained };
