@@ -1,7 +1,7 @@
 import assert from 'node:assert/strict';
 import type { Goal } from '../../src/study/goal';
 import type { Problem } from '../../src/study/problem';
-import { spanAround } from '../../src/study/spanAround';
+import { largestAround, spanAround } from '../../src/study/spanAround';
 import { band, capacitor, evenly, fileOf, goalOf, inductor, judge, near, ohms, onePort, points, problemOf, resistor, series, shunt } from './problems';
 
 const f0 = 100e6;
@@ -112,6 +112,17 @@ describe('the span around a middle', () => {
     // Good on both sides of a gap that is a tenth of its distance wide.
     const gap = (frequencyHz: Float64Array) => frequencyHz.map((f) => (f > 1500 && f < 1550 ? -1 : 1));
     near(spanAround(gap, 0, 1000)!.high.frequencyHz, 1500, 1e-9);
+  });
+  it('holds where the curve only touches the threshold', () => {
+    const flat = spanAround((f) => f.map((each) => (each > 999 && each < 1001 ? 0 : -1)), 0, 1000)!;
+    near(flat.low.frequencyHz, 999, 1e-8);
+    near(flat.high.frequencyHz, 1001, 1e-8);
+  });
+  it('finds the top of a narrow hill that lies beside the middle', () => {
+    const hill = (f: Float64Array) => f.map((each) => 1 / (1 + ((each - 1010) / 20) ** 2));
+    near(largestAround(hill, 0.2, 1000), 1, 1e-9);
+    // Beyond a fall below the threshold there may be more; it does not count.
+    near(largestAround((f) => f.map((each) => (each > 1100 ? 5 : each > 1050 ? 0 : 1)), 0.5, 1000), 1, 1e-12);
   });
   it('is null where the middle is below, or not known', () => {
     assert.equal(spanAround(bump, 0, 2000), null);

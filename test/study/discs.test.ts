@@ -59,6 +59,13 @@ describe('the disc of a reflection goal', () => {
       assert.equal(depth(half, w) > 0, allowed);
       assert.equal(reflectionAt(w, complex(150), 50) <= 2, allowed);
     }
+    // 30 + j40 Ω: |C|² is 8000, |D|² 2000, so the ratio is 2 again, and the border lies askew.
+    const askew = reflectionRegion(2, complex(30, 40), 50);
+    assert.equal(askew.form, 'half-plane');
+    for (const w of [complex(0), complex(3, 1), complex(-3, 2), complex(0.5, -4), complex(2, 3), complex(-1, -5)]) {
+      assert.equal(depth(askew, w) > 0, reflectionAt(w, complex(30, 40), 50) <= 2, `${w.re} ${w.im}`);
+    }
+    if (askew.form === 'half-plane') assert.ok(Math.abs(magnitude(askew.normal) - 1) < 1e-15);
     assert.equal(reflectionRegion(2.5, complex(150), 50).form, 'outside');
     assert.equal(reflectionRegion(1, complex(150, 80), 50).form, 'inside');
   });
@@ -69,7 +76,7 @@ describe('discs of a problem\'s goals', () => {
     const limits: [Parameters<typeof reflectionLimit>[0], number | null][] = [
       [goalOf('return loss', '>=', 20), 0.1], [goalOf('VSWR', '<=', 3), 0.5], [goalOf('reflection', '<=', 0.2), 0.2],
       [goalOf('mismatch loss', '<=', -10 * Math.log10(0.75)), 0.5], [goalOf('gain', '>=', -1), null], [goalOf('VSWR', '<=', 0.5), null],
-      [goalOf('mismatch loss', '<=', -1), null], [goalOf('dc path'), null],
+      [goalOf('mismatch loss', '<=', -1), null], [goalOf('mismatch loss', '<=', 0), 0], [goalOf('return loss', '>=', -Infinity), null], [goalOf('dc path'), null],
     ];
     for (const [goal, expected] of limits) {
       const actual = reflectionLimit(goal);
@@ -87,6 +94,7 @@ describe('discs of a problem\'s goals', () => {
     const discs = goalDiscs(problem);
     assert.deepEqual(discs.map(({ goalIndex, keepOut }) => [goalIndex, keepOut]), [[1, false], [2, false], [3, true]]);
     assert.ok(Math.abs(discs[0].frequencyHz - 1.1e9) < 1);
+    assert.deepEqual(goalDiscs({ ...problem, goals: [goalOf('VSWR', '<=', 2, { place: { form: 'band', band: 'none' } })] }), []);
     assert.deepEqual(discs[1].region, reflectionRegion(0.5, complex(20, 30), 50));
   });
 });

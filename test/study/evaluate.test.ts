@@ -91,6 +91,11 @@ describe('evaluation', () => {
     near(worstGainDb, 10 * Math.log10(0.75), 1e-12);
   });
 
+  it('tells each band by its ends, watched ones too', () => {
+    const { bands } = evaluate(problemOf({ bands: [band('wide', points(1e9, 2e9, 4e9)), band('spot', points(3e9), true)] }));
+    assert.deepEqual(bands.map(({ name, startHz, stopHz }) => [name, startHz, stopHz]), [['wide', 1e9, 4e9], ['spot', 3e9, 3e9]]);
+  });
+
   it('of an open and a short has finite reflections and no gain', () => {
     for (const [form, reflection] of [['open', 1], ['short', -1]] as const) {
       const { traces, bands } = evaluate(problemOf({ load: { form }, sweepHz }));

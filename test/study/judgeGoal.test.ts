@@ -190,6 +190,7 @@ describe('what is not known', () => {
   for (const [what, ladder, reason] of [
     ['an unsolved element', [...lossless.ladder, unsolved], /^C9 is still to be solved$/],
     ['several unsolved elements', [unsolved, { ...unsolved, name: 'C10' }, { ...unsolved, name: 'C11' }], /^C9, C10 and C11 are still to be solved$/],
+    ['two unsolved elements', [unsolved, { ...unsolved, name: 'C10' }], /^C9 and C10 are still to be solved$/],
     ['an element that could not be read', [faulty, ...lossless.ladder], /^L9: a negative inductance$/],
   ] as [string, Element[], RegExp][]) {
     it(`${what}: no goal has a value`, () => {
@@ -229,6 +230,7 @@ describe('counting parts', () => {
     const branch = { form: 'series', members: [inductor(1e-9), { form: 'parallel', members: [capacitor(1e-12), resistor(100)] }] } as const;
     assert.equal(count([shunt('trap', branch)]), 3);
     assert.equal(count([series('trap', branch, true)]), 6);
+    assert.equal(count([series('X1', { form: 'short' }), shunt('X2', { form: 'open' })]), 0);
   });
   it('a transformer is a part; what is printed on the board is none', () => {
     assert.equal(count([

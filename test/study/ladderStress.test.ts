@@ -7,6 +7,7 @@ import type { Stress } from '../../src/study/ladderStress';
 import { placeOfBand } from '../../src/study/place';
 import type { Problem } from '../../src/study/problem';
 import { sampler } from '../../src/study/sampler';
+import { worstStress } from '../../src/study/worstStress';
 import {
   band, bridge, capacitor, evenly, goalOf, inductor, judge, lineOf, near, notFitted, ohms, onePort, fileOf, points, problemOf, resistor, series, shunt,
 } from './problems';
@@ -162,7 +163,8 @@ describe('power balance', () => {
   );
   const elementArbitrary: fc.Arbitrary<Element> = fc.oneof(
     { weight: 4, arbitrary: fc.tuple(branchArbitrary, fc.boolean(), fc.boolean()).map(([branch, across, pair]) => (across ? shunt('X1', branch, pair) : series('X1', branch, pair))) },
-    fc.tuple(fc.double({ min: 20, max: 120, noNaN: true }), fc.double({ min: 0, max: 0.6, noNaN: true })).map(([ohm, turns]): Element => ({ form: 'line', name: 'T1', line: lineOf(ohm, turns, 1e9) })),
+    fc.tuple(fc.double({ min: 20, max: 120, noNaN: true }), fc.double({ min: 0, max: 0.6, noNaN: true }), fc.constantFrom(0, 0.5, 2))
+      .map(([ohm, turns, lossDb]): Element => ({ form: 'line', name: 'T1', line: lineOf(ohm, turns, 1e9, lossDb) })),
     fc.boolean().map((open): Element => ({ form: 'stub', name: 'S1', end: open ? 'open' : 'short', line: lineOf(60, 0.11, 1e9) })),
     fc.double({ min: 0.5, max: 2, noNaN: true }).map((turns): Element => ({ form: 'transformer', name: 'T2', turnsSource: 1, turnsLoad: turns, windingH: 20e-9, coupling: 0.8 })),
   );
@@ -207,6 +209,13 @@ describe('stress in goals and in the table', () => {
     const result = judge(problem, goalOf('dissipation', '<=', 1, { elementName: 'load', caseName: 'one', place: { form: 'frequency', frequencyHz: 1e9 }, unit: 'W' }));
     const gain = judge(problem, goalOf('gain', '<=', 0, { caseName: 'one', place: { form: 'frequency', frequencyHz: 1e9 } })).value!;
     near(result.value, 10 ** (gain / 10), 1e-12);
+  });
+  it('the worst of all elements at once, and of the load', () => {
+    const found = worstStress(sampler(problem, ladder), problem.bands.slice(0, 2).map(placeOfBand));
+    const loadVoltage = judge(problem, goalOf('voltage', '<=', 10, { elementName: 'load' })).value;
+    assert.deepEqual([found.elements?.length, found.load?.peakVoltageV, found.reason], [2, loadVoltage, null]);
+    const heat = judge(problem, goalOf('dissipation', '<=', 10, { elementName: 'load' })).value;
+    assert.equal(found.load?.dissipationW, heat);
   });
   it('watched bands count only where there is no other', () => {
     const watched = { ...problem, bands: [problem.bands[2]] };

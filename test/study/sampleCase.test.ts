@@ -67,6 +67,9 @@ describe('a source by band', () => {
   it('mixed points come out in their own order', () => {
     assert.deepEqual(realAt(sampleSource(source, bands, points(900e6, 150e6, 3e9))), [20, 10, 50]);
     assert.equal(nearestBand([], 1e9), null);
+    const partly = { ...source, byBand: new Map<string, Impedance>([['low', { form: 'unknown', reason: 'radio.s1p is missing' }]]) };
+    const sampled = sampleSource(partly, bands, points(900e6, 150e6));
+    assert.deepEqual([[...sampled.known], sampled.reason], [[1, 0], 'radio.s1p is missing']);
   });
   it('goals on overlapping bands use each band\'s own', () => {
     const problem = { ...problemOf({ load: ohms(30), bands }), source };
@@ -96,5 +99,6 @@ describe('tunables', () => {
     assert.match(tunableHint(problem)!, /antcap at code 1/);
     assert.match(tunableHint(problem, codes)!, /antcap at code 3/);
     assert.equal(tunableHint(problemOf({})), null);
+    assert.equal(tunableHint({ ...problem, tunables: [{ ...tunable, states: [] }] }), null);
   });
 });
