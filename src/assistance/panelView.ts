@@ -1,0 +1,63 @@
+import { lineMap } from '../base/lineMap';
+import type { GoalView, PanelView, ProblemView } from '../messages/panel';
+import type { GoalResult } from '../study/goal';
+import type { Assessment } from './assess';
+import { cautions } from './cautions';
+import { goalBar, goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
+import { ladderRows } from './ladderRows';
+import { defaultMarkerHz, markerView } from './markerView';
+import { bandViews, discViews, maskViews, sweepList, traceView } from './traceViews';
+
+export interface PanelContext {
+  readonly fileName: string;
+  readonly pinned: boolean;
+  /** Null: the middle of the first band. */
+  readonly markerHz: number | null;
+}
+
+/** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study. */
+export function panelView(assessment: Assessment, context: PanelContext): PanelView | null {
+  const { description, model, evaluation } = assessment;
+  const { problem } = model;
+  if (!problem || !evaluation) return null;
+  const markerHz = context.markerHz ?? defaultMarkerHz(problem);
+  return {
+    title: problem.title ?? description.syntax.title?.value ?? context.fileName,
+    fileName: context.fileName,
+    pinned: context.pinned,
+    verdict: verdictText(evaluation.goals),
+    goals: evaluation.goals.map(goalView),
+    problems: problemViews(assessment),
+    cautions: cautions(problem, evaluation),
+    z0Ohm: problem.z0Ohm,
+    frequencyHz: sweepList(evaluation),
+    bands: bandViews(problem),
+    traces: evaluation.traces.map(traceView),
+    discs: discViews(problem),
+    masks: maskViews(problem, evaluation.goals),
+    marker: markerHz === null ? null : markerView(problem, markerHz),
+    ladder: ladderRows(assessment, problem),
+  };
+}
+
+function goalView(result: GoalResult, id: number): GoalView {
+  return {
+    id,
+    title: goalTitle(result.goal),
+    place: goalPlace(result.goal),
+    ok: result.ok,
+    valueText: goalValueText(result),
+    detail: goalDetail(result),
+    marginText: goalMarginText(result),
+    bar: goalBar(result),
+    line: result.goal.line - 1,
+  };
+}
+
+/** What is wrong with the text, without the goals that are merely missed: those stand in the verdict. */
+export function problemViews({ description, diagnostics }: Assessment): ProblemView[] {
+  const lines = lineMap(description.syntax.text);
+  return diagnostics
+    .filter(({ code }) => code !== 'goal-missed' && code !== 'goal-not-known')
+    .map(({ severity, message, span }) => ({ severity, message, line: lines.positionAt(span.start).line }));
+}

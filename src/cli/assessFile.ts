@@ -1,0 +1,25 @@
+import { readFileSync, statSync } from 'node:fs';
+import { assessDescription, type Assessment } from '../assistance/assess';
+import { readDescription } from '../description/readDescription';
+import { CallError } from './callError';
+import { loadFiles } from './loadFiles';
+
+const maxDescriptionBytes = 8 << 20;
+
+/** Text of a description; a file that cannot be read makes the call wrong. */
+export function readText(path: string): string {
+  try {
+    if (statSync(path).size > maxDescriptionBytes) throw new CallError(`${path}: larger than a description may be (8 MiB)`);
+    return readFileSync(path, 'utf8');
+  } catch (error) {
+    if (error instanceof CallError) throw error;
+    const { code } = error as NodeJS.ErrnoException;
+    throw new CallError(`${path}: ${code === 'ENOENT' ? 'there is no such file' : `cannot be read (${code ?? String(error)})`}`);
+  }
+}
+
+/** Its files are looked for in `folders`, in turn. */
+export function assessFile(path: string, folders: readonly string[]): Assessment {
+  const description = readDescription(readText(path), { expressions: true });
+  return assessDescription(description, loadFiles(description, folders));
+}

@@ -1,0 +1,22 @@
+import { runCommandLine } from './runCommandLine';
+
+const words = process.argv.slice(2);
+const around = {
+  out: (text: string) => void process.stdout.write(text),
+  error: (text: string) => void process.stderr.write(text),
+  colour: process.stdout.isTTY === true && !process.env.NO_COLOR,
+};
+
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  if (error.code !== 'EPIPE') throw error; // Whoever read our output has seen enough.
+});
+process.on('SIGINT', () => process.exit(130));
+
+runCommandLine(words, around).then(
+  // Set, not exit(): what was written to a pipe must still arrive.
+  (code) => { process.exitCode = code; },
+  (error) => {
+    around.error(`ohmward: this should not have happened, please report it: ${(error as Error).stack ?? error}\n`);
+    process.exitCode = 2;
+  },
+);

@@ -1,0 +1,18 @@
+export const usage = `ohmward COMMAND [options] FILE or FOLDER …
+
+  check   reads and evaluates; says for each goal whether it holds and by how much
+            --format text|json       text for people (default), or JSON for programs
+            --since FILE             compares each goal with an earlier version of the description
+  sweep   the traces over frequency
+            --format text|json|csv|touchstone
+            --case NAME              only this load case
+            --two-port               the ladder itself as a two-port (touchstone)
+            -o, --output PATH        a file, or a folder where there are several
+  tidy    lays descriptions out
+            --verify                 changes nothing; fails where something would change
+
+  --help, --version
+
+A folder means every *.match.yaml and *.match.yml under it, except in node_modules, .git and what .gitignore leaves out.
+Exit code: 0 all holds; 1 a goal is missed or a description has errors; 2 the call is wrong or a file in it cannot be read.
+`;

@@ -1,0 +1,89 @@
+import type { Assessment } from '../assistance/assess';
+import { isOk } from '../assistance/assess';
+import { lineMap } from '../base/lineMap';
+import type { Complex } from '../network/complex';
+import type { BandResult, ElementResult } from '../study/evaluation';
+import type { GoalResult } from '../study/goal';
+
+/**
+ * The result of `check` for programs: version 1. SI units, angles in degrees, complex numbers as `[re, im]`; `null` with a
+ * `reason` beside it is not known, `null` without is infinite. Lines and columns count from 1 in UTF-16 units.
+ */
+export interface CheckedFile {
+  /** Relative to the working folder, with `/`. */
+  readonly path: string;
+  readonly assessment: Assessment;
+  /** The same goals in an earlier version of the description, where one was given. */
+  readonly earlier?: Assessment | null;
+}
+
+export function checkJson(files: readonly CheckedFile[]): object {
+  return { version: 1, ok: files.every((file) => isOk(file.assessment)), files: files.map(fileJson) };
+}
+
+function fileJson({ path, assessment, earlier }: CheckedFile): object {
+  const { description, evaluation } = assessment;
+  const lines = lineMap(description.syntax.text);
+  return {
+    path,
+    title: description.syntax.title?.value ?? null,
+    ok: isOk(assessment),
+    diagnostics: assessment.diagnostics.map(({ code, severity, message, span }) => {
+      const start = lines.positionAt(span.start);
+      const end = lines.positionAt(span.end);
+      return { code, severity, message, line: start.line + 1, column: start.character + 1, endLine: end.line + 1, endColumn: end.character + 1 };
+    }),
+    goals: (evaluation?.goals ?? []).map((result) => ({ ...goalJson(result), ...(earlier !== undefined && { before: beforeJson(result, earlier) }) })),
+    elements: (evaluation?.elements ?? []).map(elementJson),
+    bands: (evaluation?.bands ?? []).map(bandJson),
+    spread: null,
+  };
+}
+
+const pair = (value: Complex | null) => value && [finite(value.re), finite(value.im)];
+const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
+const because = (reason: string | null) => (reason === null ? {} : { reason });
+
+function goalJson({ goal, ok, value, margin, frequencyHz, caseName, reason }: GoalResult): object {
+  return {
+    text: goal.text, line: goal.line, ok, quantity: goal.quantity, value: finite(value), limit: goal.limit, margin: finite(margin),
+    unit: goal.unit, frequency: finite(frequencyHz), case: caseName, ...because(reason),
+  };
+}
+
+/** The goal of the earlier version that asks for the same, whatever its limit; null where there was none. */
+export function goalBefore(result: GoalResult, earlier: Assessment | null): GoalResult | null {
+  const same = (other: GoalResult) => other.goal.text === result.goal.text;
+  const alike = (other: GoalResult) => sameQuestion(other.goal.text) === sameQuestion(result.goal.text);
+  const candidates = earlier?.evaluation?.goals ?? [];
+  return candidates.find(same) ?? candidates.find(alike) ?? null;
+}
+
+/** A goal's text without its limit: what is asked, of what and where. */
+const sameQuestion = (text: string) => text.replace(/(>=|<=|>|<|≥|≤)\s*[-−+]?[\d.]+\s*\S*/, '').replace(/\s+/g, ' ').trim();
+
+function beforeJson(result: GoalResult, earlier: Assessment | null): object | null {
+  const before = goalBefore(result, earlier);
+  return before && { ok: before.ok, value: finite(before.value), limit: before.goal.limit, margin: finite(before.margin), ...because(before.reason) };
+}
+
+function elementJson(element: ElementResult): object {
+  return {
+    name: element.name, orientation: element.orientation, kind: element.kind, value: finite(element.value), unit: element.unit, fitted: element.fitted,
+    frequency: finite(element.frequencyHz), reactance: finite(element.reactanceOhm), susceptance: finite(element.susceptanceS),
+    impedanceAfter: pair(element.impedanceAfterOhm), reflectionAfter: pair(element.reflectionAfter),
+    peakVoltage: finite(element.peakVoltageV), rmsCurrent: finite(element.rmsCurrentA), dissipation: finite(element.dissipationW),
+    ...because(element.reason),
+  };
+}
+
+function bandJson(band: BandResult): object {
+  return {
+    name: band.name, start: band.startHz, stop: band.stopHz,
+    cases: band.cases.map((result) => ({
+      case: result.caseName, worstReflection: finite(result.worstReflection), worstReturnLoss: finite(result.worstReturnLossDb),
+      worstVswr: finite(result.worstVswr), worstGain: finite(result.worstGainDb), at: finite(result.atHz), ...because(result.reason),
+    })),
+    limit: null,
+  };
+}
