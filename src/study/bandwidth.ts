@@ -66,7 +66,8 @@ function bandwidthAround(goal: Goal, middleHz: number, traceAt: (frequencyHz: Fl
 function widthOf(span: SpanAround | null): Bandwidth {
   if (span === null) return { value: 0, atLeast: null };
   const open = [span.low, span.high].filter((edge) => edge.end !== 'crossed');
-  return { value: span.high.frequencyHz - span.low.frequencyHz, atLeast: open.length > 0 ? `at least this: ${open.map(endText).join(' and ')}` : null };
+  const atLeast = open.length > 0 ? `at least this: ${open.map(endText).join(' and ')}` : null;
+  return { value: span.high.frequencyHz - span.low.frequencyHz, atLeast };
 }
 
 function endText(edge: Edge): string {

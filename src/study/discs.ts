@@ -32,8 +32,8 @@ export function reflectionRegion(rho: number, sourceOhm: Complex, z0Ohm: number)
     // 2 Re[conj(C D*)(1 − ρ²) w] + |D|² − ρ²|C|² ≤ 0
     const slope = 2 * (1 - rho * rho);
     const size = Math.hypot(cd.re, cd.im) * Math.abs(slope);
-    const sign = Math.sign(slope);
-    return { form: 'half-plane', normal: { re: (sign * cd.re * Math.abs(slope)) / size, im: (sign * cd.im * Math.abs(slope)) / size }, offset: (rho * rho * cSquare - dSquare) / size };
+    const normal: Complex = { re: (cd.re * slope) / size, im: (cd.im * slope) / size };
+    return { form: 'half-plane', normal, offset: (rho * rho * cSquare - dSquare) / size };
   }
   const factor = (rho * rho - 1) / k;
   const centre: Complex = { re: cd.re * factor + 0, im: cd.im * factor + 0 };

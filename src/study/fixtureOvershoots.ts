@@ -1,6 +1,6 @@
 import { reflectionOf } from '../network/immittance';
 import { fixtureOvershootSlack } from './limits';
-import type { Problem } from './problem';
+import type { LoadCase, Problem } from './problem';
 import { sampleLoad } from './sampleCase';
 
 /** A load that reflects more than it receives once its fixture is removed: the fixture's stated loss or length is wrong. */
@@ -25,7 +25,7 @@ export function fixtureOvershoots(problem: Pick<Problem, 'cases' | 'z0Ohm'>): re
   });
 }
 
-function largestReflection(loadCase: Problem['cases'][number], frequencyHz: Float64Array, z0Ohm: number): { frequencyHz: number; reflection: number } {
+function largestReflection(loadCase: LoadCase, frequencyHz: Float64Array, z0Ohm: number): { frequencyHz: number; reflection: number } {
   const load = sampleLoad(loadCase, frequencyHz);
   const { re, im } = reflectionOf(load, z0Ohm);
   let reflection = -1;

@@ -2,6 +2,7 @@ import { largerColumn } from '../network/abcdPoint';
 import { elementAbcd, type Cascade } from '../network/cascade';
 import type { Element } from '../network/element';
 import type { Immittance } from '../network/immittance';
+import { orientationOf } from './orientation';
 import { peaksAlongLine } from './peaksAlongLine';
 
 /**
@@ -40,7 +41,9 @@ interface Step {
  * the power that leaves), so that reflected power, all dissipations and the load's sum up to `availableW`; see the test
  * «power balance». NaN where not known. Source: any text on two-ports, e.g. Pozar, Microwave Engineering, §4.4.
  */
-export function ladderStress(ladder: readonly Element[], load: Immittance, source: Immittance, frequencyHz: Float64Array, availableW: number): readonly Stress[] {
+export function ladderStress(
+  ladder: readonly Element[], load: Immittance, source: Immittance, frequencyHz: Float64Array, availableW: number,
+): readonly Stress[] {
   const first = normalised(load.numerator.re, load.numerator.im, load.denominator.re, load.denominator.im);
   const steps: Step[] = [];
   let state = first.state;
@@ -63,7 +66,9 @@ export function ladderStress(ladder: readonly Element[], load: Immittance, sourc
 
 function normalised(vRe: Float64Array, vIm: Float64Array, iRe: Float64Array, iIm: Float64Array): { state: State; divisor: Float64Array } {
   const length = vRe.length;
-  const state: State = { vRe: new Float64Array(length), vIm: new Float64Array(length), iRe: new Float64Array(length), iIm: new Float64Array(length) };
+  const state: State = {
+    vRe: new Float64Array(length), vIm: new Float64Array(length), iRe: new Float64Array(length), iIm: new Float64Array(length),
+  };
   const divisor = new Float64Array(length);
   for (let k = 0; k < length; k++) {
     const size = Math.max(Math.abs(vRe[k]), Math.abs(vIm[k]), Math.abs(iRe[k]), Math.abs(iIm[k]));
@@ -100,8 +105,6 @@ function walk(element: Element, before: State, frequencyHz: Float64Array): Step 
   return { before, after: state, abcd, divisor };
 }
 
-const isShunt = (element: Element): boolean => element.form === 'stub' || element.form === 'not fitted' || (element.form === 'branch' && element.orientation === 'shunt');
-
 /** Factor between the state at the source and rms volts and amperes: E / |V + Zs·I|. */
 function sizeAtSource(state: State, source: Immittance, availableW: number): Float64Array {
   const { numerator: n, denominator: d } = source;
@@ -118,11 +121,12 @@ function sizeAtSource(state: State, source: Immittance, availableW: number): Flo
 function stressOf(
   element: Element, step: Step, unit: Float64Array, sizeAfter: Float64Array, sizeBefore: Float64Array, frequencyHz: Float64Array,
 ): Stress {
-  if (element.form === 'branch' || element.form === 'bridge' || element.form === 'not fitted' || element.form === 'stub') {
-    const parts = element.form === 'branch' && element.pair ? 2 : 1;
-    return isShunt(element) ? shuntStress(step, unit, parts) : seriesStress(step, unit, sizeAfter, parts);
+  const parts = element.form === 'branch' && element.pair ? 2 : 1;
+  switch (orientationOf(element)) {
+    case 'series': return seriesStress(step, unit, sizeAfter, parts);
+    case 'shunt': return shuntStress(step, unit, parts);
+    case 'through': return throughStress(element, step, sizeAfter, sizeBefore, frequencyHz);
   }
-  return throughStress(element, step, sizeAfter, sizeBefore, frequencyHz);
 }
 
 const emptyStress = (length: number): Stress => ({
@@ -157,9 +161,12 @@ function shuntStress({ before, abcd: { a, c } }: Step, unit: Float64Array, parts
   return stress;
 }
 
-function throughStress(element: Element, { before, after }: Step, sizeAfter: Float64Array, sizeBefore: Float64Array, frequencyHz: Float64Array): Stress {
+function throughStress(
+  element: Element, { before, after }: Step, sizeAfter: Float64Array, sizeBefore: Float64Array, frequencyHz: Float64Array,
+): Stress {
   const stress = emptyStress(sizeAfter.length);
-  const lossless = element.form === 'transformer' || (element.form === 'line' && element.line.conductorLossDb === 0 && element.line.dielectricLossDb === 0);
+  const lossless = element.form === 'transformer'
+    || (element.form === 'line' && element.line.conductorLossDb === 0 && element.line.dielectricLossDb === 0);
   for (let k = 0; k < sizeAfter.length; k++) {
     let voltage = Math.max(Math.hypot(before.vRe[k], before.vIm[k]) * sizeBefore[k], Math.hypot(after.vRe[k], after.vIm[k]) * sizeAfter[k]);
     let current = Math.max(Math.hypot(before.iRe[k], before.iIm[k]) * sizeBefore[k], Math.hypot(after.iRe[k], after.iIm[k]) * sizeAfter[k]);

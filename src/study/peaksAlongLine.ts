@@ -9,9 +9,12 @@ const decibelsPerNeper = 20 / Math.LN10;
  * With V± = (V ± Zc·I)/2 the voltage x before the load end is V₊·e^(γx) + V₋·e^(−γx): largest where both are in phase
  * (voltage) or opposed (current, which is the difference over Zc). Those points and the load end are looked at; the source
  * end is the caller's. Exact without loss; with loss the true peak lies a little nearer to the source than where the waves
- * meet in phase: the value is low by less than 0.1 % on a line that loses 3 dB in a wavelength. Source: Pozar, Microwave Engineering, §2.3 and §2.7.
+ * meet in phase: the value is low by less than 0.1 % on a line that loses 3 dB in a wavelength. Source: Pozar, Microwave
+ * Engineering, §2.3 and §2.7.
  */
-export function peaksAlongLine(line: Line, frequencyHz: number, vRe: number, vIm: number, iRe: number, iIm: number): { voltage: number; current: number } {
+export function peaksAlongLine(
+  line: Line, frequencyHz: number, vRe: number, vIm: number, iRe: number, iIm: number,
+): { voltage: number; current: number } {
   const zc = line.impedanceOhm;
   const turns = frequencyHz / line.lossAtHz;
   const lossNp = (line.conductorLossDb * Math.sqrt(turns) + line.dielectricLossDb * turns) / decibelsPerNeper;

@@ -53,7 +53,8 @@ function inputResistance(trace: Trace): PointValues {
 function inputReactance(trace: Trace, goal: Goal): PointValues {
   const { re, im } = impedanceOf(trace.input());
   const forbidden = wantsLarge(goal) ? -Infinity : Infinity;
-  return { values: im.map((value, k) => (Number.isFinite(re[k]) && Number.isFinite(value) ? value : forbidden)), reasonOfNaN: 'the input reactance has no value there' };
+  const values = im.map((value, k) => (Number.isFinite(re[k]) && Number.isFinite(value) ? value : forbidden));
+  return { values, reasonOfNaN: 'the input reactance has no value there' };
 }
 
 function stressValues(trace: Trace, element: number, figure: keyof Stress): PointValues {

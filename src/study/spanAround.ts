@@ -52,7 +52,8 @@ export function largestAround(curve: Curve, threshold: number, middleHz: number)
   let reach = (2 * Math.max(Math.abs(Math.log(top.atHz / middleHz)), bandwidthFirstBlock)) / bandwidthBlockPoints;
   for (let round = 0; round < 3; round++, reach /= 8) {
     const centreHz = top.atHz;
-    const around = Float64Array.from({ length: 2 * bandwidthBlockPoints + 1 }, (_, k) => centreHz * Math.exp(reach * (k / bandwidthBlockPoints - 1)));
+    const offsets = Float64Array.from({ length: 2 * bandwidthBlockPoints + 1 }, (_, k) => reach * (k / bandwidthBlockPoints - 1));
+    const around = offsets.map((offset) => centreHz * Math.exp(offset));
     raise(top, curve(around), around, around.length);
   }
   return top.value;

@@ -7,6 +7,8 @@ import { ladderAtCodes, type TunableCodes } from './tunableCodes';
  * element stands for it, so that nothing is known beyond the load.
  */
 export function studiedLadder(problem: Problem, codes?: TunableCodes): readonly Element[] {
-  if (problem.ladder.length === 0 && problem.ladderTask !== null) return [{ form: 'unsolved', name: 'the ladder', orientation: 'through', kind: null }];
+  if (problem.ladder.length === 0 && problem.ladderTask !== null) {
+    return [{ form: 'unsolved', name: 'the ladder', orientation: 'through', kind: null }];
+  }
   return ladderAtCodes(problem, codes);
 }

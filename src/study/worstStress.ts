@@ -30,7 +30,9 @@ export function worstStress(sampler: Sampler, places: readonly Place[]): WorstSt
       });
     }
   }
-  if (!figures.every((each) => Object.values(each).every(Number.isFinite))) return { elements: null, load: null, reason: 'voltage and current have no value there' };
+  if (!figures.every((each) => Object.values(each).every(Number.isFinite))) {
+    return { elements: null, load: null, reason: 'voltage and current have no value there' };
+  }
   return { elements: figures.slice(0, -1), load: figures[figures.length - 1], reason: null };
 }
 
