@@ -125,6 +125,20 @@ describe('limits of a ladder', () => {
     nearComplex(zin([wall, series(ohm(10))], open), { re: 160, im: 0 }, 1e-9);
   });
 
+  it('walls that are blind to one another keep what each end sees', () => {
+    // Two opens back to back: each matrix annuls the other, and an open load annuls either.
+    const openWall: Element = { form: 'block', name: 'B1', reversed: false, data: { ports: 2, frequencyHz: hz(F), referenceOhm: hz(50, 50), sRe: hz(1, 0, 0, 1), sIm: hz(0, 0, 0, 0) } };
+    nearComplex(gamma([openWall], open), { re: 1, im: 0 }, 0);
+    nearComplex(gamma([openWall, openWall, shunt(ohm(50))], open), { re: 0, im: 0 }, 1e-15);
+    const opens = cascade([openWall, openWall], hz(F));
+    assert.ok(Math.hypot(opens.b.re[0], opens.b.im[0]) > 0);
+    assert.deepEqual([opens.a, opens.c, opens.d, opens.scale].map((entry) => pointOf(entry)).flatMap(({ re, im }) => [Math.abs(re), Math.abs(im)]), Array(8).fill(0));
+    // At 0 Hz windings are shorts: one across the other.
+    const shorts = cascade([shunt(short), transformer(1, 1, 1e-6, 0.9), transformer(1, 1, 1e-6, 0.9)], hz(0));
+    assert.ok(Math.hypot(shorts.c.re[0], shorts.c.im[0]) > 0 && shorts.b.re[0] === 0 && shorts.scale.im[0] === 0);
+    nearComplex(gamma([shunt(short), transformer(1, 1, 1e-6, 0.9), series(ohm(50))], short, 0), { re: 0, im: 0 }, 1e-15);
+  });
+
   it('has no efficiency where no power enters, and none left where all is lost', () => {
     assert.ok(Number.isNaN(efficiencyOf([series(coil(1e-9)), shunt(capacitor(1e-12))], open)));
     assert.ok(Number.isNaN(efficiencyOf([], short)));
