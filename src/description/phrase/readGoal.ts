@@ -77,14 +77,14 @@ function limitAt(s: Scanner, word: GoalWord, comparison: Located<Comparison>, st
     complain(s, 'unit-missing', 'A yield is in %.', found.span, [replaceBy(found.span, `${written <= 1 ? written * 100 : written} %`)]);
     return null;
   }
-  const unit = unitOfGoal(word, found.kind);
+  const unit = unitOfGoal(found.kind);
   const value = unit === '%' ? (literal?.form === 'unit' ? written : found.value * 100) : unit === 'dB' ? written : found.value;
   const wrong = wrongLimit(word, value, unit);
   if (wrong) complain(s, 'goal-limit', wrong.message, found.span, [], wrong.severity);
   return wrong?.severity === 'error' ? null : plain(value, unit);
 }
 
-function unitOfGoal(word: GoalWord, kind: string): string {
+function unitOfGoal(kind: string): string {
   switch (kind) {
     case 'decibels': return 'dB';
     case 'ratio': return '%';
