@@ -1,7 +1,7 @@
 import type { Element, Orientation } from '../../network/element';
 import type { Impedance } from '../../network/impedance';
-import type { PartKind } from '../../network/part';
 import type { Choice } from '../../study/unknown';
+import { kindOfDesignator } from '../phrase/readElementPhrase';
 import type { ElementSyntax, ImpedanceSyntax, LineSyntax, PartSyntax } from '../syntax';
 import { findName } from './findName';
 import { checkFigures } from './makePart';
@@ -34,7 +34,7 @@ export function resolveElement(syntax: ElementSyntax, place: ElementPlace, resol
     case 'bridge':
       return plain({ form: 'bridge', name, orientation: 'series' });
     case 'not fitted':
-      return plain({ form: 'not fitted', name, orientation: 'shunt', kind: designatorKind(name) });
+      return plain({ form: 'not fitted', name, orientation: 'shunt', kind: kindOfDesignator(name) });
     case 'block': {
       const { data, reason } = resolveFile(body.path, resolution);
       if (!data) return faulty(reason);
@@ -134,7 +134,7 @@ function resolveTunableBranch(
   if (Object.values(branch.figures).some((figure) => figure !== null)) {
     resolution.report(problemAt('figures-of-tunable', 'The figures of a tunable part are stated under «tunables».', branch.span));
   }
-  const kind = designatorKind(name);
+  const kind = kindOfDesignator(name);
   if (kind && kind !== tunable.kind) {
     resolution.report(problemAt('kind-mismatch', `«${tunable.name}» is a tunable ${tunable.kind}, and ${name} stands for a ${kind}.`, branch.value.name.span));
     return null;
@@ -161,9 +161,4 @@ function hasUnknown(impedance: Impedance): boolean {
 function orientationOf({ keyword }: ElementSyntax): Orientation {
   if (keyword === 'series') return 'series';
   return keyword === 'shunt' || keyword === 'stub open' || keyword === 'stub short' ? 'shunt' : 'through';
-}
-
-/** R, L and C as first letter of a reference designator (IEEE 315) tell the kind of a part. */
-export function designatorKind(name: string): PartKind | null {
-  return ({ R: 'resistor', L: 'inductor', C: 'capacitor' } as const)[name[0]] ?? null;
 }

@@ -13,7 +13,7 @@ export function readElements(node: ListNode | MappingNode, context: SectionConte
     reportMissingDashes(node, context);
     return atMost(node.entries, elementsAtMost, 'elements', context).flatMap((entry) => readEntry(entry, context));
   }
-  return atMost(node.items, elementsAtMost, 'elements', context).flatMap((item) => readItem(item, node, context));
+  return atMost(node.items, elementsAtMost, 'elements', context).flatMap((item, i) => readItem(item, node.itemSpans[i], context));
 }
 
 function reportMissingDashes(node: MappingNode, context: SectionContext): void {
@@ -25,20 +25,20 @@ function reportMissingDashes(node: MappingNode, context: SectionContext): void {
   context.report(mistake('ladder-without-dashes', 'The elements are a list, from the load to the source: each line begins with a dash, as in «- series L1: 5.6 nH».', span, { fixes }));
 }
 
-function readItem(item: TreeNode | null, list: ListNode, context: SectionContext): ElementSyntax[] {
+function readItem(item: TreeNode | null, span: Span, context: SectionContext): ElementSyntax[] {
   if (!item) {
-    context.report(mistake('missing-value', 'A dash without an element after it.', { start: list.span.start, end: list.span.start + 1 }));
+    context.report(mistake('missing-value', 'A dash without an element after it.', span));
     return [];
   }
   if (item.form === 'scalar') {
     const split = splitScalar(item, context.report);
     if (split) return readEntry(split, context);
     context.report(mistake('element-without-phrase', `«${shorten(item.phrase.text)}» is not an element: a key, a colon and a phrase are expected, as in «series L1: 5.6 nH».`, item.span));
-    return [];
+    return [placeholder(shorten(item.phrase.text), item.span)];
   }
   if (item.form === 'list') {
     context.report(mistake('wrong-shape', `An element is one key and one phrase, not ${shapeOf(item)}.`, item.span));
-    return [];
+    return [placeholder('list', item.span)];
   }
   item.entries.slice(1).forEach((entry) => reportSecondKey(entry, item, context));
   return item.entries.flatMap((entry) => readEntry(entry, context));
@@ -55,7 +55,7 @@ function reportSecondKey(entry: TreeEntry, item: MappingNode, context: SectionCo
 
 function readEntry(entry: TreeEntry, context: SectionContext): ElementSyntax[] {
   const key = readElementKey(entry.key.phrase, context);
-  if (!key) return [];
+  if (!key) return [placeholder(shorten(entry.key.phrase.text.trim()), entry.span)];
   const base = { keyword: key.keyword, name: key.name, span: entry.span };
   if (entry.value?.form === 'scalar') {
     return [{ ...base, phrase: entry.value.span, body: readElementPhrase(key.keyword, key.name.value, entry.value.phrase, context) }];
@@ -66,6 +66,11 @@ function readEntry(entry: TreeEntry, context: SectionContext): ElementSyntax[] {
     : `${key.name.value} has no value yet; write one, or «solve».`;
   context.report(mistake(entry.value ? 'wrong-shape' : 'missing-value', message, entry.value ? entry.value.span : entry.key.span));
   return [{ ...base, phrase, body: { form: 'faulty' } }];
+}
+
+/** Stands for an entry that cannot be read, so that nothing beyond it is taken for known. */
+function placeholder(name: string, span: Span): ElementSyntax {
+  return { keyword: 'series', name: { value: name, span }, span, phrase: { start: span.end, end: span.end }, body: { form: 'faulty' } };
 }
 
 const shorten = (text: string) => (text.length > 40 ? `${text.slice(0, 39)}…` : text);

@@ -8,7 +8,11 @@ import { atMost, expectList, expectScalar, located, mistake, reportShape, type S
 /** `measured`: what the analyser saw at the source end, of the finished ladder or of a step of building. */
 export function readMeasured(entry: TreeEntry, context: SectionContext): MeasuredSyntax[] {
   const list = expectList(entry, 'measurement', context);
-  return atMost(list?.items ?? [], measuredAtMost, 'measurements', context).flatMap((item): MeasuredSyntax[] => (item ? readItem(item, context) : []));
+  return atMost(list?.items ?? [], measuredAtMost, 'measurements', context).flatMap((item, i): MeasuredSyntax[] => {
+    if (item) return readItem(item, context);
+    context.report(mistake('missing-value', 'A dash without a measurement after it.', list?.itemSpans[i] ?? entry.key.span));
+    return [];
+  });
 }
 
 function readItem(item: TreeNode, context: SectionContext): MeasuredSyntax[] {

@@ -1,4 +1,3 @@
-import type { Span } from '../../base/span';
 import { bandsAtMost, channelsAtMost, familiesAtMost, goalsAtMost, letsAtMost } from '../limits';
 import { checkPhraseName } from '../phrase/checkName';
 import type { LetValue } from '../phrase/phrase';
@@ -48,7 +47,7 @@ export function readFamilies(entry: TreeEntry, context: SectionContext): FamilyS
 
 export function readGoals(entry: TreeEntry, context: SectionContext): GoalSyntax[] {
   const list = expectList(entry, 'goal', context);
-  return atMost(list?.items ?? [], goalsAtMost, 'goals', context).flatMap((item): GoalSyntax[] => {
+  return atMost(list?.items ?? [], goalsAtMost, 'goals', context).flatMap((item, i): GoalSyntax[] => {
     if (item?.form === 'scalar') {
       const goal = readGoalPhrase(item.phrase, context);
       return goal ? [goal] : [];
@@ -57,7 +56,7 @@ export function readGoals(entry: TreeEntry, context: SectionContext): GoalSyntax
       const hint = item.form === 'mapping' ? '; a goal has no colon followed by a space' : '';
       context.report(mistake('wrong-shape', `A goal is one phrase, not ${shapeOf(item)}${hint}.`, item.span));
     } else {
-      reportEmptyItem(entry.key.span, context);
+      context.report(mistake('missing-value', 'A dash without a goal after it.', list?.itemSpans[i] ?? entry.key.span));
     }
     return [];
   });
@@ -85,8 +84,4 @@ export function readChannels(entry: TreeEntry, context: SectionContext): Descrip
     ranges: read.flatMap((channel) => channel?.range ?? []),
     frequenciesHz: read.flatMap((channel) => channel?.frequencyHz ?? []),
   };
-}
-
-function reportEmptyItem(span: Span, context: SectionContext): void {
-  context.report(mistake('missing-value', 'A dash without anything after it in this list.', span));
 }

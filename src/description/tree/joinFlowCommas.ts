@@ -1,4 +1,5 @@
 import type { Report } from '../../base/diagnostic';
+import type { Span } from '../../base/span';
 import { plainPhrase } from '../phrase/phrase';
 import { quotePhrase } from './quotePhrase';
 import type { ListNode, MappingNode, ScalarNode, TreeEntry, TreeNode } from './treeNode';
@@ -17,6 +18,7 @@ export function joinFlowCommas(node: TreeNode, text: string, report: Report): Tr
 
 function joinInList(list: ListNode, text: string, report: Report): ListNode {
   const items: (TreeNode | null)[] = [];
+  const itemSpans: Span[] = [];
   for (let i = 0; i < list.items.length; i++) {
     const item = list.items[i];
     let end = i;
@@ -25,12 +27,14 @@ function joinInList(list: ListNode, text: string, report: Report): ListNode {
     if (item && entry && end > i) {
       const joined = join(entry, list.items[end] as TreeNode, text, report);
       items.push({ ...(item as MappingNode), entries: [joined], span: joined.span });
+      itemSpans.push(joined.span);
       i = end;
     } else {
       items.push(item && joinFlowCommas(item, text, report));
+      itemSpans.push(list.itemSpans[i]);
     }
   }
-  return { ...list, items };
+  return { ...list, items, itemSpans };
 }
 
 function joinInMapping(mapping: MappingNode, text: string, report: Report): MappingNode {

@@ -34,5 +34,7 @@ export interface ListNode {
   readonly span: Span;
   /** Null where nothing stands after the dash. */
   readonly items: readonly (TreeNode | null)[];
+  /** Where each item stands; of one with nothing after its dash, the dash. */
+  readonly itemSpans: readonly Span[];
   readonly flow: boolean;
 }

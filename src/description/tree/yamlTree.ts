@@ -160,7 +160,8 @@ function treeNode(node: Node, repaired: RepairedText, report: Report): TreeNode 
   const span = nodeSpan(node, repaired);
   if (isScalar(node)) return isEmpty(node) ? null : scalarNode(node, repaired);
   if (isSeq(node)) {
-    return { form: 'list', span, flow: node.flow === true, items: node.items.map((item) => treeNode(item as Node, repaired, report)) };
+    const items = node.items.map((item) => treeNode(item as Node, repaired, report));
+    return { form: 'list', span, flow: node.flow === true, items, itemSpans: items.map((item, i) => item?.span ?? emptyItemSpan(node.items[i] as Node | null, span, repaired)) };
   }
   if (!isMap(node)) return null; // an alias, refused above
   const entries: TreeEntry[] = [];
@@ -176,6 +177,14 @@ function treeNode(node: Node, repaired: RepairedText, report: Report): TreeNode 
     entries.push({ key, value, span: { start: key.span.start, end: value ? value.span.end : key.span.end } });
   }
   return { form: 'mapping', span, flow: node.flow === true, entries };
+}
+
+/** The dash before nothing; the whole list where there is none (an empty item in brackets). */
+function emptyItemSpan(node: Node | null, list: Span, repaired: RepairedText): Span {
+  if (!node?.range) return list;
+  const dash = repaired.text.lastIndexOf('-', node.range[0]);
+  const start = repaired.toOriginal(Math.max(dash, 0));
+  return dash >= 0 && start >= list.start && start < list.end ? { start, end: start + 1 } : list;
 }
 
 function nodeSpan(node: Node, repaired: RepairedText): Span {
