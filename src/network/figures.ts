@@ -1,12 +1,12 @@
-import { at } from './abcdPoint';
+import { at, sizeAt } from './abcdPoint';
 import type { Cascade } from './cascade';
-import { complexArray, magnitude, type ComplexArray } from './complex';
+import { complexArray, type ComplexArray } from './complex';
 import type { Immittance } from './immittance';
 import { writeQuotient } from './ratio';
 import { inputOf } from './throughElements';
 
-/** Below this share of |V|·|I| the power V·I* cannot be told from rounding, and the input takes none. */
-const LEAST_POWER_FACTOR = 1e-13;
+/** Below this share of the products that it is summed from, the entering power cannot be told from rounding: there is none. */
+const LEAST_POWER_SHARE = 1e-13;
 
 /**
  * Γ = (Zin − Zs*)/(Zin + Zs) at each point: 1 − |Γ|² of the available power enters. With a real source it is the usual Γ.
@@ -71,11 +71,18 @@ export function efficiency(network: Cascade, load: Immittance): Float64Array {
     if (load.known[k] === 0 || network.known[k] === 0) continue;
     const [voltage, current] = inputOf(network, load, k);
     const entering = voltage.re * current.re + voltage.im * current.im;
-    if (!(entering > LEAST_POWER_FACTOR * magnitude(voltage) * magnitude(current))) continue;
+    if (!(entering > LEAST_POWER_SHARE * productsSize(network, load, k))) continue;
     const scale = at(network.scale, k);
     share[k] = (loadPower(load, k) * (scale.re * scale.re + scale.im * scale.im)) / entering;
   }
   return share;
+}
+
+/** (|A·n| + |B·d|)·(|C·n| + |D·d|): V·I* at the input without any cancellation. */
+function productsSize({ a, b, c, d }: Cascade, load: Immittance, k: number): number {
+  const loadVoltage = sizeAt(load.numerator, k);
+  const loadCurrent = sizeAt(load.denominator, k);
+  return (sizeAt(a, k) * loadVoltage + sizeAt(b, k) * loadCurrent) * (sizeAt(c, k) * loadVoltage + sizeAt(d, k) * loadCurrent);
 }
 
 /** Re(V·I*) for the load's own n as voltage and d as current. */

@@ -143,6 +143,8 @@ describe('limits of a ladder', () => {
     assert.ok(Number.isNaN(efficiencyOf([series(coil(1e-9)), shunt(capacitor(1e-12))], open)));
     assert.ok(Number.isNaN(efficiencyOf([], short)));
     assert.ok(Number.isNaN(efficiencyOf([series(open)], ohm(50))));
+    // 1 µΩ that a reactance of 1 kΩ all but hides is still there.
+    near(efficiencyOf([series(ohm(1e-6, -1000))], ohm(1e-6, 1000)), 0.5, 1e-6);
     assert.equal(efficiencyOf([shunt(resistor(50))], open), 0);
     near(efficiencyOf([series(resistor(10))], ohm(40)), 0.8, 1e-15);
     near(efficiencyOf([shunt(resistor(100)), series(coil(5e-9))], ohm(50)), 2 / 3, 1e-14);
