@@ -5,7 +5,7 @@ import { tunableStatesAtMost } from '../limits';
 import type { DescriptionSyntax, TunableSyntax } from '../syntax';
 import { reportTwice } from './findName';
 import { checkFigures, checkValue, makePart, mergeFigures } from './makePart';
-import { doubtAt, problemAt, type Resolution, type ResolvedTunable } from './resolution';
+import { problemAt, type Resolution, type ResolvedTunable } from './resolution';
 import { resolvePart } from './resolvePart';
 
 /** Tunables with their states by increasing code; null inside where none can be had, which has been reported. */
@@ -65,14 +65,12 @@ function linearStates(syntax: TunableSyntax, kind: PartKind, bits: number, resol
   }));
 }
 
-/** Each tunable with the names of the elements that it sets; one that sets none is doubted. */
+/** Each tunable with the names of the elements that it sets. */
 export function connectTunables(syntax: DescriptionSyntax, ladder: readonly Element[], resolution: Resolution): Tunable[] {
   const fitted = new Set(ladder.filter((element) => element.form === 'branch').map((element) => element.name));
   return [...resolution.tunables.values()].flatMap(({ tunable, syntax: { name } }): Tunable[] => {
     const elements = (syntax.ladder?.elements ?? []).filter(({ body, name: element }) =>
       fitted.has(element.value) && body.form === 'branch' && body.branch.form === 'part' && body.branch.value.form === 'tunable' && body.branch.value.name.value === name.value);
-    const named = syntax.ladder?.elements.some(({ phrase }) => syntax.text.slice(phrase.start, phrase.end).includes(name.value));
-    if (elements.length === 0 && !named) resolution.report(doubtAt('unused-tunable', `No element of the ladder is «tunable ${name.value}».`, name.span));
     return tunable ? [{ ...tunable, elements: elements.map((element) => element.name.value) }] : [];
   });
 }
