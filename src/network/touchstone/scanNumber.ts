@@ -1,6 +1,8 @@
 /** Powers of ten that are exact as doubles. */
 const exactPowers = Array.from({ length: 23 }, (_, i) => Number(`1e${i}`));
 const exactMantissa = 2 ** 53;
+/** No number that anyone writes is longer. */
+const longestNumber = 200;
 
 /** What stands at one place of a line of bytes. `value` is NaN where it is no number. */
 export interface ScannedNumber {
@@ -55,6 +57,6 @@ export function scanNumber(bytes: Uint8Array, start: number, stop: number, into:
     const magnitude = exponent < 0 ? mantissa / exactPowers[-exponent] : mantissa * exactPowers[exponent];
     into.value = negative ? -magnitude : magnitude;
   } else {
-    into.value = Number(String.fromCharCode(...bytes.subarray(start, at)));
+    into.value = at - start > longestNumber ? NaN : Number(String.fromCharCode(...bytes.subarray(start, at)));
   }
 }
