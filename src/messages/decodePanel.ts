@@ -1,0 +1,50 @@
+import { byType, flag, listOf, number, oneOf, orNull, shape, text, whole, type Decoder } from './decode';
+import type { BandView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, ToHost, ToPage, TraceView } from './panel';
+
+const maybeNumbers = listOf(orNull(number));
+const point = shape<{ re: number; im: number }>({ re: number, im: number });
+const points: Decoder<PointList> = shape<PointList>({ re: maybeNumbers, im: maybeNumbers });
+
+const goal = shape<GoalView>({ id: whole, title: text, place: text, ok: flag, valueText: text, detail: text, marginText: text, bar: orNull(number), line: whole });
+const problem = shape<ProblemView>({ severity: oneOf('error', 'warning', 'info'), message: text, line: whole });
+const band = shape<BandView>({ name: text, startHz: number, stopHz: number, watch: flag });
+const trace = shape<TraceView>({ caseName: text, reflection: points, reflectionDb: maybeNumbers, gainDb: maybeNumbers, reason: orNull(text) });
+const disc = shape<DiscView>({ centreRe: number, centreIm: number, radius: number, label: text });
+const mask = shape<MaskView>({ plot: oneOf('reflection', 'gain'), side: oneOf('at most', 'at least'), levelDb: number, startHz: number, stopHz: number, ok: flag, goalId: whole });
+const arc = shape<PathStepView['arc']>({ re: listOf(number), im: listOf(number) });
+const step = shape<PathStepView>({ name: text, arc });
+const markerCase = shape<MarkerCaseView>({ caseName: text, text, loadReflection: orNull(point), steps: listOf(step), inputReflection: orNull(point) });
+const marker = shape<MarkerView>({ frequencyHz: number, text, cases: listOf(markerCase) });
+const row = shape<LadderRowView>({
+  id: text, name: text, orientation: oneOf('series', 'shunt', 'through', 'end'),
+  symbol: oneOf('load', 'source', 'resistor', 'inductor', 'capacitor', 'branch', 'line', 'stub open', 'stub short', 'transformer', 'block', 'bridge', 'open', 'unsolved'),
+  value: text, reactance: text, impedanceAfter: text, voltage: text, current: text, heat: text, note: text, line: orNull(whole), editable: flag,
+});
+const view = shape<PanelView>({
+  title: text, fileName: text, pinned: flag, verdict: text, goals: listOf(goal), problems: listOf(problem), cautions: listOf(text), z0Ohm: number,
+  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row),
+});
+
+/** A message from the host; undefined where it is none. */
+export const decodeToPage: Decoder<ToPage> = byType<ToPage>({
+  view: shape({ type: oneOf('view'), document: text, version: whole, view }),
+  stale: shape({ type: oneOf('stale'), document: text, version: whole, reason: orNull(text), problems: listOf(problem) }),
+  marker: shape({ type: oneOf('marker'), document: text, version: whole, request: whole, marker: orNull(marker), refusal: orNull(text) }),
+  cursor: shape({ type: oneOf('cursor'), document: text, version: whole, elementId: orNull(text), goalId: orNull(whole) }),
+  nothing: shape({ type: oneOf('nothing'), document: (data) => (data === '' ? '' : undefined), version: (data) => (data === 0 ? 0 : undefined), message: text }),
+});
+
+/** A message from the page; undefined where it is none. */
+export const decodeToHost: Decoder<ToHost> = byType<ToHost>({
+  ready: shape({ type: oneOf('ready') }),
+  'move marker': shape({ type: oneOf('move marker'), document: text, request: whole, frequencyHz: number }),
+  'type marker': shape({ type: oneOf('type marker'), document: text, request: whole, text }),
+  'reveal line': shape({ type: oneOf('reveal line'), document: text, line: whole }),
+  'point at element': shape({ type: oneOf('point at element'), document: text, elementId: orNull(text) }),
+  'step value': shape({ type: oneOf('step value'), document: text, version: whole, elementId: text, direction: oneOf('up', 'down') }),
+  'set value': shape({ type: oneOf('set value'), document: text, version: whole, elementId: text, text }),
+  copy: shape({ type: oneOf('copy'), document: text, what: oneOf('chart svg', 'ladder csv', 'ladder markdown'), text }),
+  save: shape({ type: oneOf('save'), document: text, what: oneOf('chart svg', 'chart png'), base64: text }),
+  pin: shape({ type: oneOf('pin'), document: text, pinned: flag }),
+  failure: shape({ type: oneOf('failure'), message: text }),
+});
