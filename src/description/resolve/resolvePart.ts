@@ -8,8 +8,9 @@ import { problemAt, type Resolution, type ResolvedFamily } from './resolution';
 
 /** One part with a known value; null where it has none that can be used, which has been reported. */
 export function resolvePart(syntax: PartSyntax, resolution: Resolution): Part | null {
-  const family = partFamily(syntax, resolution);
-  const kind = partKind(syntax, family, resolution);
+  const named = partFamily(syntax, resolution);
+  const kind = partKind(syntax, named, resolution);
+  const family = named && (named.family.kind === kind || named.family.kind === 'mixed') ? named : null;
   const { value } = syntax;
   if (!kind || value.form === 'faulty') return null;
   if (value.form === 'solve' || value.form === 'tunable') {
