@@ -13,7 +13,9 @@ const out = path.join(root, 'out', 'host');
 /** The suite and the driver as programs: the extension host has no TypeScript. */
 async function bundle(): Promise<void> {
   await rm(out, { recursive: true, force: true });
-  const files = (await readdir(path.join(here, 'suite'), { recursive: true })).filter((name) => name.endsWith('.test.ts'));
+  const all = (await readdir(path.join(here, 'suite'), { recursive: true })).filter((name) => name.endsWith('.test.ts')).map((name) => name.split(path.sep).join('/'));
+  const web = all.filter((name) => name.startsWith('web/'));
+  const files = all.filter((name) => !name.startsWith('web/'));
   const common = { bundle: true, platform: 'node', target: 'node20', logLevel: 'warning', sourcemap: 'inline' } as const;
   await Promise.all([
     esbuild.build({
@@ -22,11 +24,15 @@ async function bundle(): Promise<void> {
     }),
     esbuild.build({ ...common, format: 'cjs', outfile: path.join(out, 'suite.cjs'), external: ['vscode', 'mocha'], entryPoints: [path.join(here, 'suite', 'index.ts')] }),
     esbuild.build({
-      ...common, format: 'esm', outfile: path.join(out, 'servedEditor.mjs'), packages: 'external', banner: { js: '#!/usr/bin/env node' },
-      entryPoints: [path.join(here, 'driver', 'servedEditor.ts')],
+      ...common, platform: 'browser', target: 'es2022', format: 'cjs', outfile: path.join(out, 'webSuite.cjs'), external: ['vscode'],
+      stdin: { contents: [`import './webIndex';`, ...web.map((name) => `import './${name}';`), `export { run } from './webIndex';`].join('\n'), resolveDir: path.join(here, 'suite') },
+    }),
+    esbuild.build({
+      ...common, format: 'esm', outdir: out, outExtension: { '.js': '.mjs' }, packages: 'external', banner: { js: '#!/usr/bin/env node' },
+      entryPoints: ['servedEditor.ts', 'webEditor.ts'].map((name) => path.join(here, 'driver', name)),
     }),
   ]);
-  await chmod(path.join(out, 'servedEditor.mjs'), 0o755);
+  for (const program of ['servedEditor.mjs', 'webEditor.mjs']) await chmod(path.join(out, program), 0o755);
 }
 
 /** A copy of the sample workspaces and of the fixtures, which the tests may change. Returns what the editor is to open. */
@@ -50,13 +56,13 @@ async function runScenario(scenario: Scenario, results: string): Promise<boolean
     const opened = await prepareWorkspace(folder, scenario.opens);
     console.log(`\n— ${scenario.suite}: ${scenario.what}`);
     await runTests({
-      vscodeExecutablePath: desktop ?? path.join(out, 'servedEditor.mjs'),
+      vscodeExecutablePath: scenario.web ? path.join(out, 'webEditor.mjs') : (desktop ?? path.join(out, 'servedEditor.mjs')),
       extensionDevelopmentPath: root,
       extensionTestsPath: path.join(out, 'suite.cjs'),
       launchArgs: opened === null ? [] : [opened],
       extensionTestsEnv: {
         OHMWARD_SUITE: scenario.suite, OHMWARD_WORKSPACE: path.join(folder, 'samples'), OHMWARD_RESULTS: results, OHMWARD_PICTURES: path.join(root, 'out', 'pictures'),
-        OHMWARD_PHASES: String(scenario.loads), OHMWARD_TRUST: scenario.trusted ? 'all' : 'ask',
+        OHMWARD_LOADS: String(scenario.loads), OHMWARD_TRUST: scenario.trusted ? 'all' : 'ask',
       },
     });
     return true;

@@ -8,8 +8,15 @@ export interface Scenario {
   readonly loads: number;
   /** True where the window itself must be driven or configured by us. */
   readonly needsPage: boolean;
+  /** In the editor's web build, whose extension host has no Node. */
+  readonly web?: boolean;
 }
 
 export const scenarios: readonly Scenario[] = [
   { suite: 'editing', what: 'a folder, what one sees while typing', opens: 'folder', trusted: true, loads: 1, needsPage: false },
+  { suite: 'panel', what: 'the panel, and the panel after a reload of the window', opens: 'folder', trusted: true, loads: 2, needsPage: true },
+  { suite: 'folders', what: 'several folders', opens: 'workspace', trusted: true, loads: 1, needsPage: false },
+  { suite: 'loose', what: 'a single file without a folder', opens: 'nothing', trusted: true, loads: 1, needsPage: false },
+  { suite: 'untrusted', what: 'a folder that is not trusted', opens: 'folder', trusted: false, loads: 1, needsPage: true },
+  { suite: 'web', what: 'the web build, without Node, on a virtual file system', opens: 'nothing', trusted: true, loads: 1, needsPage: true, web: true },
 ];

@@ -5,7 +5,10 @@
 export type Place = 'window' | 'panel';
 
 export type PageAction =
+  /** Which load of the window this is, from 1. */
   | { readonly do: 'phase' }
+  /** Prints a line of the test run. */
+  | { readonly do: 'say'; readonly text: string }
   | { readonly do: 'picture'; readonly name: string; readonly of: Place }
   /** A key or chord, as `Control+Shift+P`. */
   | { readonly do: 'press'; readonly key: string }

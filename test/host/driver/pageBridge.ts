@@ -20,7 +20,7 @@ export async function pageBridge(perform: (action: PageAction) => Promise<unknow
   const secret = `/${randomBytes(16).toString('hex')}`;
   const server = createServer((request, response) => {
     const answer = (status: number, value: unknown) => {
-      response.writeHead(status, { 'content-type': 'application/json' });
+      response.writeHead(status, { 'content-type': 'application/json', 'access-control-allow-origin': '*' });
       response.end(JSON.stringify(value));
     };
     if (request.url !== secret || request.method !== 'POST') {

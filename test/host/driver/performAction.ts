@@ -38,6 +38,8 @@ export async function performAction({ page, picturesFolder, phase, policyViolati
   switch (action.do) {
     case 'phase':
       return phase();
+    case 'say':
+      return console.log(action.text);
     case 'picture': {
       await mkdir(picturesFolder, { recursive: true });
       const file = path.join(picturesFolder, `${action.name.replace(/[^\w-]+/g, '-')}.png`);

@@ -1,7 +1,10 @@
 import type { AccessibilityViolation, PageAction, Place } from '../driver/pageActions';
 
+/** Where the suite is served to an extension host without Node, the driver writes the address in here. */
+const written = '__BRIDGE__';
+
 /** Null in a desktop editor, whose window no driver of ours holds. */
-export const bridgeUrl = process.env.OHMWARD_BRIDGE ?? null;
+const bridgeUrl = written.startsWith('http') ? written : (process.env.OHMWARD_BRIDGE ?? null);
 
 async function ask<T>(action: PageAction): Promise<T> {
   if (bridgeUrl === null) throw new Error('this editor has no page bridge');
@@ -14,6 +17,7 @@ async function ask<T>(action: PageAction): Promise<T> {
 /** The browser that shows the editor, as the person in front of it would use it. */
 export const page = {
   phase: () => (bridgeUrl === null ? Promise.resolve(1) : ask<number>({ do: 'phase' })),
+  say: (text: string) => ask<void>({ do: 'say', text }),
   picture: (name: string, of: Place = 'window') => ask<string>({ do: 'picture', name, of }),
   press: (key: string) => ask<void>({ do: 'press', key }),
   type: (text: string) => ask<void>({ do: 'type', text }),

@@ -1,6 +1,7 @@
 import assert from 'node:assert/strict';
 import * as vscode from 'vscode';
-import { closeAll, errors, eventually, marksThat, openSample, openText, placeOf, replace, sampleUri, undo } from '../descriptions';
+import { openSample, openText, placeOf, replace, sampleUri, undo } from '../descriptions';
+import { closeAll, errors, eventually, marksThat } from '../waiting';
 
 const FROST = 'orchard/frost.match.yaml';
 

@@ -1,6 +1,7 @@
 import assert from 'node:assert/strict';
 import * as vscode from 'vscode';
-import { closeAll, errors, marksThat, openText, sampleUri } from '../descriptions';
+import { openText, sampleUri } from '../descriptions';
+import { closeAll, errors, marksThat } from '../waiting';
 
 const write = (name: string, text: string) => vscode.workspace.fs.writeFile(sampleUri(name), new TextEncoder().encode(text));
 

@@ -1,6 +1,7 @@
 import assert from 'node:assert/strict';
 import * as vscode from 'vscode';
-import { closeAll, errors, eventually, marks, marksThat, openSample, openText, placeOf, replace, undo } from '../descriptions';
+import { openSample, openText, placeOf, replace, undo } from '../descriptions';
+import { closeAll, errors, eventually, marks, marksThat } from '../waiting';
 
 describe('marks while one types', () => {
   afterEach(closeAll);
