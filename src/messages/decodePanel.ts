@@ -25,8 +25,10 @@ const view = shape<PanelView>({
   frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row),
 });
 
-/** A message from the host; undefined where it is none. */
-export const decodeToPage: Decoder<ToPage> = byType<ToPage>({
+/** A message from the host; null where it is none. */
+export const decodeToPage = (data: unknown): ToPage | null => toPage(data) ?? null;
+
+const toPage: Decoder<ToPage> = byType<ToPage>({
   view: shape({ type: oneOf('view'), document: text, version: whole, view }),
   stale: shape({ type: oneOf('stale'), document: text, version: whole, reason: orNull(text), problems: listOf(problem) }),
   marker: shape({ type: oneOf('marker'), document: text, version: whole, request: whole, marker: orNull(marker), refusal: orNull(text) }),
@@ -34,8 +36,10 @@ export const decodeToPage: Decoder<ToPage> = byType<ToPage>({
   nothing: shape({ type: oneOf('nothing'), document: (data) => (data === '' ? '' : undefined), version: (data) => (data === 0 ? 0 : undefined), message: text }),
 });
 
-/** A message from the page; undefined where it is none. */
-export const decodeToHost: Decoder<ToHost> = byType<ToHost>({
+/** A message from the page; null where it is none. */
+export const decodeToHost = (data: unknown): ToHost | null => toHost(data) ?? null;
+
+const toHost: Decoder<ToHost> = byType<ToHost>({
   ready: shape({ type: oneOf('ready') }),
   'move marker': shape({ type: oneOf('move marker'), document: text, request: whole, frequencyHz: number }),
   'type marker': shape({ type: oneOf('type marker'), document: text, request: whole, text }),
