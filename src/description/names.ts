@@ -1,4 +1,5 @@
 import type { Located, Span } from '../base/span';
+import { letUses } from './letUses';
 import type { DescriptionSyntax, ElementSyntax, ImpedanceSyntax } from './syntax';
 
 export type NameKind = 'band' | 'case' | 'family' | 'tunable' | 'element' | 'goal' | 'let';
@@ -81,6 +82,7 @@ export function namesIn(syntax: DescriptionSyntax): NamedThing[] {
     measured.codes.forEach(({ tunable }) => use('tunable', tunable));
     measured.fixture?.forEach(element);
   }
+  letUses(syntax.text, new Set(syntax.lets.map((each) => each.name.value))).forEach((name) => use('let', name));
   for (const draft of found.values()) draft.references.sort((a, b) => a.start - b.start);
   return [...found.values()];
 }
