@@ -1,0 +1,12 @@
+/** What a person can do in the page; each section is handed these and knows nothing of messages. */
+export interface Actions {
+  revealLine(line: number): void;
+  pointAt(elementId: string | null): void;
+  moveMarker(frequencyHz: number): void;
+  typeMarker(text: string): void;
+  stepValue(elementId: string, direction: 'up' | 'down'): void;
+  setValue(elementId: string, text: string): void;
+  copy(what: 'chart svg' | 'ladder csv' | 'ladder markdown', text: string): void;
+  save(what: 'chart svg' | 'chart png', base64: string): void;
+  pin(pinned: boolean): void;
+}

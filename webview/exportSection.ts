@@ -1,0 +1,67 @@
+import type { LadderRowView, PanelView } from '../src/messages/panel';
+import { chartBox, chartViewBox, smithChart } from '../src/picture/smithChart';
+import { standaloneStyle } from '../src/picture/standaloneStyle';
+import type { Actions } from './actions';
+import type { Controls } from './controls';
+import { element } from './dom';
+
+const pixelsPerUnit = 3;
+
+/** Copies and files of what the panel shows. */
+export function exportSection(controls: Controls, actions: Actions) {
+  let view: PanelView | null = null;
+  const withView = (work: (shown: PanelView) => void) => () => { if (view) work(view); };
+  const buttons = [
+    controls.button({ label: 'Copy chart', description: 'Copy the chart as SVG', onPress: withView((shown) => actions.copy('chart svg', chartSvg(shown))) }),
+    controls.button({ label: 'Save SVG', description: 'Save the chart as SVG', onPress: withView((shown) => actions.save('chart svg', toBase64(new TextEncoder().encode(chartSvg(shown))))) }),
+    controls.button({ label: 'Save PNG', description: 'Save the chart as PNG', onPress: withView((shown) => void chartPng(shown).then((base64) => actions.save('chart png', base64))) }),
+    controls.button({ label: 'Copy table as CSV', onPress: withView((shown) => actions.copy('ladder csv', ladderCsv(shown.ladder))) }),
+    controls.button({ label: 'Copy table as Markdown', onPress: withView((shown) => actions.copy('ladder markdown', ladderMarkdown(shown.ladder))) }),
+  ];
+  return {
+    root: element('section', { class: 'exports', 'aria-label': 'Copy or save' }, ...buttons),
+    update(next: PanelView) {
+      view = next;
+    },
+  };
+}
+
+const isDark = () => document.body.classList.contains('vscode-dark') || (document.body.classList.contains('vscode-high-contrast') && !document.body.classList.contains('vscode-high-contrast-light'));
+
+function chartSvg(view: PanelView): string {
+  const size = `width="${2 * chartBox.width}" height="${2 * chartBox.height}"`;
+  return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="${chartViewBox}" ${size}><style>${standaloneStyle(isDark() ? 'dark' : 'light')}</style><rect class="paper" x="${chartBox.x}" y="${chartBox.y}" width="${chartBox.width}" height="${chartBox.height}"/>${smithChart(view)}</svg>`;
+}
+
+async function chartPng(view: PanelView): Promise<string> {
+  const address = URL.createObjectURL(new Blob([chartSvg(view)], { type: 'image/svg+xml' }));
+  try {
+    const image = new Image();
+    image.src = address;
+    await image.decode();
+    const canvas = element('canvas', { width: chartBox.width * pixelsPerUnit, height: chartBox.height * pixelsPerUnit });
+    canvas.getContext('2d')!.drawImage(image, 0, 0, canvas.width, canvas.height);
+    return canvas.toDataURL('image/png').split(',')[1];
+  } finally {
+    URL.revokeObjectURL(address);
+  }
+}
+
+function toBase64(bytes: Uint8Array): string {
+  let binary = '';
+  for (const byte of bytes) binary += String.fromCharCode(byte);
+  return btoa(binary);
+}
+
+const head = ['element', 'orientation', 'value', 'X or B', 'Z after', 'peak', 'current', 'heat'];
+const cellsOf = (row: LadderRowView) => [row.name, row.orientation === 'end' ? '' : row.orientation, row.value, row.reactance, row.impedanceAfter, row.voltage, row.current, row.heat];
+
+function ladderCsv(rows: readonly LadderRowView[]): string {
+  const quoted = (text: string) => (/[",\n]/.test(text) ? `"${text.replace(/"/g, '""')}"` : text);
+  return [head, ...rows.map(cellsOf)].map((cells) => cells.map(quoted).join(',')).join('\r\n') + '\r\n';
+}
+
+function ladderMarkdown(rows: readonly LadderRowView[]): string {
+  const line = (cells: readonly string[]) => `| ${cells.map((cell) => cell.replace(/\|/g, '\\|')).join(' | ')} |`;
+  return [line(head), line(head.map(() => '---')), ...rows.map((row) => line(cellsOf(row)))].join('\n') + '\n';
+}

@@ -1,0 +1,28 @@
+import type { PanelView } from '../src/messages/panel';
+import type { Actions } from './actions';
+import type { Controls } from './controls';
+import { element, setText } from './dom';
+
+/** Title, file, and how fresh the numbers are. */
+export function headerSection(controls: Controls, actions: Actions) {
+  let pinned = false;
+  const title = element('h1');
+  const file = element('span', { class: 'file' });
+  const freshness = element('span', { class: 'freshness', role: 'status' });
+  const pin = controls.button({ label: 'Pin', description: 'Pin the panel to this description', onPress: () => actions.pin(!pinned) });
+  const root = element('header', {}, title, element('div', { class: 'file-line' }, file, freshness, pin));
+  return {
+    root,
+    update(view: PanelView) {
+      pinned = view.pinned;
+      setText(title, view.title);
+      setText(file, view.fileName);
+      setText(pin, pinned ? 'Unpin' : 'Pin');
+      pin.setAttribute('aria-label', pinned ? 'Let the panel follow the active description' : 'Pin the panel to this description');
+    },
+    setFreshness(text: string, old: boolean) {
+      setText(freshness, text);
+      root.classList.toggle('old', old);
+    },
+  };
+}

@@ -1,0 +1,69 @@
+import type { LadderRowView, PanelView } from '../src/messages/panel';
+import { ladderSymbol, symbolSize } from '../src/picture/ladderSymbol';
+import type { Actions } from './actions';
+import type { Controls, TextField } from './controls';
+import { element, picture, setMarkup, setText, syncList } from './dom';
+
+const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat'] as const;
+
+/** Element by element from the load down to the source. Values are typed over or stepped; a row leads to its line. */
+export function ladderSection(controls: Controls, actions: Actions) {
+  const fields = new WeakMap<HTMLElement, TextField>();
+  let rows: readonly LadderRowView[] = [];
+  const body = element('tbody');
+  const table = element('table', { class: 'ladder' },
+    element('caption', { class: 'hidden-text', text: 'Ladder, from the load down to the source' }),
+    element('thead', {}, element('tr', {}, element('th', { scope: 'col', class: 'symbol' }, element('span', { class: 'hidden-text', text: 'symbol' })), element('th', { scope: 'col' }, element('span', { class: 'hidden-text', text: 'element' })),
+      ...columns.map((name) => element('th', { scope: 'col', class: `number ${name === 'current' ? 'wide-only' : ''}`, text: name })))), body);
+  const root = element('section', { class: 'ladder-section', 'aria-label': 'Ladder' }, element('h2', { text: 'Ladder, from the load down to the source' }), element('div', { class: 'table-frame', tabindex: '0', role: 'region', 'aria-label': 'Ladder table' }, table));
+
+  const makeRow = () => {
+    const row = element('tr');
+    const id = () => row.dataset.element ?? '';
+    const field = controls.textField({ label: 'Value', onSubmit: (text) => actions.setValue(id(), text), onArrow: (direction) => actions.stepValue(id(), direction) });
+    fields.set(row, field);
+    const reveal = element('button', { type: 'button', class: 'row-button name', click: () => {
+      const line = rows.find((candidate) => candidate.id === id())?.line ?? null;
+      if (line !== null) actions.revealLine(line);
+    } }, element('span', { class: 'designator' }), element('span', { class: 'orientation' }));
+    row.append(
+      element('td', { class: 'symbol' }, picture(`0 0 ${symbolSize.width} ${symbolSize.height}`, { width: symbolSize.width, height: symbolSize.height, class: 'symbol', 'aria-hidden': 'true' }) as unknown as HTMLElement),
+      element('th', { scope: 'row' }, reveal),
+      element('td', { class: 'number value' }, element('span', { class: 'shown' }), field.root),
+      ...columns.slice(1).map((name) => element('td', { class: `number ${name === 'current' ? 'wide-only' : ''}` })));
+    const elementId = () => (row.classList.contains('end') ? null : id());
+    row.addEventListener('pointerenter', () => actions.pointAt(elementId()));
+    row.addEventListener('pointerleave', () => actions.pointAt(null));
+    row.addEventListener('focusin', () => actions.pointAt(elementId()));
+    row.addEventListener('focusout', () => actions.pointAt(null));
+    return row;
+  };
+  const updateRow = (row: HTMLElement, data: LadderRowView) => {
+    const field = fields.get(row)!;
+    row.dataset.element = data.id;
+    row.classList.toggle('end', data.orientation === 'end');
+    row.title = data.note;
+    setMarkup(row.querySelector('svg')!, ladderSymbol(data));
+    setText(row.querySelector('.designator')!, data.name);
+    setText(row.querySelector('.orientation')!, data.orientation === 'end' || data.orientation === 'through' ? '' : data.orientation);
+    const button = row.querySelector('button')!;
+    button.disabled = data.line === null;
+    field.root.hidden = !data.editable;
+    field.root.setAttribute('aria-label', `Value of ${data.name}; arrow keys step it`);
+    if (data.editable) field.setValue(data.value);
+    setText(row.querySelector('.shown')!, data.editable ? '' : data.value);
+    const cells = row.querySelectorAll(':scope > td.number');
+    [data.reactance, data.impedanceAfter, data.voltage, data.current, data.heat].forEach((text, i) => setText(cells[i + 1], text));
+  };
+  return {
+    root,
+    update(view: PanelView) {
+      rows = view.ladder;
+      syncList(body, view.ladder, makeRow, updateRow);
+      root.hidden = view.ladder.length === 0;
+    },
+    highlight(elementId: string | null) {
+      for (const row of body.children) row.classList.toggle('current', elementId !== null && (row as HTMLElement).dataset.element === elementId);
+    },
+  };
+}

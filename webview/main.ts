@@ -1,0 +1,139 @@
+import { decodeToPage } from '../src/messages/decodePanel';
+import type { PanelView } from '../src/messages/panel';
+import type { Actions } from './actions';
+import { chartSection } from './chartSection';
+import { plainControls, toolkitControls } from './controls';
+import { element, setText } from './dom';
+import { exportSection } from './exportSection';
+import { headerSection } from './headerSection';
+import { connectHost } from './host';
+import { ladderSection } from './ladderSection';
+import { plotsSection } from './plotsSection';
+import { problemsSection } from './problemsSection';
+import { verdictSection } from './verdictSection';
+
+const host = connectHost();
+let shown: { document: string; version: number; view: PanelView | null } | null = null;
+let request = 0;
+let pointed: string | null = null;
+
+const send = {
+  document: () => shown?.document ?? '',
+  version: () => shown?.version ?? 0,
+};
+const actions: Actions = {
+  revealLine: (line) => host.send({ type: 'reveal line', document: send.document(), line }),
+  pointAt(elementId) {
+    if (elementId === pointed) return;
+    pointed = elementId;
+    highlight(elementId);
+    host.send({ type: 'point at element', document: send.document(), elementId });
+  },
+  moveMarker: (frequencyHz) => host.send({ type: 'move marker', document: send.document(), request: ++request, frequencyHz }),
+  typeMarker: (text) => host.send({ type: 'type marker', document: send.document(), request: ++request, text }),
+  stepValue: (elementId, direction) => host.send({ type: 'step value', document: send.document(), version: send.version(), elementId, direction }),
+  setValue: (elementId, text) => host.send({ type: 'set value', document: send.document(), version: send.version(), elementId, text }),
+  copy: (what, text) => host.send({ type: 'copy', document: send.document(), what, text }),
+  save: (what, base64) => host.send({ type: 'save', document: send.document(), what, base64 }),
+  pin: (pinned) => host.send({ type: 'pin', document: send.document(), pinned }),
+};
+
+// `data-controls="plain"` on the page's main element asks for ordinary HTML controls instead of the toolkit's.
+const main = document.getElementById('panel')!;
+const controls = main.dataset.controls === 'plain' ? plainControls() : toolkitControls();
+const header = headerSection(controls, actions);
+const problems = problemsSection(actions);
+const verdict = verdictSection(actions);
+const chart = chartSection(controls, actions);
+const plots = plotsSection(actions);
+const ladder = ladderSection(controls, actions);
+const exports = exportSection(controls, actions);
+const nothing = element('p', { class: 'nothing' });
+const content = element('div', { class: 'content' },
+  header.root, problems.root,
+  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, exports.root)));
+const pictures = content.querySelector<HTMLElement>('.columns')!;
+content.hidden = true;
+setText(nothing, 'Waiting for the first picture …');
+main.append(nothing, content);
+
+function highlight(elementId: string | null): void {
+  chart.highlight(elementId);
+  ladder.highlight(elementId);
+}
+
+/** Latest wins: however many views arrive before the next frame, one is drawn. */
+let waiting = false;
+function draw(): void {
+  if (waiting) return;
+  waiting = true;
+  requestAnimationFrame(() => {
+    waiting = false;
+    const view = shown?.view;
+    if (!view) return;
+    nothing.hidden = true;
+    content.hidden = false;
+    pictures.hidden = false;
+    header.update(view);
+    verdict.update(view);
+    chart.update(view);
+    plots.update(view);
+    ladder.update(view);
+    exports.update(view);
+    highlight(pointed);
+  });
+}
+
+window.addEventListener('message', (event: MessageEvent<unknown>) => {
+  const message = decodeToPage(event.data);
+  if (!message) return;
+  const isOlder = shown !== null && message.document === shown.document && message.version < shown.version;
+  if (isOlder) return;
+  switch (message.type) {
+    case 'view':
+      shown = { document: message.document, version: message.version, view: message.view };
+      host.remember({ document: message.document });
+      problems.update(message.view.problems, message.view.cautions);
+      header.setFreshness('up to date', false);
+      content.classList.remove('stale');
+      draw();
+      break;
+    case 'stale': {
+      const kept = shown?.document === message.document ? shown.view : null;
+      shown = { document: message.document, version: message.version, view: kept };
+      host.remember({ document: message.document });
+      if (message.problems.length > 0 || message.reason !== null) problems.update(message.problems, kept?.cautions ?? []);
+      header.setFreshness(message.reason === null ? 'being worked out anew' : `old numbers: ${message.reason}`, true);
+      content.classList.add('stale');
+      nothing.hidden = true;
+      content.hidden = false;
+      pictures.hidden = kept === null;
+      break;
+    }
+    case 'marker':
+      if (message.document !== shown?.document || message.request !== request || !shown.view) break;
+      if (message.marker) {
+        shown.view = { ...shown.view, marker: message.marker };
+        draw();
+      } else {
+        chart.refuse(message.refusal ?? '');
+      }
+      break;
+    case 'cursor':
+      if (message.document !== shown?.document) break;
+      pointed = message.elementId;
+      highlight(message.elementId);
+      verdict.highlight(message.goalId);
+      break;
+    case 'nothing':
+      shown = null;
+      content.hidden = true;
+      nothing.hidden = false;
+      setText(nothing, message.message);
+      break;
+  }
+});
+
+window.addEventListener('error', (event) => host.send({ type: 'failure', message: String(event.message) }));
+window.addEventListener('unhandledrejection', (event) => host.send({ type: 'failure', message: String(event.reason) }));
+host.send({ type: 'ready' });

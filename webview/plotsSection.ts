@@ -1,0 +1,53 @@
+import type { PanelView } from '../src/messages/panel';
+import { frequencyPlot, frequencyScale, frequencyUnit, plotSize } from '../src/picture/frequencyPlot';
+import type { Actions } from './actions';
+import { element, picture, setMarkup, setText } from './dom';
+import { stepFrequency } from './stepFrequency';
+
+const plots = ['reflection', 'gain'] as const;
+
+/** Reflection and gain over frequency; the marker is dragged over either and stepped with the arrow keys. */
+export function plotsSection(actions: Actions) {
+  let view: PanelView | null = null;
+  const heading = element('h2');
+  const pictures = plots.map(() => picture(`0 0 ${plotSize.width} ${plotSize.height}`, { class: 'plot', role: 'slider', tabindex: '0', 'aria-orientation': 'horizontal' }));
+  const root = element('section', { class: 'plots-section', 'aria-label': 'Over frequency' }, heading, ...pictures.map((made) => made as unknown as HTMLElement));
+  for (const made of pictures) {
+    const follow = (event: PointerEvent) => {
+      const x = view && frequencyScale(view.frequencyHz);
+      if (!view || !x) return;
+      const box = made.getBoundingClientRect();
+      const [low, high] = [view.frequencyHz[0], view.frequencyHz[view.frequencyHz.length - 1]];
+      actions.moveMarker(Math.min(Math.max(x.invert(((event.clientX - box.left) / box.width) * plotSize.width), low), high));
+    };
+    made.addEventListener('pointerdown', (event) => {
+      made.setPointerCapture(event.pointerId);
+      follow(event);
+    });
+    made.addEventListener('pointermove', (event) => {
+      if (made.hasPointerCapture(event.pointerId)) follow(event);
+    });
+    made.addEventListener('keydown', (event) => {
+      const points = { ArrowRight: 1, ArrowUp: 1, ArrowLeft: -1, ArrowDown: -1, PageUp: 10, PageDown: -10, Home: -1e9, End: 1e9 }[event.key];
+      const next = points === undefined || !view?.marker ? null : stepFrequency(view.frequencyHz, view.marker.frequencyHz, points);
+      if (next === null) return;
+      event.preventDefault();
+      actions.moveMarker(next);
+    });
+  }
+  return {
+    root,
+    update(next: PanelView) {
+      view = next;
+      setText(heading, `Over frequency, ${frequencyUnit(next.frequencyHz).unit}`);
+      pictures.forEach((made, i) => {
+        setMarkup(made, frequencyPlot({ plot: plots[i], frequencyHz: next.frequencyHz, traces: next.traces, bands: next.bands, masks: next.masks, markerHz: next.marker?.frequencyHz ?? null }));
+        made.setAttribute('aria-label', `${plots[i] === 'reflection' ? 'Reflection' : 'Gain'} over frequency; marker`);
+        made.setAttribute('aria-valuemin', String(next.frequencyHz[0] ?? 0));
+        made.setAttribute('aria-valuemax', String(next.frequencyHz[next.frequencyHz.length - 1] ?? 0));
+        made.setAttribute('aria-valuenow', String(next.marker?.frequencyHz ?? next.frequencyHz[0] ?? 0));
+        made.setAttribute('aria-valuetext', next.marker?.text ?? 'not set');
+      });
+    },
+  };
+}

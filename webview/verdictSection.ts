@@ -1,0 +1,44 @@
+import type { GoalView, PanelView } from '../src/messages/panel';
+import { barSize, goalBar } from '../src/picture/goalBar';
+import type { Actions } from './actions';
+import { element, picture, setMarkup, setText, syncList } from './dom';
+
+/** Goal by goal: whether it holds, its margin as a bar, its worst value and where. Each leads to its line. */
+export function verdictSection(actions: Actions) {
+  const heading = element('h2');
+  const list = element('ul', { class: 'goals' });
+  const root = element('section', { class: 'verdict', 'aria-label': 'Verdict' }, heading, list);
+  const makeGoal = () => {
+    const button = element('button', { type: 'button', class: 'row-button goal', click: () => actions.revealLine(Number(button.dataset.line)) },
+      element('span', { class: 'mark', 'aria-hidden': 'true' }),
+      element('span', { class: 'what' }, element('span', { class: 'title' }), element('span', { class: 'place' })),
+      element('span', { class: 'value' }, element('span', { class: 'number' }), element('span', { class: 'detail' })));
+    button.insertBefore(picture(`0 0 ${barSize.width} ${barSize.height}`, { class: 'bar', 'aria-hidden': 'true', preserveAspectRatio: 'none' }) as unknown as HTMLElement, button.lastElementChild);
+    return element('li', {}, button);
+  };
+  const updateGoal = (item: HTMLElement, goal: GoalView) => {
+    const button = item.firstElementChild as HTMLButtonElement;
+    item.className = goal.ok ? 'held' : 'missed';
+    item.dataset.goal = String(goal.id);
+    button.dataset.line = String(goal.line);
+    const find = (name: string) => button.querySelector(`.${name}`)!;
+    setText(find('mark'), goal.ok ? '✓' : '✗');
+    setText(find('title'), goal.title);
+    setText(find('place'), goal.place);
+    setText(find('number'), goal.valueText);
+    setText(find('detail'), goal.detail);
+    setMarkup(find('bar') as SVGElement, goalBar(goal.bar));
+    button.setAttribute('aria-label', [goal.title, goal.place, goal.ok ? 'holds' : 'missed', goal.valueText, goal.marginText, goal.detail].filter((text) => text !== '').join(', '));
+    button.title = goal.marginText;
+  };
+  return {
+    root,
+    update({ verdict, goals }: Pick<PanelView, 'verdict' | 'goals'>) {
+      setText(heading, verdict === '' ? 'Verdict: no goals yet' : `Verdict: ${verdict}`);
+      syncList(list, goals, makeGoal, updateGoal);
+    },
+    highlight(goalId: number | null) {
+      for (const item of list.children) item.classList.toggle('current', goalId !== null && (item as HTMLElement).dataset.goal === String(goalId));
+    },
+  };
+}
