@@ -12,6 +12,9 @@ export const opensOnOneLineAtMost = 40;
 export const repairsAtMost = 60;
 /** Rounds of repairing and reading again. */
 export const repairRoundsAtMost = 3;
+/** Lines that are left out so that the others can be read, and characters that are read again for it. */
+export const skippedLinesAtMost = 10;
+export const skippedCharactersAtMost = 400_000;
 /** Errors of the YAML reader itself that are shown. */
 export const yamlErrorsAtMost = 20;
 

@@ -31,7 +31,7 @@ export function readDescription(text: string, options: ReadOptions): Description
   const tree = yamlTree(text);
   const syntax = emptySyntax(text);
   if (tree.root?.form === 'mapping') {
-    readSections(tree.root, syntax, { report, lets: new Map(), expressions: options.expressions, text });
+    readSections(tree.root, syntax, { report, lets: new Map(), expressions: options.expressions, text }, tree.unexplained.length > 0);
   } else if (tree.root) {
     report(mistake('wrong-shape', `A match description is a mapping of keys, such as «ohmward: 1», not ${shapeOf(tree.root)}.`, firstLine(text)));
   } else if (tree.diagnostics.length === 0) {
@@ -56,7 +56,7 @@ export function emptySyntax(text: string): Draft {
   };
 }
 
-function readSections(root: MappingNode, syntax: Draft, context: SectionContext): void {
+function readSections(root: MappingNode, syntax: Draft, context: SectionContext, broken: boolean): void {
   // Names of `let` serve the whole text, wherever they stand in it.
   const letEntry = root.entries.find(({ key }) => key.phrase.text === 'let');
   const { lets, values } = letEntry ? readLets(letEntry, context) : { lets: [], values: new Map<string, LetValue>() };
@@ -68,7 +68,8 @@ function readSections(root: MappingNode, syntax: Draft, context: SectionContext)
     else reportUnknownKey(entry.key, 'description', inner);
   }
   for (const { name } of keysAt('description').filter((entry) => entry.required)) {
-    if (root.entries.some(({ key }) => key.phrase.text === name)) continue;
+    // A key on a line that YAML cannot read is there all the same.
+    if (root.entries.some(({ key }) => key.phrase.text === name) || (broken && new RegExp(`^[ \\t]*${name}[ \\t]*:`, 'm').test(context.text))) continue;
     const fixes = name === 'ohmward' ? [{ title: 'Insert «ohmward: 1»', edits: [{ span: { start: root.span.start, end: root.span.start }, text: 'ohmward: 1\n' }], preferred: true }] : undefined;
     inner.report(mistake('missing-key', `«${name}» is missing; a description needs «ohmward», «load» and «ladder».`, firstLine(context.text), { fixes }));
   }

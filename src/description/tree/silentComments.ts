@@ -1,8 +1,8 @@
 import type { CST } from 'yaml';
 import type { Diagnostic } from '../../base/diagnostic';
+import { lineAt } from './lineAt';
 import type { RepairedText } from './repairedText';
 import { visitTokens } from './visitTokens';
-import { lineAt } from './yamlTraps';
 
 /**
  * Warnings for comments that look like part of the phrase before them: `title: Board #4`. A comment after a phrase is

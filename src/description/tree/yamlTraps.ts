@@ -1,15 +1,11 @@
 import type { Diagnostic, TextEdit } from '../../base/diagnostic';
+import { lineAt, type Line } from './lineAt';
 import { phraseEndOnLine, quotePhrase } from './quotePhrase';
 
 /** A trap of YAML found on a line: what to say, and the edits that mend it. */
 export interface Trap {
   readonly diagnostic: Diagnostic;
   readonly edits: readonly TextEdit[];
-}
-
-interface Line {
-  readonly start: number;
-  readonly text: string;
 }
 
 /** Key, colon and phrase of a line, as far as its text alone tells. */
@@ -40,14 +36,6 @@ export function missingSpaceTrap(line: Line): Trap | null {
   const colon = line.start + found[1].length + found[2].length;
   const edits = [{ span: { start: colon + 1, end: colon + 1 }, text: ' ' }];
   return trap('missing-space', `A space is missing after the colon of «${found[2]}»; without it YAML takes key and phrase as one word.`, colon, colon + 1, 'Insert a space', edits);
-}
-
-export function lineAt(text: string, offset: number): Line {
-  let start = Math.min(Math.max(offset, 0), text.length);
-  while (start > 0 && text[start - 1] !== '\n' && text[start - 1] !== '\r') start--;
-  let end = start;
-  while (end < text.length && text[end] !== '\n' && text[end] !== '\r') end++;
-  return { start, text: text.slice(start, end) };
 }
 
 function tabTrap(line: Line): Trap | null {

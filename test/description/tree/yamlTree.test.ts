@@ -139,6 +139,25 @@ describe('traps of YAML', () => {
   });
 });
 
+describe('a text with a line that YAML cannot read', () => {
+  const broken: [string, string, string[], Plain][] = [
+    ['an unclosed quotation mark', 'title: "Orch\nz0: 50 Ω\nload:\n  - b\n', ['unclosed-quote: "'], { z0: '50 Ω', load: ['b'] }],
+    ['an unclosed bracket', 'a: [1, 2\nz0: 50 Ω\n', ['unclosed-bracket: ['], { z0: '50 Ω' }],
+    ['a stray bracket', 'z0: 50 Ω\nsource:]\ntitle: x\nload: y\n', ['missing-space: :'], { z0: '50 Ω', title: 'x', load: 'y' }],
+    ['words at the wrong column', 'ladder:\n    - a\n   - b\nz0: 1\n', ['bad-indentation:    '], { ladder: ['a'], z0: '1' }],
+    ['text after a quotation mark', 'title: "a" b\nz0: 1\n', ['text-after-end: b'], { z0: '1' }],
+    ['nothing but words', 'z0: 1\nwords\nload: x\n', ['missing-colon: words'], { z0: '1', load: 'x' }],
+    ['words, and an anchor before them', 'z0: &a 1\nwords\nload: x\n', ['yaml-anchor: &a', 'missing-colon: words'], { z0: '1', load: 'x' }],
+    ['lines below a phrase', 'a: 1\n  b: 2\nc: 3\n', ['bad-indentation: 1'], { a: '1', c: '3' }],
+  ];
+  for (const [name, text, expected, reading] of broken) {
+    it(`reads the others beside ${name}`, () => {
+      assert.deepEqual(told(text), expected);
+      assert.deepEqual(plain(yamlTree(text).root), reading);
+    });
+  }
+});
+
 describe('texts against the reader', () => {
   const hostile: [string, string][] = [
     ['brackets', '['.repeat(20_000)],
