@@ -45,14 +45,14 @@ function comparisonAt(s: Scanner, word: GoalWord): Located<Comparison> | null {
   const span = spanOf(s, start, s.at);
   if (found && Object.hasOwn(comparisons, found[0])) return { value: comparisons[found[0]], span };
   if (found) complain(s, 'comparison', 'A goal is a limit and not an exact value: >=, <=, > or <.', span, [replaceBy(span, word.usual)]);
-  else complain(s, 'comparison', `After «${word.quantity}» comes >=, <=, > or < and a limit, as in «${word.example}».`, restText(s) ? nextWord(s)!.span : spanOf(s, s.text.trimEnd().length, s.text.trimEnd().length));
+  else complain(s, 'comparison', `After «${word.quantity}» comes >=, <=, > or < and a limit, as in «${word.example}».`, restText(s) ? nextWord(s)?.span ?? restSpan(s) : spanOf(s, s.text.trimEnd().length, s.text.trimEnd().length));
   return null;
 }
 
 function elementAt(s: Scanner, word: GoalWord): Located<string> | null {
   const found = take(s, /[\p{L}][\p{L}\d_.-]*/uy);
   if (found) return { value: found[0], span: spanOf(s, s.at - found[0].length, s.at) };
-  complain(s, 'goal-element', `«${word.quantity}» is that of an element: «${word.example}».`, restText(s) ? nextWord(s)!.span : restSpan(s));
+  complain(s, 'goal-element', `«${word.quantity}» is that of an element: «${word.example}».`, restText(s) ? nextWord(s)?.span ?? restSpan(s) : restSpan(s));
   return null;
 }
 
