@@ -6,6 +6,9 @@ import { element, picture, setMarkup, setText, syncList } from './dom';
 
 const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat'] as const;
 
+/** Which columns give way first in a narrow panel. */
+const columnClass = (name: (typeof columns)[number]) => (name === 'current' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
+
 /** Element by element from the load down to the source. Values are typed over or stepped; a row leads to its line. */
 export function ladderSection(controls: Controls, actions: Actions) {
   const fields = new WeakMap<HTMLElement, TextField>();
@@ -14,7 +17,7 @@ export function ladderSection(controls: Controls, actions: Actions) {
   const table = element('table', { class: 'ladder' },
     element('caption', { class: 'hidden-text', text: 'Ladder, from the load down to the source' }),
     element('thead', {}, element('tr', {}, element('th', { scope: 'col', class: 'symbol' }, element('span', { class: 'hidden-text', text: 'symbol' })), element('th', { scope: 'col' }, element('span', { class: 'hidden-text', text: 'element' })),
-      ...columns.map((name) => element('th', { scope: 'col', class: `number ${name === 'current' ? 'wide-only' : ''}`, text: name })))), body);
+      ...columns.map((name) => element('th', { scope: 'col', class: columnClass(name), text: name })))), body);
   const root = element('section', { class: 'ladder-section', 'aria-label': 'Ladder' }, element('h2', { text: 'Ladder, from the load down to the source' }), element('div', { class: 'table-frame', tabindex: '0', role: 'region', 'aria-label': 'Ladder table' }, table));
 
   const makeRow = () => {
@@ -30,7 +33,7 @@ export function ladderSection(controls: Controls, actions: Actions) {
       element('td', { class: 'symbol' }, picture(`0 0 ${symbolSize.width} ${symbolSize.height}`, { width: symbolSize.width, height: symbolSize.height, class: 'symbol', 'aria-hidden': 'true' }) as unknown as HTMLElement),
       element('th', { scope: 'row' }, reveal),
       element('td', { class: 'number value' }, element('span', { class: 'shown' }), field.root),
-      ...columns.slice(1).map((name) => element('td', { class: `number ${name === 'current' ? 'wide-only' : ''}` })));
+      ...columns.slice(1).map((name) => element('td', { class: columnClass(name) })));
     const elementId = () => (row.classList.contains('end') ? null : id());
     row.addEventListener('pointerenter', () => actions.pointAt(elementId()));
     row.addEventListener('pointerleave', () => actions.pointAt(null));

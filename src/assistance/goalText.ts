@@ -5,7 +5,7 @@ import type { Goal, GoalResult } from '../study/goal';
 
 const placeWords = /\s(?=(?:in|at|for|into|against)\s)/;
 
-const withSigns = (text: string) => text.replace(/>=/g, '≥').replace(/<=/g, '≤').replace(/(\d)\s*x\s/g, '$1 × ').replace(/\s+/g, ' ').trim();
+const withSigns = (text: string) => text.replace(/>=/g, '≥').replace(/<=/g, '≤').replace(/(\d)\s*x\s/g, '$1 × ').replace(/(^|\s)-(?=\d)/g, '$1−').replace(/\s+/g, ' ').trim();
 
 /** `return loss ≥ 12 dB` */
 export function goalTitle(goal: Goal): string {
@@ -68,10 +68,10 @@ export function goalMarginText({ goal, margin, reason, ok }: GoalResult): string
 
 const fullBarDb = 10;
 
-/** −1 … 1, 0 at the limit: 10 dB fill the bar, or as much as the limit itself for other units. Null where not known. */
+/** −1 … 1, 0 at the limit: 10 dB fill the bar, or as much as the limit itself for other units. Null for conditions and where not known. */
 export function goalBar({ goal, margin, reason, ok }: GoalResult): number | null {
-  if (margin === null && reason !== null) return null;
-  if (goal.comparison === null || margin === null) return ok ? 1 : -1;
+  if (goal.comparison === null || (margin === null && reason !== null)) return null;
+  if (margin === null) return ok ? 1 : -1;
   const full = goal.unit === 'dB' ? fullBarDb : Math.abs(goal.limit ?? 0) || 1;
   return Math.min(1, Math.max(-1, margin / full));
 }

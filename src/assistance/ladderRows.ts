@@ -5,7 +5,7 @@ import type { LadderRowView, LadderSymbol } from '../messages/panel';
 import { divide, complex, multiply, type Complex } from '../network/complex';
 import type { Element } from '../network/element';
 import { printComplex, printReactance } from '../quantity/printComplex';
-import { printQuantity } from '../quantity/printQuantity';
+import { printNumber, printQuantity } from '../quantity/printQuantity';
 
 import type { ElementResult } from '../study/evaluation';
 import { impedancePath } from '../study/impedancePath';
@@ -43,7 +43,10 @@ const impedanceOf = (reflection: Complex, z0Ohm: number): Complex =>
   multiply(complex(z0Ohm), divide({ re: 1 + reflection.re, im: reflection.im }, { re: 1 - reflection.re, im: -reflection.im }));
 
 function sourceText({ source, z0Ohm }: Problem): string {
-  if (source.impedance.form === 'constant') return printComplex(source.impedance.impedanceOhm, '');
+  if (source.impedance.form === 'constant') {
+    const { impedanceOhm } = source.impedance;
+    return impedanceOhm.im === 0 ? printNumber(impedanceOhm.re, digits) : printComplex(impedanceOhm, '');
+  }
   return source.byBand.size > 0 ? 'by band' : printQuantity(z0Ohm, 'Ω', { digits }).replace(' Ω', '');
 }
 

@@ -36,5 +36,5 @@ function caseView(problem: Problem, reading: MarkerReading, at: number, frequenc
 function markerText({ reflection, impedanceOhm, returnLossDb, reason }: MarkerReading): string {
   if (!reflection || !impedanceOhm) return reason ?? 'not known';
   const loss = returnLossDb === null || returnLossDb === Infinity ? '∞ dB' : printQuantity(returnLossDb, 'dB', { digits: 3 });
-  return `Γ ${printPolar(reflection)} · ${printComplex(impedanceOhm, 'Ω')} · return loss ${loss}`;
+  return `Γ ${printPolar(reflection)} · ${printComplex(impedanceOhm, 'Ω')} · ${loss}`;
 }
