@@ -1,11 +1,12 @@
 // Builds everything under dist/: node esbuild.mjs [--watch] [--development]
 import { existsSync } from 'node:fs';
-import { chmod, copyFile, mkdir, readdir, rm } from 'node:fs/promises';
+import { chmod, mkdir, readdir, readFile, rm } from 'node:fs/promises';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import * as esbuild from 'esbuild';
 
 const root = path.dirname(fileURLToPath(import.meta.url));
+const { version } = JSON.parse(await readFile(path.join(root, 'package.json'), 'utf8'));
 const watch = process.argv.includes('--watch');
 const development = watch || process.argv.includes('--development');
 
@@ -17,16 +18,16 @@ const common = {
   legalComments: 'none',
   logLevel: 'warning',
   charset: 'utf8',
-  define: { 'process.env.NODE_ENV': development ? '"development"' : '"production"' },
+  define: { 'process.env.NODE_ENV': development ? '"development"' : '"production"', OHMWARD_VERSION: JSON.stringify(version) },
 };
 const node = { ...common, platform: 'node', target: 'node20', format: 'cjs', mainFields: ['module', 'main'] };
 const browser = { ...common, platform: 'browser', target: 'es2022' };
 
-/** @type {{ entry: string; options: esbuild.BuildOptions; executable?: boolean; copies?: string[] }[]} */
+/** @type {{ entry: string; options: esbuild.BuildOptions; executable?: boolean }[]} */
 const outputs = [
   { entry: 'src/editor/extension.ts', options: { ...node, outfile: 'dist/extension.cjs', external: ['vscode'] } },
-  // The worker host takes the entry for CommonJS only if its name ends in .cjs; editors before some newer version then add .js to it.
-  { entry: 'src/editor/extensionBrowser.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.browser.cjs', external: ['vscode'] }, copies: ['dist/extension.browser.cjs.js'] },
+  // The worker host of the editors that live in a browser takes an entry for CommonJS only if its name ends in .cjs.
+  { entry: 'src/editor/extensionBrowser.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.browser.cjs', external: ['vscode'] } },
   { entry: 'src/cli/main.ts', options: { ...node, outfile: 'dist/ohmward.cjs', banner: { js: '#!/usr/bin/env node' } }, executable: true },
   { entry: 'src/worker/main.ts', options: { ...node, outfile: 'dist/worker.cjs' } },
   { entry: 'src/worker/mainBrowser.ts', options: { ...browser, format: 'iife', outfile: 'dist/worker.browser.js' } },
@@ -36,7 +37,7 @@ const outputs = [
 
 const dist = path.join(root, 'dist');
 await mkdir(dist, { recursive: true });
-const wanted = new Set(outputs.flatMap(({ options, copies = [] }) => [options.outfile, ...copies, ...(development ? [`${options.outfile}.map`] : [])]));
+const wanted = new Set(outputs.flatMap(({ options }) => [options.outfile, ...(development ? [`${options.outfile}.map`] : [])]));
 for (const name of await readdir(dist)) {
   if (!wanted.has(`dist/${name}`)) await rm(path.join(dist, name), { recursive: true, force: true });
 }
@@ -56,13 +57,12 @@ if (watch) {
 } else {
   const results = await Promise.allSettled(present.map(({ entry, options }) => esbuild.build({ ...options, entryPoints: [entry], metafile: true })));
   for (const [i, result] of results.entries()) {
-    const { entry, options, executable, copies = [] } = present[i];
+    const { entry, options, executable } = present[i];
     if (result.status === 'rejected') {
       process.exitCode = 1; // esbuild has printed what is wrong
       continue;
     }
     const bytes = Object.values(result.value.metafile.outputs).reduce((sum, output) => sum + output.bytes, 0);
-    for (const copy of copies) await copyFile(path.join(root, options.outfile), path.join(root, copy));
     if (executable) await chmod(path.join(root, options.outfile), 0o755);
     console.log(`${options.outfile.padEnd(28)} ${(bytes / 1024).toFixed(1).padStart(8)} kB  ${entry}`);
   }

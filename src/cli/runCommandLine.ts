@@ -1,6 +1,7 @@
 import { parseArgs } from 'node:util';
 import { CallError } from './callError';
 import { check } from './check';
+import { report } from './report';
 import { sweep } from './sweep';
 import { tidyFiles } from './tidyFiles';
 import { usage } from './usage';
@@ -28,6 +29,7 @@ interface Command {
 const commands: Readonly<Record<string, Command>> = {
   check: { options: ['format', 'since'], run: check },
   sweep: { options: ['format', 'output', 'case', 'two-port'], run: sweep },
+  report: { options: ['output'], run: report },
   tidy: { options: ['verify'], run: tidyFiles },
 };
 

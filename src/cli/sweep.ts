@@ -12,7 +12,7 @@ import { assessFiles, type AssessedFile } from './assessFiles';
 import { CallError } from './callError';
 import { formatOf } from './formatOf';
 import type { CallOptions, Surroundings } from './runCommandLine';
-import { writeWhole } from './tidyFiles';
+import { writeWhole } from './writeWhole';
 import { writeDiagnostics } from './writeDiagnostics';
 
 interface Swept {

@@ -1,5 +1,3 @@
-import { randomBytes } from 'node:crypto';
-import { renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { tidy } from '../description/tidy';
 import { readDescription } from '../description/readDescription';
 import { readText } from './assessFile';
@@ -7,6 +5,7 @@ import { shownPath } from './assessFiles';
 import { findDescriptions } from './findDescriptions';
 import type { CallOptions, Surroundings } from './runCommandLine';
 import { lineMap } from '../base/lineMap';
+import { writeWhole } from './writeWhole';
 
 /** Lays descriptions out in place, or with `--verify` only says which ones would change. */
 export function tidyFiles(paths: readonly string[], options: CallOptions, around: Surroundings): number {
@@ -32,22 +31,4 @@ export function tidyFiles(paths: readonly string[], options: CallOptions, around
     }
   }
   return failed ? 1 : 0;
-}
-
-/** Beside it first, then renamed over it: a reader sees the old file or the new one, never half of one. */
-export function writeWhole(path: string, text: string): void {
-  const beside = `${path}.${randomBytes(6).toString('hex')}.tmp`;
-  try {
-    let mode = 0o644;
-    try {
-      mode = statSync(path).mode;
-    } catch {
-      // A new file: the usual mode stands.
-    }
-    writeFileSync(beside, text, { flag: 'wx', mode });
-    renameSync(beside, path);
-  } catch (error) {
-    rmSync(beside, { force: true });
-    throw error;
-  }
 }

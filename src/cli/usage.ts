@@ -8,6 +8,8 @@ export const usage = `ohmward COMMAND [options] FILE or FOLDER …
             --case NAME              only this load case
             --two-port               the ladder itself as a two-port (touchstone)
             -o, --output PATH        a file, or a folder where there are several
+  report  one self-contained HTML file with pictures and tables
+            -o, --output FILE
   tidy    lays descriptions out
             --verify                 changes nothing; fails where something would change
 
