@@ -1,5 +1,5 @@
 import * as vscode from 'vscode';
-import { elementAt } from '../assistance/panelView';
+import { elementAt } from '../assistance/elementAt';
 import { steppedValue } from '../assistance/steppedValue';
 import { worstGoal } from '../assistance/worstGoal';
 import type { DocumentStudies } from './documentStudies';

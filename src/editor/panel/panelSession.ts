@@ -1,10 +1,12 @@
 import * as vscode from 'vscode';
-import { elementAt, markerView, panelView, readMarkerText } from '../../assistance/panelView';
+import { elementAt } from '../../assistance/elementAt';
+import { markerView } from '../../assistance/markerView';
+import { panelView, problemViews } from '../../assistance/panelView';
+import { readMarkerText } from '../../assistance/readMarkerText';
 import { setValue, steppedValue } from '../../assistance/steppedValue';
-import { lineMap } from '../../base/lineMap';
 import { decodeToHost } from '../../messages/decodePanel';
 import { pageHtml } from '../../messages/pageHtml';
-import type { ProblemView, ToHost, ToPage } from '../../messages/panel';
+import type { ToHost, ToPage } from '../../messages/panel';
 import type { DocumentStudies, Study } from '../documentStudies';
 import type { Log } from '../log';
 import { copyText, savePicture } from './exports';
@@ -50,11 +52,6 @@ function freshNonce(): string {
 
 const fileNameOf = (document: vscode.TextDocument) => document.uri.path.split('/').at(-1) ?? '';
 
-function problemsOf({ text, assessment }: Study): ProblemView[] {
-  const lines = lineMap(text);
-  return assessment.diagnostics.map(({ severity, message, span }) => ({ severity, message, line: lines.positionAt(span.start).line }));
-}
-
 async function revealLine(document: vscode.TextDocument, line: number): Promise<void> {
   if (line >= document.lineCount) return;
   const at = document.lineAt(line).range;
@@ -70,6 +67,10 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const changed = new vscode.EventEmitter<void>();
   let shown: vscode.TextDocument | null = null;
   let staleTimer: ReturnType<typeof setTimeout> | undefined;
+  // A document that is closed and opened again counts its versions from 1, and the page drops what looks older.
+  let versionsBefore = 0;
+  let lastVersion = 0;
+  const versionOf = (documentVersion: number) => (lastVersion = Math.max(lastVersion, versionsBefore + documentVersion));
 
   const send = (message: ToPage) => void panel.webview.postMessage(message).then(undefined, (error: unknown) => log.failure('telling the panel', error));
   const idOf = (document: vscode.TextDocument) => document.uri.toString();
@@ -78,8 +79,8 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
     const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz });
-    if (view !== null) send({ type: 'view', document: idOf(document), version, view });
-    else send({ type: 'stale', document: idOf(document), version, reason: 'The text cannot be evaluated as it is.', problems: problemsOf(study) });
+    if (view !== null) send({ type: 'view', document: idOf(document), version: versionOf(version), view });
+    else send({ type: 'stale', document: idOf(document), version: versionOf(version), reason: 'The text cannot be evaluated as it is.', problems: problemViews(assessment) });
   };
   const sendAll = () => {
     if (shown === null) {
@@ -93,6 +94,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const show = (document: vscode.TextDocument | null) => {
     if (document === shown) return;
     shown = document;
+    versionsBefore = lastVersion;
     highlight.clear();
     panel.title = document === null ? 'Ohmward' : `Ohmward: ${fileNameOf(document)}`;
     if (document !== null && state.document !== idOf(document)) {
@@ -112,11 +114,12 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const moveMarker = (document: vscode.TextDocument, request: number, frequencyHz: number | { refusal: string }) => {
     const study = studies.latest(document);
     const answer = (marker: ReturnType<typeof markerView>, refusal: string | null) =>
-      send({ type: 'marker', document: idOf(document), version: study?.version ?? document.version, request, marker, refusal });
+      send({ type: 'marker', document: idOf(document), version: versionOf(study?.version ?? document.version), request, marker, refusal });
     if (typeof frequencyHz !== 'number') {
       answer(null, frequencyHz.refusal);
     } else {
-      const marker = study && markerView(study.assessment, frequencyHz);
+      const problem = study?.assessment.model.problem ?? null;
+      const marker = problem && markerView(problem, frequencyHz);
       if (marker) {
         state.markerHz = frequencyHz;
         changed.fire();
@@ -187,12 +190,12 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       if (study.document === shown) sendStudy(study);
     }),
     studies.onDidFail(({ document, message }) => {
-      if (document === shown) send({ type: 'stale', document: idOf(document), version: document.version, reason: message, problems: [] });
+      if (document === shown) send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: message, problems: [] });
     }),
     vscode.workspace.onDidChangeTextDocument(({ document, contentChanges }) => {
       if (document !== shown || contentChanges.length === 0) return;
       clearTimeout(staleTimer);
-      staleTimer = setTimeout(() => send({ type: 'stale', document: idOf(document), version: document.version, reason: null, problems: [] }), STALE_AFTER_MS);
+      staleTimer = setTimeout(() => send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: null, problems: [] }), STALE_AFTER_MS);
     }),
   );
   panel.onDidDispose(() => {
@@ -213,7 +216,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       const study = studies.latest(document);
       if (document !== shown || study?.version !== document.version) return;
       const { elementId, goalId } = elementAt(study.assessment, offset);
-      send({ type: 'cursor', document: idOf(document), version: study.version, elementId, goalId });
+      send({ type: 'cursor', document: idOf(document), version: versionOf(study.version), elementId, goalId });
     },
     onDidChangeState: changed.event,
   };
