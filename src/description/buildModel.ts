@@ -1,5 +1,6 @@
 import type { Diagnostic, Report } from '../base/diagnostic';
 import type { Located } from '../base/span';
+import type { Element } from '../network/element';
 import type { Problem } from '../study/problem';
 import type { LadderTask, Unknown } from '../study/unknown';
 import type { Description, Model } from './description';
@@ -25,6 +26,7 @@ export interface BuildOptions {
   readonly reopen?: boolean;
 }
 
+const noLadder: Element = { form: 'faulty', name: 'ladder', orientation: 'through', reason: 'it could not be read' };
 const defaultZ0Ohm = 50;
 const defaultPowerW = 1e-3;
 const defaultBuilds = 10_000;
@@ -54,18 +56,20 @@ function resolveProblem(syntax: DescriptionSyntax, base: Pick<Resolution, 'files
   checkElementNames(syntax, base.report);
   const cases = resolveCases(syntax, resolution);
   const resolved = (syntax.ladder?.elements ?? []).map((element) => resolveElement(element, 'ladder', resolution));
-  const ladder = resolved.map((each) => each.element);
+  // Without a ladder that can be read nothing beyond the load is known; an empty one would be a direct connection.
+  const ladder = syntax.ladder ? resolved.map((each) => each.element) : [noLadder];
   const ladderTask = resolveLadderTask(syntax, resolution);
   const elements = ladder.map((element) => element.name);
   const tunables = connectTunables(syntax, ladder, resolution);
   const source = resolveSource(syntax, bands, resolution);
-  const goals = resolveGoals(syntax, { bands, cases, elements: syntax.ladder?.solve ? null : elements }, resolution);
+  const faultyBands = syntax.bands.map((band) => band.name.value).filter((name) => !bands.some((band) => band.name === name));
+  const goals = resolveGoals(syntax, { bands, faultyBands, cases, elements: syntax.ladder?.solve ? null : elements }, resolution);
   const channelsHz = resolveChannels(syntax, bands, tunables.length, resolution);
   const measured = resolveMeasured(syntax.measured, { cases, elements, tunables }, resolution);
   if (syntax.firmware && syntax.tunables.length === 0) {
     base.report(doubtAt('firmware-without-tunables', 'A firmware table needs tunable parts; there are none.', syntax.firmware.span));
   }
-  if (!hasBands || cases.length === 0 || !syntax.ladder) return null;
+  if (!hasBands || cases.length === 0) return null;
   return {
     title: syntax.title?.value ?? null,
     z0Ohm, source, availablePowerW: syntax.powerW?.value ?? defaultPowerW,

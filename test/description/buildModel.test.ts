@@ -102,6 +102,20 @@ describe('the problem of a description', () => {
     assert.deepEqual(problem?.goals.map(({ line }) => line), [11]);
   });
 
+  it('knows nothing beyond the load without a ladder that can be read', () => {
+    for (const ladder of ['', 'ladder:\n', 'ladder: slove up to 3 elements\n', 'ladder:\n  - L1\n', 'ladder:\n  - serise L1: 3 nH\n', `ladder:\n${'  - shunt C1: 1 pF\n'.repeat(201)}`]) {
+      const { problem } = model(`ohmward: 1\nload: 18 - j37 Ω\n${ladder}${bands}`);
+      assert.ok(problem?.ladder.some(({ form }) => form === 'faulty'), ladder);
+    }
+  });
+
+  it('does not tell the uses of a band that cannot be read', () => {
+    const text = `${bare}bands:\n  up: 863 .. 870 MHz\n  down: 902 to 928 MHz\nsource: {down: 50 Ω}\ngoals:\n  - gain >= -1 dB in down\n  - gain >= -1 dB in up\n`;
+    const { problem, diagnostics } = model(text);
+    assert.deepEqual(diagnostics.map(({ span }) => text.slice(0, span.start).split('\n').length), [6]);
+    assert.deepEqual(problem?.goals.map(({ line }) => line), [10]);
+  });
+
   it('can be posted to a worker', () => {
     for (const text of seeds) {
       const { problem } = model(text, seedFiles);

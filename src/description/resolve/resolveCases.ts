@@ -7,8 +7,8 @@ import { doubtAt, type Resolution } from './resolution';
 import { resolveElement } from './resolveElement';
 import { resolveImpedance } from './resolveImpedance';
 
-/** |Γ| of a lossless load in a file of a few digits, and what rounding makes of it when a fixture is removed. */
-const overshootSlack = 1e-3;
+/** A lossless load in a file of four digits comes out above 1 by less than this. */
+const overshootSlack = 1e-4;
 
 /** The cases of the load, each with the fixture that is removed from it: its own, else the common one; only from files. */
 export function resolveCases(syntax: DescriptionSyntax, resolution: Resolution): LoadCase[] {

@@ -16,7 +16,8 @@ export function resolveChannels(syntax: DescriptionSyntax, bands: readonly Band[
   if (!channels) return increasing(all);
   if (channels.band) {
     const { value } = channels.band;
-    if (!findName(channels.band, bands.map((band) => band.name), 'band', report)) return increasing(all);
+    const named = findName(channels.band, [...bands.map((band) => band.name), ...syntax.bands.map((band) => band.name.value)], 'band', report);
+    if (!named || !bands.some((band) => band.name === value)) return increasing(all);
     return increasing(bands.filter((band) => band.name === value).flatMap((band) => [...band.frequencyHz]));
   }
   const stated = [...channels.frequenciesHz.map((frequency) => frequency.value), ...channels.ranges.flatMap((range) => [...rangePoints(range, 21)])];

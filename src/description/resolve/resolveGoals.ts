@@ -1,4 +1,5 @@
 import { lineMap } from '../../base/lineMap';
+import type { Located } from '../../base/span';
 import type { Goal, GoalPlace } from '../../study/goal';
 import type { Band, LoadCase } from '../../study/problem';
 import { bandPoints } from '../limits';
@@ -10,6 +11,8 @@ import { resolveImpedance } from './resolveImpedance';
 
 interface Names {
   readonly bands: readonly Band[];
+  /** Bands that are stated and could not be read. */
+  readonly faultyBands: readonly string[];
   readonly cases: readonly LoadCase[];
   /** Null while the ladder itself is to be found. */
   readonly elements: readonly string[] | null;
@@ -36,13 +39,14 @@ export function resolveGoals(syntax: DescriptionSyntax, names: Names, resolution
   });
 }
 
-function checkNames(goal: GoalSyntax, { bands, cases, elements }: Names, { report }: Resolution): boolean {
-  const bandNames = bands.map((band) => band.name);
+function checkNames(goal: GoalSyntax, { bands, faultyBands, cases, elements }: Names, { report }: Resolution): boolean {
+  const bandNames = [...bands.map((band) => band.name), ...faultyBands];
   const caseNames = cases.flatMap((each) => each.name ?? []);
   let good = true;
   const check = (sound: boolean) => { good = good && sound; };
-  if (goal.place.form === 'band' || goal.place.form === 'harmonic') check(findName(goal.place.band, bandNames, 'band', report));
-  if (goal.against) check(findName(goal.against, bandNames, 'band', report));
+  const checkBand = (band: Located<string>) => check(findName(band, bandNames, 'band', report) && !faultyBands.includes(band.value));
+  if (goal.place.form === 'band' || goal.place.form === 'harmonic') checkBand(goal.place.band);
+  if (goal.against) checkBand(goal.against);
   if (goal.caseName) check(findName(goal.caseName, caseNames, 'case', report));
   if (goal.elementName && elements) check(findName(goal.elementName, [...elements, 'load'], 'element', report));
   if (goal.into && goal.caseName) {

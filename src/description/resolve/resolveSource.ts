@@ -10,7 +10,7 @@ import { resolveImpedance } from './resolveImpedance';
 /** The port's own impedance, by band where the description says so; z0 where it says nothing. */
 export function resolveSource(syntax: DescriptionSyntax, bands: readonly Band[], resolution: Resolution): SourcePort {
   const standard: Impedance = { form: 'constant', impedanceOhm: { re: resolution.z0Ohm, im: 0 } };
-  const names = bands.map((band) => band.name);
+  const names = [...bands.map((band) => band.name), ...syntax.bands.map((band) => band.name.value)];
   const byBand = new Map<string, Impedance>();
   let impedance: Impedance = standard;
   reportTwice(syntax.sources.flatMap((source) => source.band ?? []), 'band', resolution.report);

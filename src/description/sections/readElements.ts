@@ -9,11 +9,17 @@ import { atMost, mistake, shapeOf, type SectionContext } from './sectionContext'
 
 /** The entries of a ladder or a fixture: a list, or (reported) a mapping whose lines lack their dashes. */
 export function readElements(node: ListNode | MappingNode, context: SectionContext): ElementSyntax[] {
-  if (node.form === 'mapping') {
-    reportMissingDashes(node, context);
-    return atMost(node.entries, elementsAtMost, 'elements', context).flatMap((entry) => readEntry(entry, context));
-  }
-  return atMost(node.items, elementsAtMost, 'elements', context).flatMap((item, i) => readItem(item, node.itemSpans[i], context));
+  const read = node.form === 'list' ? readItems(node, context) : readBareEntries(node, context);
+  const count = node.form === 'list' ? node.items.length : node.entries.length;
+  return count > elementsAtMost ? [...read, placeholder('…', { start: node.span.end, end: node.span.end })] : read;
+}
+
+const readItems = (node: ListNode, context: SectionContext) =>
+  atMost(node.items, elementsAtMost, 'elements', context).flatMap((item, i) => readItem(item, node.itemSpans[i], context));
+
+function readBareEntries(node: MappingNode, context: SectionContext): ElementSyntax[] {
+  reportMissingDashes(node, context);
+  return atMost(node.entries, elementsAtMost, 'elements', context).flatMap((entry) => readEntry(entry, context));
 }
 
 function reportMissingDashes(node: MappingNode, context: SectionContext): void {
@@ -69,7 +75,7 @@ function readEntry(entry: TreeEntry, context: SectionContext): ElementSyntax[] {
 }
 
 /** Stands for an entry that cannot be read, so that nothing beyond it is taken for known. */
-function placeholder(name: string, span: Span): ElementSyntax {
+export function placeholder(name: string, span: Span): ElementSyntax {
   return { keyword: 'series', name: { value: name, span }, span, phrase: { start: span.end, end: span.end }, body: { form: 'faulty' } };
 }
 

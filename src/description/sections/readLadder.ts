@@ -1,7 +1,7 @@
 import { readLadderSolvePhrase } from '../phrase/readLadderSolve';
 import type { DescriptionSyntax } from '../syntax';
 import type { TreeEntry } from '../tree/treeNode';
-import { readElements } from './readElements';
+import { placeholder, readElements } from './readElements';
 import { reportShape, type SectionContext } from './sectionContext';
 
 /** `ladder`: a list of elements, or `solve …` for all of it. */
@@ -14,7 +14,7 @@ export function readLadder(entry: TreeEntry, context: SectionContext): Descripti
   }
   if (node.form === 'scalar') {
     const solve = readLadderSolvePhrase(node.phrase, context);
-    return { span: node.span, keySpan, elements: [], solve };
+    return { span: node.span, keySpan, elements: solve ? [] : [placeholder('ladder', node.span)], solve };
   }
   return { span: node.span, keySpan, elements: readElements(node, context), solve: null };
 }

@@ -31,7 +31,8 @@ export function readBands(entry: TreeEntry, context: SectionContext): BandSyntax
     checkPhraseName(name, 'band', context);
     const phrase = expectScalar(each, context);
     const band = phrase && readBandPhrase(name, phrase.phrase, context);
-    return band ? [band] : [];
+    // One that cannot be read keeps its name, so that its uses are not told as mistakes too.
+    return [band ?? { name, span: each.span, range: null, frequencyHz: null, watch: false }];
   });
 }
 

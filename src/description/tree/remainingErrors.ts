@@ -34,7 +34,7 @@ function inOurWords(error: YAMLError, { text, toOriginal }: RepairedText, origin
   const stated = Math.min(Math.max(toOriginal(error.pos[1]), at), line.start + line.text.length);
   const rest = lineAt(text, error.pos[0]);
   const later = rest.text.slice(error.pos[0] - rest.start);
-  return { ...yamlErrorText(error, later), severity: 'error', span: stated - at > 1 ? { start: at, end: stated } : wider(original, at) };
+  return { ...yamlErrorText(error, text.slice(Math.max(error.pos[0] - 200, 0), error.pos[0]), later), severity: 'error', span: stated - at > 1 ? { start: at, end: stated } : wider(original, at) };
 }
 
 /** From one character to the rest of its phrase, or to the white space before the line's first word. */

@@ -1,7 +1,7 @@
 import type { YAMLError } from 'yaml';
 
-/** What an error of the YAML reader means here, in our words; `rest` is the line from the error on. */
-export function yamlErrorText(error: Pick<YAMLError, 'code' | 'message'>, rest: string): { code: string; message: string } {
+/** What an error of the YAML reader means here, in our words; `before` and `rest` are the text up to it and the line from it on. */
+export function yamlErrorText(error: Pick<YAMLError, 'code' | 'message'>, before: string, rest: string): { code: string; message: string } {
   const { code, message } = error;
   if (code === 'TAB_AS_INDENT') return { code: 'tab', message: 'YAML does not allow a tab as indentation; use spaces.' };
   if (/Missing closing/.test(message)) return { code: 'unclosed-quote', message: 'A quotation mark before this is never closed.' };
@@ -28,7 +28,7 @@ export function yamlErrorText(error: Pick<YAMLError, 'code' | 'message'>, rest: 
   }
   if (code === 'BLOCK_AS_IMPLICIT_KEY') return { code: 'second-colon', message: 'A second key on one line; put the phrase in quotes, or begin a new line.' };
   if (code === 'BAD_INDENT') return { code: 'bad-indentation', message: 'The indentation here fits nothing above it.' };
-  if (/in YAML stream/.test(message)) {
+  if (/in YAML stream/.test(message) || (/at node end/.test(message) && !/["'\]}]\s*$/.test(before))) {
     return { code: 'not-yaml', message: 'This does not fit what stands above it, and YAML reads nothing from here on; check brackets, quotation marks and indentation above.' };
   }
   if (/at node end/.test(message)) return { code: 'text-after-end', message: 'Nothing may follow a closing quotation mark, bracket or brace; put the whole phrase in quotes.' };
