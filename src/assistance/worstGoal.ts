@@ -1,12 +1,17 @@
 import type { GoalResult } from '../study/goal';
 import { goalBar, goalDetail, goalMarginText, goalTitle, goalValueText } from './goalText';
 
-/** The goal with the least margin: one that is not known before one that is missed, that before one that holds. Null without goals. */
+/**
+ * The goal with the least margin: one that is not known before one that is missed, that before one that holds. A condition
+ * that is met and a count of parts that is kept have no margin worth a word: they come last. Null without goals.
+ */
 export function worstGoal(results: readonly GoalResult[]): GoalResult | null {
   let worst: GoalResult | null = null;
   let least = Infinity;
   for (const result of results) {
-    const rank = (result.ok ? 10 : 0) + (goalBar(result) ?? -2);
+    const { goal, ok } = result;
+    const isPlain = ok && (goal.comparison === null || goal.quantity === 'parts');
+    const rank = (isPlain ? 20 : ok ? 10 : 0) + (goalBar(result) ?? -2);
     if (rank < least) {
       least = rank;
       worst = result;
