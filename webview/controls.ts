@@ -28,7 +28,7 @@ export function toolkitControls(): Controls {
       const made = document.createElement('vscode-button');
       made.setAttribute('appearance', primary ? 'primary' : 'secondary');
       made.textContent = label;
-      made.setAttribute('aria-label', description ?? label);
+      if (description !== undefined) made.setAttribute('aria-label', description);
       made.addEventListener('click', onPress);
       return made;
     },
@@ -39,7 +39,7 @@ export function toolkitControls(): Controls {
 export function plainControls(): Controls {
   return {
     button: ({ label, description, primary, onPress }) =>
-      element('button', { type: 'button', class: primary ? 'control primary' : 'control', 'aria-label': description ?? label, text: label, click: onPress }),
+      element('button', { type: 'button', class: primary ? 'control primary' : 'control', 'aria-label': description, text: label, click: onPress }),
     textField: ({ label, onSubmit, onArrow }) => field(element('input', { type: 'text', class: 'control' }), label, onSubmit, onArrow),
   };
 }

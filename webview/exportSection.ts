@@ -12,9 +12,9 @@ export function exportSection(controls: Controls, actions: Actions) {
   let view: PanelView | null = null;
   const withView = (work: (shown: PanelView) => void) => () => { if (view) work(view); };
   const buttons = [
-    controls.button({ label: 'Copy chart', description: 'Copy the chart as SVG', onPress: withView((shown) => actions.copy('chart svg', chartSvg(shown))) }),
-    controls.button({ label: 'Save SVG', description: 'Save the chart as SVG', onPress: withView((shown) => actions.save('chart svg', toBase64(new TextEncoder().encode(chartSvg(shown))))) }),
-    controls.button({ label: 'Save PNG', description: 'Save the chart as PNG', onPress: withView((shown) => void chartPng(shown).then((base64) => actions.save('chart png', base64))) }),
+    controls.button({ label: 'Copy chart as SVG', onPress: withView((shown) => actions.copy('chart svg', chartSvg(shown))) }),
+    controls.button({ label: 'Save chart as SVG', onPress: withView((shown) => actions.save('chart svg', toBase64(new TextEncoder().encode(chartSvg(shown))))) }),
+    controls.button({ label: 'Save chart as PNG', onPress: withView((shown) => void chartPng(shown).then((base64) => actions.save('chart png', base64))) }),
     controls.button({ label: 'Copy table as CSV', onPress: withView((shown) => actions.copy('ladder csv', ladderCsv(shown.ladder))) }),
     controls.button({ label: 'Copy table as Markdown', onPress: withView((shown) => actions.copy('ladder markdown', ladderMarkdown(shown.ladder))) }),
   ];

@@ -9,7 +9,7 @@ export function headerSection(controls: Controls, actions: Actions) {
   const title = element('h1');
   const file = element('span', { class: 'file' });
   const freshness = element('span', { class: 'freshness', role: 'status' });
-  const pin = controls.button({ label: 'Pin', description: 'Pin the panel to this description', onPress: () => actions.pin(!pinned) });
+  const pin = controls.button({ label: 'Pin', description: 'Pin: keep showing this description', onPress: () => actions.pin(!pinned) });
   const root = element('header', {}, title, element('div', { class: 'file-line' }, file, freshness, pin));
   return {
     root,
@@ -18,7 +18,7 @@ export function headerSection(controls: Controls, actions: Actions) {
       setText(title, view.title);
       setText(file, view.fileName);
       setText(pin, pinned ? 'Unpin' : 'Pin');
-      pin.setAttribute('aria-label', pinned ? 'Let the panel follow the active description' : 'Pin the panel to this description');
+      pin.setAttribute('aria-label', pinned ? 'Unpin: follow the active description' : 'Pin: keep showing this description');
     },
     setFreshness(text: string, old: boolean) {
       setText(freshness, text);

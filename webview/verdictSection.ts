@@ -10,7 +10,7 @@ export function verdictSection(actions: Actions) {
   const root = element('section', { class: 'verdict', 'aria-label': 'Verdict' }, heading, list);
   const makeGoal = () => {
     const button = element('button', { type: 'button', class: 'row-button goal', click: () => actions.revealLine(Number(button.dataset.line)) },
-      element('span', { class: 'mark', 'aria-hidden': 'true' }),
+      element('span', { class: 'mark' }, element('span', { class: 'sign', 'aria-hidden': 'true' }), element('span', { class: 'hidden-text' })),
       element('span', { class: 'what' }, element('span', { class: 'title' }), element('span', { class: 'place' })),
       element('span', { class: 'value' }, element('span', { class: 'number' }), element('span', { class: 'detail' })));
     button.insertBefore(picture(`0 0 ${barSize.width} ${barSize.height}`, { class: 'bar', 'aria-hidden': 'true', preserveAspectRatio: 'none' }) as unknown as HTMLElement, button.lastElementChild);
@@ -22,13 +22,13 @@ export function verdictSection(actions: Actions) {
     item.dataset.goal = String(goal.id);
     button.dataset.line = String(goal.line);
     const find = (name: string) => button.querySelector(`.${name}`)!;
-    setText(find('mark'), goal.ok ? '✓' : '✗');
+    setText(find('sign'), goal.ok ? '✓' : '✗');
+    setText(find('hidden-text'), goal.ok ? 'holds: ' : 'missed: ');
     setText(find('title'), goal.title);
     setText(find('place'), goal.place);
     setText(find('number'), goal.valueText);
     setText(find('detail'), goal.detail);
     setMarkup(find('bar') as SVGElement, goalBar(goal.bar));
-    button.setAttribute('aria-label', [goal.title, goal.place, goal.ok ? 'holds' : 'missed', goal.valueText, goal.marginText, goal.detail].filter((text) => text !== '').join(', '));
     button.title = goal.marginText;
   };
   return {

@@ -1,0 +1,175 @@
+import assert from 'node:assert/strict';
+import { readFileSync } from 'node:fs';
+import { createRequire } from 'node:module';
+import type { ToHost } from '../../src/messages/panel';
+import { openPage, startPages, stopPages, type ServedPage } from './servedPage';
+import { sampleView, viewMessage } from './sampleView';
+import { bodyClass, type ThemeKind } from './themes';
+
+const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
+const document = 'file:///orchard/frost.match.yaml';
+
+describe('the panel’s page', function () {
+  this.timeout(60_000);
+  before(startPages);
+  after(stopPages);
+
+  const last = async (served: ServedPage, type: ToHost['type']) => (await served.said()).filter((message) => message.type === type).at(-1);
+
+  for (const controls of ['toolkit', 'plain'] as const) {
+    describe(`with ${controls} controls`, () => {
+      it('says that it is ready, and shows the view that it is sent', async () => {
+        const served = await openPage('dark', 580, controls);
+        assert.deepEqual((await served.said())[0], { type: 'ready' });
+        await served.post(viewMessage(sampleView()));
+        assert.equal(await served.page.textContent('h1'), 'Orchard frost sensor, antenna port');
+        assert.equal(await served.page.textContent('.verdict h2'), 'Verdict: all 5 hold');
+        assert.equal(await served.page.locator('table.ladder tbody tr').count(), 5);
+        assert.equal(await served.page.locator('svg.chart .arc').count(), 3);
+        assert.deepEqual(await served.violations(), []);
+        await served.page.close();
+      });
+
+      it('sends a typed marker and a typed value, and steps with the arrow keys', async () => {
+        const served = await openPage('light', 580, controls);
+        await served.post(viewMessage(sampleView()));
+        const field = served.page.locator('.marker-line').first().locator(controls === 'toolkit' ? 'vscode-text-field input' : 'input');
+        await field.fill('868 MHz');
+        await field.press('Enter');
+        const typed = await last(served, 'type marker');
+        assert.ok(typed?.type === 'type marker' && typed.text === '868 MHz');
+        const value = served.page.locator('tr[data-element="C1"]').locator(controls === 'toolkit' ? 'vscode-text-field input' : 'input');
+        await value.focus();
+        await value.press('ArrowUp');
+        assert.deepEqual(await last(served, 'step value'), { type: 'step value', document, version: 1, elementId: 'C1', direction: 'up' });
+        await value.fill('5.1 pF');
+        await value.press('Enter');
+        assert.deepEqual(await last(served, 'set value'), { type: 'set value', document, version: 1, elementId: 'C1', text: '5.1 pF' });
+        await served.page.close();
+      });
+    });
+  }
+
+  it('leads from a goal and from a row to their lines', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView()));
+    await served.page.click('.goals li:nth-child(2) button');
+    assert.deepEqual(await last(served, 'reveal line'), { type: 'reveal line', document, line: sampleView().goals[1].line });
+    await served.page.click('tr[data-element="C1"] button.name');
+    assert.deepEqual(await last(served, 'reveal line'), { type: 'reveal line', document, line: sampleView().ladder[2].line });
+    await served.page.close();
+  });
+
+  it('lets row and arc stand out together, whichever is pointed at', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView()));
+    await served.page.hover('tr[data-element="C1"]');
+    assert.ok(await served.page.locator('.arc[data-element="C1"].current').count());
+    assert.deepEqual(await last(served, 'point at element'), { type: 'point at element', document, elementId: 'C1' });
+    await served.post({ type: 'cursor', document, version: 1, elementId: 'L1', goalId: 0 });
+    assert.ok(await served.page.locator('tr[data-element="L1"].current').count());
+    assert.equal(await served.page.locator('tr[data-element="C1"].current').count(), 0);
+    assert.ok(await served.page.locator('.goals li:first-child.current').count());
+    await served.page.close();
+  });
+
+  it('moves the marker by dragging over a plot and by keys, and takes only the latest answer', async () => {
+    const served = await openPage('dark', 580);
+    const view = sampleView();
+    await served.post(viewMessage(view));
+    const plot = served.page.locator('svg.plot').first();
+    await plot.scrollIntoViewIfNeeded();
+    const box = (await plot.boundingBox())!;
+    await served.page.mouse.move(box.x + box.width * 0.3, box.y + box.height / 2);
+    await served.page.mouse.down();
+    await served.page.mouse.move(box.x + box.width * 0.7, box.y + box.height / 2, { steps: 4 });
+    await served.page.mouse.up();
+    const moved = await last(served, 'move marker');
+    assert.ok(moved?.type === 'move marker');
+    const share = (0.7 * 540 - 44) / (540 - 44 - 14);
+    assert.ok(Math.abs(moved.frequencyHz - (750e6 + share * 250e6)) < 2e6, `${moved.frequencyHz}`);
+    const marker = { ...view.marker!, text: 'the latest' };
+    await served.post({ type: 'marker', document, version: 1, request: moved.request - 1, marker: { ...marker, text: 'an old one' }, refusal: null });
+    await served.post({ type: 'marker', document, version: 1, request: moved.request, marker, refusal: null });
+    assert.equal(await plot.getAttribute('aria-valuetext'), 'the latest');
+    await plot.focus();
+    await plot.press('ArrowRight');
+    const stepped = await last(served, 'move marker');
+    assert.ok(stepped?.type === 'move marker' && stepped.frequencyHz === 867e6, JSON.stringify(stepped));
+    await served.page.close();
+  });
+
+  it('keeps the last good picture through errors, marked as old, and says what is wrong where', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView(), 3));
+    await served.post({ type: 'stale', document, version: 4, reason: 'the text cannot be evaluated', problems: [{ severity: 'error', message: '«nF?» is not a unit here', line: 17 }] });
+    assert.ok(await served.page.locator('.stale svg.chart .arc').count());
+    assert.match((await served.page.textContent('.freshness'))!, /old numbers/);
+    assert.match((await served.page.textContent('.problems'))!, /line 18: «nF\?» is not a unit here/);
+    await served.post(viewMessage(sampleView(), 5));
+    assert.equal(await served.page.locator('.stale').count(), 0);
+    assert.equal(await served.page.textContent('.freshness'), 'up to date');
+    await served.page.close();
+  });
+
+  it('drops messages that are older, foreign or no messages at all', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView(), 7));
+    const html = await served.page.innerHTML('main');
+    for (const junk of [viewMessage({ ...sampleView(), title: 'older' }, 6), null, 5, 'view', {}, { type: 'view' }, { type: 'view', document, version: 8, view: { title: '<img src=x onerror=alert(1)>' } },
+      { type: 'marker', document: 'another', version: 9, request: 0, marker: null, refusal: 'no' }, { type: 'constructor' }, { type: '__proto__' }]) {
+      await served.post(junk as object);
+    }
+    assert.equal(await served.page.innerHTML('main'), html);
+    await served.page.close();
+  });
+
+  it('shows text as text', async () => {
+    const served = await openPage('dark', 580);
+    const hostile = '<b id="hit">&amp;"\'</b>';
+    await served.post(viewMessage(sampleView((text) => text.replace('free air:', 'free-air_<b>:').replace('Orchard frost sensor', hostile))));
+    await served.post(viewMessage({ ...sampleView(), title: hostile, discs: [{ centreRe: 0, centreIm: 0, radius: 0.3, label: hostile }] }, 2));
+    assert.equal(await served.page.locator('#hit').count(), 0);
+    assert.equal(await served.page.textContent('h1'), hostile);
+    assert.deepEqual(await served.violations(), []);
+    await served.page.close();
+  });
+
+  it('copies the table and saves the chart as SVG and PNG', async () => {
+    const served = await openPage('light', 580);
+    await served.post(viewMessage(sampleView()));
+    await served.page.click('text=Copy table as CSV');
+    const csv = await last(served, 'copy');
+    assert.ok(csv?.type === 'copy' && csv.text.includes('C1,shunt,4.3 pF'), JSON.stringify(csv));
+    await served.page.click('text=Save chart as PNG');
+    await served.page.waitForFunction(() => (window as unknown as { said: { type: string }[] }).said.some((message) => message.type === 'save'));
+    const png = await last(served, 'save');
+    assert.ok(png?.type === 'save' && Buffer.from(png.base64, 'base64').subarray(1, 4).toString() === 'PNG');
+    await served.page.click('text=Save chart as SVG');
+    const svg = await last(served, 'save');
+    assert.ok(svg?.type === 'save' && Buffer.from(svg.base64, 'base64').toString().startsWith('<svg'));
+    assert.deepEqual(await served.violations(), []);
+    await served.page.close();
+  });
+
+  for (const theme of Object.keys(bodyClass) as ThemeKind[]) {
+    it(`has nothing that axe finds serious in ${theme}`, async () => {
+      const served = await openPage(theme, 580);
+      await served.post(viewMessage(sampleView((text) => text.replace('rejection >= 8 dB', 'rejection >= 12 dB'))));
+      await served.page.evaluate(axeSource);
+      const found = await served.page.evaluate(() => (window as unknown as { axe: { run(): Promise<{ violations: { id: string; impact: string; nodes: { html: string }[] }[] }> } }).axe.run());
+      const serious = found.violations.filter(({ impact }) => impact === 'serious' || impact === 'critical').map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 120)).join(' | ')}`);
+      assert.deepEqual(serious, []);
+      await served.page.close();
+    });
+  }
+
+  for (const width of [320, 580, 1000]) {
+    it(`fits ${width} px without scrolling the page sideways`, async () => {
+      const served = await openPage('dark', width);
+      await served.post(viewMessage(sampleView()));
+      assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
+      await served.page.close();
+    });
+  }
+});
