@@ -1,18 +1,23 @@
-import { contains, type Span } from '../base/span';
+import type { Span } from '../base/span';
 import type { Description } from '../description/description';
-import { namesIn, type NamedThing } from '../description/names';
+import { nameAt, namesIn, type NamedThing } from '../description/names';
 
-/** The named thing on whose definition or use the offset lies; goals, which are named by their text, are none. */
-export function nameAt({ syntax }: Description, offset: number): NamedThing | null {
-  return namesIn(syntax).find(({ kind, definition, references }) =>
-    kind !== 'goal' && [...(definition ? [definition] : []), ...references].some((span) => contains(span, offset))) ?? null;
+/** The name that stands at an offset; a goal has none. */
+export function nameAtOffset({ syntax }: Description, offset: number): NamedThing | null {
+  return nameAt(namesIn(syntax).filter(({ kind }) => kind !== 'goal'), offset);
 }
 
-/** Where the name at the offset is defined; null where there is no name or no definition. */
-export const definitionAt = (description: Description, offset: number): Span | null => nameAt(description, offset)?.definition ?? null;
+/** Where the name at an offset is defined; null where there is none, or none of that name. */
+export function definitionAt(description: Description, offset: number): Span | null {
+  return nameAtOffset(description, offset)?.definition ?? null;
+}
 
-/** Every place of the name at the offset, its definition first. */
+/** Every place of the name at an offset, its definition among them, in the order of the text. */
 export function referencesAt(description: Description, offset: number): Span[] {
-  const found = nameAt(description, offset);
-  return found ? [...(found.definition ? [found.definition] : []), ...found.references] : [];
+  return placesOf(nameAtOffset(description, offset));
+}
+
+export function placesOf(thing: NamedThing | null): Span[] {
+  if (!thing) return [];
+  return [...(thing.definition ? [thing.definition] : []), ...thing.references].sort((a, b) => a.start - b.start);
 }

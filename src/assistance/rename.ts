@@ -1,29 +1,38 @@
-import type { TextEdit } from '../base/diagnostic';
+import { applyEdits, type TextEdit } from '../base/diagnostic';
 import type { Description } from '../description/description';
-import { replaceInScalar } from '../description/edits';
-import { namesIn } from '../description/names';
-import { checkPhraseName, checkWord } from '../description/phrase/checkName';
-import { plainPhrase } from '../description/phrase/phrase';
-import { readLetPhrase } from '../description/phrase/readLet';
-import { nameAt } from './definition';
+import { namesIn, type NamedThing } from '../description/names';
+import { readDescription } from '../description/readDescription';
+import { nameAtOffset, placesOf } from './definition';
 
-/** Changes the name at the offset everywhere it stands; or says why the new one will not do. */
-export function renameEdits(description: Description, offset: number, newName: string): TextEdit[] | { readonly refusal: string } {
-  const found = nameAt(description, offset);
-  if (!found?.definition) return { refusal: 'There is no name here that could be changed.' };
+/**
+ * Gives the name at an offset another one, wherever it stands. Refused, with the reason, where the new name is taken or
+ * does not read as the same name in every place.
+ */
+export function renameEdits(description: Description, offset: number, newName: string): TextEdit[] | { refusal: string } {
+  const thing = nameAtOffset(description, offset);
+  if (!thing) return { refusal: 'There is no name here that could be changed.' };
   const name = newName.trim();
-  const complaints: string[] = [];
-  const context = { report: ({ message }: { message: string }) => complaints.push(message), lets: new Map(), expressions: true };
-  const located = { value: name, span: found.definition };
-  switch (found.kind) {
-    case 'element': checkWord(located, context); break;
-    case 'let': readLetPhrase(located, plainPhrase('1'), context); break;
-    case 'goal': return { refusal: 'A goal has no name.' };
-    default: checkPhraseName(located, found.kind, context);
-  }
-  if (complaints.length > 0) return { refusal: complaints[0] };
-  if (name !== found.name && namesIn(description.syntax).some((other) => other.kind === found.kind && other.name === name && other.definition)) {
-    return { refusal: `There is a ${found.kind} named ${name} already.` };
-  }
-  return [found.definition, ...found.references].flatMap((span) => replaceInScalar(description.syntax.text, span, name));
+  if (name === '') return { refusal: 'A name has at least one letter.' };
+  if (name === thing.name) return [];
+  const taken = namesIn(description.syntax).some((other) => other.kind === thing.kind && other.name === name && other.definition !== null);
+  if (taken) return { refusal: `There is another ${word(thing)} called «${name}».` };
+  const edits = placesOf(thing).map((span) => ({ span, text: name }));
+  return objection(description, thing, name, edits) ?? edits;
 }
+
+/** Reads the text as it would be: what the language says against the name is said there, once. */
+function objection({ syntax }: Description, thing: NamedThing, name: string, edits: readonly TextEdit[]): { refusal: string } | null {
+  // Expressions need not be worked out to see whether a name will do.
+  const readAgain = (text: string) => readDescription(text, { expressions: false });
+  const before = readAgain(syntax.text).diagnostics.filter(({ severity }) => severity === 'error');
+  const renamed = readAgain(applyEdits(syntax.text, edits));
+  const after = renamed.diagnostics.filter(({ severity }) => severity === 'error');
+  if (after.length > before.length) {
+    const known = new Set(before.map(({ message }) => message));
+    return { refusal: (after.find(({ message }) => !known.has(message)) ?? after[0]).message };
+  }
+  const same = namesIn(renamed.syntax).find((other) => other.kind === thing.kind && other.name === name);
+  return placesOf(same ?? null).length === edits.length ? null : { refusal: `«${name}» would not be read as the name of this ${word(thing)} everywhere.` };
+}
+
+const word = ({ kind }: NamedThing): string => (kind === 'let' ? 'named value' : kind);
