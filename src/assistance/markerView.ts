@@ -3,7 +3,6 @@ import { printComplex, printPolar } from '../quantity/printComplex';
 import { printQuantity } from '../quantity/printQuantity';
 import type { Band, Problem } from '../study/problem';
 import { impedancePath } from '../study/impedancePath';
-import type { Assessment } from './assess';
 import { markerReading, type MarkerReading } from '../study/markerReading';
 
 /** Middle of the first band that is not watched: where the marker stands until someone moves it. */
@@ -13,8 +12,8 @@ export function defaultMarkerHz(problem: Problem): number | null {
 }
 
 /** Everything at one frequency, each case with its way over the chart. Null where the frequency makes no sense. */
-export function markerView({ model: { problem } }: Pick<Assessment, 'model'>, frequencyHz: number): MarkerView | null {
-  if (!problem || !(frequencyHz > 0) || !Number.isFinite(frequencyHz)) return null;
+export function markerView(problem: Problem, frequencyHz: number): MarkerView | null {
+  if (!(frequencyHz > 0) || !Number.isFinite(frequencyHz)) return null;
   const readings = markerReading(problem, frequencyHz);
   return {
     frequencyHz,

@@ -35,7 +35,7 @@ export function panelView(assessment: Assessment, context: PanelContext): PanelV
     traces: evaluation.traces.map(traceView),
     discs: discViews(problem),
     masks: maskViews(problem, evaluation.goals),
-    marker: markerHz === null ? null : markerView(assessment, markerHz),
+    marker: markerHz === null ? null : markerView(problem, markerHz),
     ladder: ladderRows(assessment, problem),
   };
 }
