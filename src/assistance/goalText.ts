@@ -63,6 +63,7 @@ export function goalDetail({ value, reason, caseName, frequencyHz }: GoalResult)
 export function goalMarginText({ goal, margin, reason, ok }: GoalResult): string {
   if (goal.comparison === null || (margin === null && reason !== null)) return '';
   if (margin === null) return ok ? '∞ to spare' : '∞ short';
+  if (margin === 0) return ok ? 'just met' : 'just missed';
   return `${printInUnit(Math.abs(margin), goal.unit)} ${margin >= 0 ? 'to spare' : 'short'}`;
 }
 
