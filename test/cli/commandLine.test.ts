@@ -1,0 +1,224 @@
+import assert from 'node:assert/strict';
+import { cpSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { runCommandLine } from '../../src/cli/runCommandLine';
+import { readTouchstone } from '../../src/network/touchstone/readTouchstone';
+
+const samples = fileURLToPath(new URL('../../media/samples/', import.meta.url));
+
+interface Outcome {
+  readonly code: number;
+  readonly out: string;
+  readonly error: string;
+}
+
+describe('command line', () => {
+  const before = process.cwd();
+  let folder = '';
+
+  beforeEach(() => {
+    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
+    cpSync(samples, folder, { recursive: true });
+    process.chdir(folder);
+  });
+  afterEach(() => {
+    process.chdir(before);
+    rmSync(folder, { recursive: true, force: true });
+  });
+
+  async function run(...words: string[]): Promise<Outcome> {
+    let out = '';
+    let error = '';
+    const code = await runCommandLine(words, { out: (text) => { out += text; }, error: (text) => { error += text; }, colour: false });
+    return { code, out, error };
+  }
+
+  const change = (from: string, to: string) => {
+    const path = 'orchard/frost.match.yaml';
+    const text = readFileSync(path, 'utf8');
+    assert.ok(text.includes(from), `the sample has no ${from}`);
+    writeFileSync(path, text.replace(from, to));
+  };
+
+  describe('check', () => {
+    it('says of each goal whether it holds and by how much', async () => {
+      const { code, out, error } = await run('check', 'orchard');
+      assert.equal(code, 0);
+      assert.equal(error, '');
+      assert.match(out, /^orchard\/frost\.match\.yaml: all 5 hold$/m);
+      assert.match(out, /✓ return loss ≥ 14 dB, uplink\s+16\.8 dB {2}2\.8 dB to spare; worst: wet bark, 870 MHz/);
+    });
+
+    it('fails where a goal is missed, and says where', async () => {
+      change('series L1: 10 nH', 'series L1: 12 nH');
+      const { code, out } = await run('check', 'orchard/frost.match.yaml');
+      assert.equal(code, 1);
+      assert.match(out, /: \d of 5 hold$/m);
+      assert.match(out, /✗ return loss ≥ 14 dB, uplink .*short; worst: /);
+    });
+
+    it('gives JSON with the names that others depend on', async () => {
+      const { code, out } = await run('check', '--format', 'json', 'orchard', 'crate-reader');
+      assert.equal(code, 0);
+      const parsed = JSON.parse(out);
+      assert.deepEqual(Object.keys(parsed), ['version', 'ok', 'files']);
+      assert.equal(parsed.version, 1);
+      const [frost, loop] = parsed.files;
+      assert.deepEqual(Object.keys(frost), ['path', 'title', 'ok', 'diagnostics', 'goals', 'elements', 'bands', 'spread']);
+      assert.equal(frost.path, 'orchard/frost.match.yaml');
+      assert.deepEqual(Object.keys(frost.goals[0]), ['text', 'line', 'ok', 'quantity', 'value', 'limit', 'margin', 'unit', 'frequency', 'case']);
+      assert.deepEqual([frost.goals[0].quantity, frost.goals[0].limit, frost.goals[0].unit, frost.goals[0].case, frost.goals[0].frequency], ['return loss', 14, 'dB', 'wet bark', 870e6]);
+      assert.ok(Math.abs(frost.goals[0].value - 14 - frost.goals[0].margin) < 1e-12);
+      assert.deepEqual(Object.keys(frost.elements[0]), ['name', 'orientation', 'kind', 'value', 'unit', 'fitted', 'frequency', 'reactance', 'susceptance', 'impedanceAfter', 'reflectionAfter', 'peakVoltage', 'rmsCurrent', 'dissipation']);
+      assert.deepEqual([frost.elements[0].name, frost.elements[0].orientation, frost.elements[0].kind, frost.elements[0].value, frost.elements[0].unit], ['L1', 'series', 'inductor', 10e-9, 'H']);
+      assert.ok(Math.abs(frost.elements[0].frequency - Math.sqrt(863e6 * 870e6)) < 1);
+      assert.deepEqual(Object.keys(frost.bands[0]), ['name', 'start', 'stop', 'cases', 'limit']);
+      assert.deepEqual(Object.keys(frost.bands[0].cases[0]), ['case', 'worstReflection', 'worstReturnLoss', 'worstVswr', 'worstGain', 'at']);
+      assert.equal(loop.goals[0].case, null);
+    });
+
+    it('never solves: what is unsolved has no value, and the file is not in order', async () => {
+      change('shunt C1: 4.3 pF from caps', 'shunt C1: solve from caps');
+      const { code, out } = await run('check', '--format', 'json', 'orchard');
+      assert.equal(code, 1);
+      const [file] = JSON.parse(out).files;
+      assert.equal(file.ok, false);
+      assert.deepEqual(file.diagnostics.map((found: { code: string; line: number }) => [found.code, found.line]), [['unsolved', 21]]);
+      for (const goal of file.goals) {
+        assert.equal(goal.value, null);
+        assert.match(goal.reason, /C1/);
+      }
+    });
+
+    it('names the place of a mistake as file:line:column, and computes what it can', async () => {
+      change('series L1: 10 nH', 'series L1: 10 nh');
+      const { code, error } = await run('check', 'orchard');
+      assert.equal(code, 1);
+      assert.match(error, /^orchard\/frost\.match\.yaml:20:19: error: .*nH.* \(unit-unknown\)$/m);
+    });
+
+    it('fails on a file that the description names and that is not there, with its place', async () => {
+      rmSync('orchard/frost-wet-bark.s1p');
+      const { code, error, out } = await run('check', 'orchard');
+      assert.equal(code, 1);
+      assert.match(error, /^orchard\/frost\.match\.yaml:15:13: error: .*frost-wet-bark\.s1p/m);
+      assert.match(out, /not known/);
+    });
+
+    it('invents nothing outside of a file', async () => {
+      change('uplink: 863 .. 870 MHz', 'uplink: 980 MHz .. 1.02 GHz');
+      const { code, out } = await run('check', '--format', 'json', 'orchard');
+      assert.equal(code, 1);
+      const goal = JSON.parse(out).files[0].goals[0];
+      assert.equal(goal.ok, false);
+      assert.equal(goal.value, null);
+      assert.match(goal.reason, /covers 700 MHz to 1 GHz/);
+    });
+
+    it('compares each goal with an earlier version', async () => {
+      cpSync('orchard/frost.match.yaml', join(folder, 'earlier.yaml'));
+      change('series L1: 10 nH', 'series L1: 11 nH');
+      const { out } = await run('check', 'orchard', '--since', 'earlier.yaml');
+      assert.match(out, /return loss ≥ 14 dB, uplink .*was 16\.8 dB/);
+      const { out: json } = await run('check', 'orchard', '--since', 'earlier.yaml', '--format', 'json');
+      assert.ok(JSON.parse(json).files[0].goals[0].before.ok);
+    });
+
+    it('takes folders, and leaves out what is ignored', async () => {
+      writeFileSync('.gitignore', 'build/\n!kept.match.yaml\n');
+      mkdirSync('.git');
+      for (const place of ['build', 'node_modules/a', 'deep/er']) {
+        mkdirSync(place, { recursive: true });
+        cpSync('crate-reader/loop.match.yaml', `${place}/loop.match.yaml`);
+        cpSync('crate-reader/loop.s1p', `${place}/loop.s1p`);
+      }
+      const { out } = await run('check', '--format', 'json', '.');
+      assert.deepEqual(JSON.parse(out).files.map((file: { path: string }) => file.path), ['crate-reader/loop.match.yaml', 'deep/er/loop.match.yaml', 'orchard/frost.match.yaml']);
+    });
+  });
+
+  describe('the call', () => {
+    for (const [words, message] of [
+      [['check'], /needs a description or a folder/],
+      [['chek', 'orchard'], /no command «chek»/],
+      [['check', 'nowhere'], /nowhere: there is no such file or folder/],
+      [['check', 'orchard', '--format', 'xml'], /no format «xml»/],
+      [['check', 'orchard', '--colour'], /Unknown option '--colour'/],
+      [['check', 'orchard', '--verify'], /check takes no --verify/],
+      [['check', 'orchard', '--since', 'nothing.yaml'], /nothing\.yaml: there is no such file/],
+      [['sweep', 'orchard', '--format', 'touchstone'], /this makes 2 files/],
+      [['sweep', 'orchard', '--case', 'on the moon'], /no load case «on the moon»/],
+      [['report', 'orchard'], /report needs -o FILE/],
+      [[], /ohmward COMMAND/],
+    ] as const) {
+      it(`is wrong: ${words.join(' ') || '(nothing)'}`, async () => {
+        const { code, error } = await run(...words);
+        assert.equal(code, 2);
+        assert.match(error, message);
+      });
+    }
+  });
+
+  describe('sweep', () => {
+    it('gives JSON: complex numbers in pairs, null where not known', async () => {
+      change('sweep: 750 MHz .. 1 GHz, 251 points', 'sweep: 990 MHz .. 1.01 GHz, 3 points');
+      const { code, out } = await run('sweep', 'orchard', '--format', 'json');
+      assert.equal(code, 0);
+      const [file] = JSON.parse(out).files;
+      assert.deepEqual(file.frequency, [990e6, 1e9, 1.01e9]);
+      assert.deepEqual(file.cases.map((each: { case: string }) => each.case), ['free air', 'wet bark']);
+      const [first] = file.cases;
+      assert.equal(first.reflection.length, 3);
+      assert.equal(first.reflection[0].length, 2);
+      assert.equal(first.reflection[2], null);
+      assert.ok(first.gain[0] < 0 && first.efficiency[0] > 0 && first.efficiency[0] < 1);
+      assert.match(first.reason, /covers/);
+    });
+
+    it('writes a Touchstone file a case, which reads back to the same input', async () => {
+      const { code } = await run('sweep', 'orchard', '--format', 'touchstone', '-o', 'traces/');
+      assert.equal(code, 0);
+      const read = readTouchstone('a.s1p', readFileSync('traces/frost.free-air.s1p'));
+      assert.ok(read.ok && read.data.frequencyHz.length === 251);
+      const { out } = await run('sweep', 'orchard', '--format', 'json');
+      const [re, im] = JSON.parse(out).files[0].cases[0].reflection[100];
+      assert.ok(Math.hypot(read.data.sRe[100] - re, read.data.sIm[100] - im) < 1e-9);
+    });
+
+    it('writes the ladder itself as a two-port', async () => {
+      const { out } = await run('sweep', 'crate-reader', '--format', 'touchstone', '--two-port');
+      const read = readTouchstone('a.s2p', out);
+      assert.ok(read.ok && read.data.ports === 2);
+      const s = (k: number) => [read.data.sRe[k], read.data.sIm[k]];
+      assert.deepEqual(s(1), s(2), 'a ladder of parts is reciprocal');
+    });
+
+    it('writes CSV as RFC 4180 has it', async () => {
+      const { out } = await run('sweep', 'crate-reader', '--format', 'csv');
+      const rows = out.split('\r\n');
+      assert.equal(rows[0], 'case,frequency_hz,reflection_re,reflection_im,reflection_db,impedance_re_ohm,impedance_im_ohm,gain_db,efficiency');
+      assert.equal(rows.length, 1 + 201 + 1);
+    });
+  });
+
+  describe('tidy', () => {
+    it('lays a file out in place, keeps its comments, and then has nothing to do', async () => {
+      change('  - series C2: 18 pF from caps   # also keeps DC off the antenna', '  -   series C2:   18 pF from caps   # also keeps DC off the antenna');
+      assert.equal((await run('tidy', '--verify', '.')).code, 1);
+      assert.match(readFileSync('orchard/frost.match.yaml', 'utf8'), /- {3}series C2/);
+      assert.equal((await run('tidy', '.')).code, 0);
+      assert.match(readFileSync('orchard/frost.match.yaml', 'utf8'), /- series C2: 18 pF from caps\s+# also keeps DC off the antenna/);
+      assert.equal((await run('tidy', '--verify', '.')).code, 0);
+    });
+  });
+
+  it('writes a report that needs nothing from elsewhere', async () => {
+    const { code } = await run('report', '.', '-o', 'deep/report.html');
+    assert.equal(code, 0);
+    const html = readFileSync('deep/report.html', 'utf8');
+    assert.match(html, /Orchard frost sensor, antenna port/);
+    assert.doesNotMatch(html, /<script|https?:\/\/|src=|@import|url\(/);
+  });
+});
