@@ -2,6 +2,7 @@ import { applyEdits, type TextEdit } from '../base/diagnostic';
 import type { Description } from '../description/description';
 import { namesIn, type NamedThing } from '../description/names';
 import { readDescription } from '../description/readDescription';
+import { isSeriesName } from '../quantity/preferredSeries';
 import { nameAtOffset, placesOf } from './definition';
 
 /**
@@ -14,6 +15,8 @@ export function renameEdits(description: Description, offset: number, newName: s
   const name = newName.trim();
   if (name === '') return { refusal: 'A name has at least one letter.' };
   if (name === thing.name) return [];
+  if (!/^[\p{L}_][\p{L}\d _.-]*$/u.test(name)) return { refusal: `«${name}» cannot be a name: names have letters, digits, - and _, and begin with a letter.` };
+  if (thing.kind === 'family' && isSeriesName(name)) return { refusal: `${name} is a preferred series and cannot name a family.` };
   const taken = namesIn(description.syntax).some((other) => other.kind === thing.kind && other.name === name && other.definition !== null);
   if (taken) return { refusal: `There is another ${word(thing)} called «${name}».` };
   const edits = placesOf(thing).map((span) => ({ span, text: name }));
