@@ -1,5 +1,5 @@
 /** A longer text is not read: no description by hand comes near it. In UTF-16 units. */
-export const textAtMost = 400_000;
+export const textAtMost = 200_000;
 /** Mistakes that are shown; what comes after them is left out. */
 export const diagnosticsAtMost = 100;
 /** Brackets and braces inside each other. The YAML reader recurses, so deeper texts are refused before it sees them. */
@@ -14,7 +14,9 @@ export const repairsAtMost = 60;
 export const repairRoundsAtMost = 3;
 /** Lines that are left out so that the others can be read, and characters that are read again for it. */
 export const skippedLinesAtMost = 10;
-export const skippedCharactersAtMost = 400_000;
+export const skippedCharactersAtMost = 200_000;
+/** Levels of what YAML itself makes of a text, some of which mistakes make. */
+export const treeDepthAtMost = 150;
 /** Errors of the YAML reader itself that are shown. */
 export const yamlErrorsAtMost = 20;
 

@@ -46,8 +46,9 @@ function readItem(item: TreeNode | null, span: Span, context: SectionContext): E
     context.report(mistake('wrong-shape', `An element is one key and one phrase, not ${shapeOf(item)}.`, item.span));
     return [placeholder('list', item.span)];
   }
-  item.entries.slice(1).forEach((entry) => reportSecondKey(entry, item, context));
-  return item.entries.flatMap((entry) => readEntry(entry, context));
+  const entries = item.entries.slice(0, elementsAtMost);
+  entries.slice(1).forEach((entry) => reportSecondKey(entry, item, context));
+  return entries.flatMap((entry) => readEntry(entry, context));
 }
 
 function reportSecondKey(entry: TreeEntry, item: MappingNode, context: SectionContext): void {

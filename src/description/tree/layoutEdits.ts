@@ -13,13 +13,15 @@ interface Layout {
   /** Lines inside a phrase or brackets that began on an earlier line, with that line. */
   readonly continued: Map<number, number>;
   readonly edits: TextEdit[];
+  /** The same edits by line, as far as they are within one. */
+  readonly gaps: Map<number, TextEdit[]>;
 }
 
 /** The changes of white space that lay a text out; null where it is written in a way that is better left alone (`? key`). */
 export function layoutEdits(text: string): TextEdit[] | null {
   const document = [...new Parser().parse(text)].find((token): token is CST.Document => token.type === 'document');
   if (document?.value?.type !== 'block-map') return null;
-  const layout: Layout = { text, lines: lineMap(text), indents: new Map(), continued: new Map(), edits: [] };
+  const layout: Layout = { text, lines: lineMap(text), indents: new Map(), continued: new Map(), edits: [], gaps: new Map() };
   if (!layOutMap(document.value, 0, layout)) return null;
   layOutLines(layout);
   return layout.edits.filter((edit) => text.slice(edit.span.start, edit.span.end) !== edit.text);
@@ -64,7 +66,11 @@ function layOutValue(value: CST.Token | undefined, after: number, indent: number
 
 /** Where the text of a phrase or of brackets ends; a block of text ends before the line end that closes it. */
 function endOf(token: CST.Token): number {
-  if (token.type === 'flow-collection') return Math.max(...token.end.map((end) => end.offset), token.offset, ...token.items.flatMap((item) => [item.key, item.value].map((each) => (each ? endOf(each) : 0))));
+  if (token.type === 'flow-collection') {
+    const last = token.items[token.items.length - 1];
+    const inside = [last?.key, last?.value].map((each) => (each ? endOf(each) : 0));
+    return Math.max(token.offset, ...inside, token.end[token.end.length - 1]?.offset ?? 0);
+  }
   if (token.type === 'block-scalar') {
     const header = token.props.reduce((end, prop) => Math.max(end, 'source' in prop ? prop.offset + prop.source.length : end), token.offset);
     return Math.max(header + token.source.length - 1, header - 1);
@@ -86,6 +92,9 @@ function gap(start: number, end: number, text: string, layout: Layout): void {
 
 function layOutLines(layout: Layout): void {
   const { text, lines, indents, continued, edits } = layout;
+  for (const edit of edits) gapsOn(layout, lineOf(layout, edit.span.start)).push(edit);
+  const next = nextEntries(layout);
+  const contentEnd = text.trimEnd().length;
   let previous = -1;
   let emptyBefore = true;
   for (let line = 0; line < lines.lineCount; line++) {
@@ -102,14 +111,14 @@ function layOutLines(layout: Layout): void {
       // The last line of the text is empty where the one before it ends with a line end, as it should.
       const isLast = line === lines.lineCount - 1;
       if (isLast) edits.push({ span: { start, end }, text: '' });
-      else if (emptyBefore || nothingFollows(layout, line)) edits.push({ span: { start, end: lines.lineSpan(line + 1).start }, text: '' });
+      else if (emptyBefore || start >= contentEnd) edits.push({ span: { start, end: lines.lineSpan(line + 1).start }, text: '' });
       else edits.push({ span: { start, end }, text: '' });
       emptyBefore = true;
       continue;
     }
     emptyBefore = false;
     const isComment = content.trimStart().startsWith('#');
-    const indent = indents.get(line) ?? (isComment ? commentIndent(line, previous, layout) : null);
+    const indent = indents.get(line) ?? (isComment ? commentIndent(line, previous, next[line + 1], layout) : null);
     if (indent !== null) setIndent(line, indent, layout);
     if (!isComment) {
       previous = line;
@@ -125,14 +134,31 @@ const indentOf = (layout: Layout, line: number): number => {
   return /^[ \t]*/.exec(layout.text.slice(start, end))?.[0].length ?? 0;
 };
 
-function nothingFollows({ text, lines }: Layout, line: number): boolean {
-  return text.slice(lines.lineSpan(line).start).trim() === '';
+/** The spaces that are set on one line. */
+function gapsOn({ gaps }: Layout, line: number): TextEdit[] {
+  const found = gaps.get(line) ?? [];
+  gaps.set(line, found);
+  return found;
+}
+
+/** For each line the next one below it that says something (no comment, nothing empty, not inside a phrase). */
+function nextEntries({ text, lines, indents, continued }: Layout): Int32Array {
+  const next = new Int32Array(lines.lineCount + 1).fill(lines.lineCount);
+  for (let line = lines.lineCount - 1; line >= 0; line--) {
+    const { start, end } = lines.lineSpan(line);
+    const content = text.slice(start, end).trim();
+    const says = indents.has(line) || (content !== '' && !content.startsWith('#') && !continued.has(line));
+    next[line] = says ? line : next[line + 1];
+  }
+  return next;
 }
 
 function setIndent(line: number, indent: number, layout: Layout): void {
   const { start } = layout.lines.lineSpan(line);
   if (layout.text[start] === '\ufeff') return;
-  layout.edits.push({ span: { start, end: start + indentOf(layout, line) }, text: ' '.repeat(indent) });
+  const edit = { span: { start, end: start + indentOf(layout, line) }, text: ' '.repeat(indent) };
+  layout.edits.push(edit);
+  gapsOn(layout, line).push(edit);
 }
 
 /** A line inside a phrase keeps its place relative to the line on which the phrase begins. */
@@ -146,15 +172,8 @@ function shiftContinued(line: number, from: number, layout: Layout): void {
 }
 
 /** A comment line goes with the neighbour at whose column it stood, else with the next line that says something. */
-function commentIndent(line: number, previous: number, layout: Layout): number {
-  const { lines, indents, text, continued } = layout;
-  let next = line + 1;
-  while (next < lines.lineCount && !indents.has(next)) {
-    const { start, end } = lines.lineSpan(next);
-    const content = text.slice(start, end).trim();
-    if (content !== '' && !content.startsWith('#') && !continued.has(next)) break;
-    next++;
-  }
+function commentIndent(line: number, previous: number, next: number, layout: Layout): number {
+  const { indents, continued } = layout;
   const own = indentOf(layout, line);
   const begun = previous >= 0 ? continued.get(previous) ?? previous : -1;
   const after = indents.get(next);
@@ -171,12 +190,13 @@ function moveComment(line: number, indent: number | null, layout: Layout): void 
   const comment = commentStart(layout, start, end);
   if (comment === null) return;
   const gapStart = start + text.slice(start, comment).trimEnd().length;
-  const inLine = edits.filter((edit) => edit.span.start >= start && edit.span.end <= gapStart);
-  const shift = inLine.reduce((sum, edit) => sum + edit.text.length - (edit.span.end - edit.span.start), 0);
+  const shift = gapsOn(layout, line).filter((edit) => edit.span.end <= gapStart).reduce((sum, edit) => sum + edit.text.length - (edit.span.end - edit.span.start), 0);
   if (indent === null && shift === 0 && !text.slice(gapStart, comment).includes('\t')) return;
   const column = comment - start;
   const width = gapStart - start + shift;
-  edits.push({ span: { start: gapStart, end: comment }, text: ' '.repeat(Math.max(column - width, 1)) });
+  const edit = { span: { start: gapStart, end: comment }, text: ' '.repeat(Math.max(column - width, 1)) };
+  edits.push(edit);
+  gapsOn(layout, line).push(edit);
 }
 
 /** Where the comment of a line with an entry begins; null without one. Quotation marks are respected. */
@@ -194,8 +214,9 @@ function commentStart({ text }: Layout, start: number, end: number): number | nu
   return null;
 }
 
-function trimEnd(line: number, { text, lines, edits }: Layout): void {
+function trimEnd(line: number, layout: Layout): void {
+  const { text, lines, edits } = layout;
   const { start, end } = lines.lineSpan(line);
   const kept = text.slice(start, end).trimEnd().length;
-  if (kept < end - start && !edits.some((edit) => edit.span.end > start + kept && edit.span.start < end)) edits.push({ span: { start: start + kept, end }, text: '' });
+  if (kept < end - start && !gapsOn(layout, line).some((edit) => edit.span.end > start + kept && edit.span.start < end)) edits.push({ span: { start: start + kept, end }, text: '' });
 }

@@ -1,4 +1,5 @@
 import type { Diagnostic } from '../../base/diagnostic';
+import { diagnosticsAtMost } from '../limits';
 import type { Composed } from './composeYaml';
 import { isUnclosed } from './skippedLines';
 import { visitTokens } from './visitTokens';
@@ -13,7 +14,7 @@ const refused: Readonly<Record<string, { code: string; message: string }>> = {
 export function refusedFeatures({ tokens }: Composed, toOriginal: (offset: number) => number): Diagnostic[] {
   const found: Diagnostic[] = [];
   const add = (word: { code: string; message: string }, start: number, length: number): void => {
-    found.push({ ...word, severity: 'error', span: { start: toOriginal(start), end: toOriginal(start + length) } });
+    if (found.length < diagnosticsAtMost) found.push({ ...word, severity: 'error', span: { start: toOriginal(start), end: toOriginal(start + length) } });
   };
   visitTokens(tokens, (token) => {
     const word = refused[token.type];

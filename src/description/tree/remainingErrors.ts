@@ -10,12 +10,15 @@ import { yamlErrorText } from './yamlErrorText';
 /** Told by `refusedFeatures` or by the count of documents. */
 const toldElsewhere: ReadonlySet<string> = new Set(['BAD_ALIAS', 'ALIAS_PROPS', 'TAG_RESOLVE_FAILED', 'BAD_COLLECTION_TYPE', 'MULTIPLE_ANCHORS', 'MULTIPLE_TAGS', 'MULTIPLE_DOCS']);
 
+/** One bad text makes thousands of errors, nearly all of them echoes. */
+const errorsLookedAt = 500;
+
 /** YAML's errors in our words, at most one a line; once it has lost the thread, what follows is only an echo. */
 export function remainingErrors({ errors }: Composed, repaired: RepairedText, original: string): Diagnostic[] {
   const found: Diagnostic[] = [];
   const lines = new Set<number>();
   let lost = false;
-  for (const error of errors) {
+  for (const error of errors.slice(0, errorsLookedAt)) {
     if (toldElsewhere.has(error.code) || /Missing closing|^Flow (sequence|map)/.test(error.message)) continue;
     const astray = /in YAML stream|at node end/.test(error.message);
     if (astray && lost) continue;

@@ -1,5 +1,6 @@
 import type { CST } from 'yaml';
 import type { Diagnostic } from '../../base/diagnostic';
+import { diagnosticsAtMost } from '../limits';
 import { lineAt } from './lineAt';
 import type { RepairedText } from './repairedText';
 import { visitTokens } from './visitTokens';
@@ -11,7 +12,7 @@ import { visitTokens } from './visitTokens';
 export function silentComments(tokens: readonly CST.Token[], { text, toOriginal }: RepairedText): Diagnostic[] {
   const found: Diagnostic[] = [];
   visitTokens(tokens, (token) => {
-    if (token.type !== 'comment') return;
+    if (token.type !== 'comment' || found.length >= diagnosticsAtMost) return;
     const at = token.offset;
     if (!/^#[^\s#]/.test(token.source) || text[at - 1] !== ' ' || /\s/.test(text[at - 2] ?? ' ')) return;
     const before = text.slice(lineAt(text, at).start, at).trim();

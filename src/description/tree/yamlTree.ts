@@ -1,6 +1,6 @@
 import type { Diagnostic, TextEdit } from '../../base/diagnostic';
 import { contains, overlaps, type Span } from '../../base/span';
-import { repairRoundsAtMost, skippedCharactersAtMost, skippedLinesAtMost, yamlErrorsAtMost } from '../limits';
+import { diagnosticsAtMost, repairRoundsAtMost, skippedCharactersAtMost, skippedLinesAtMost, yamlErrorsAtMost } from '../limits';
 import { checkKeys } from './checkKeys';
 import { composeYaml, type Composed } from './composeYaml';
 import { joinFlowCommas } from './joinFlowCommas';
@@ -52,6 +52,11 @@ export function yamlTree(text: string): YamlTree {
     diagnostics.push(...told);
     reading = read(clean, edits);
   }
+  if (reading.composed.tooDeep !== null) {
+    const start = Math.min(reading.repaired.toOriginal(reading.composed.tooDeep), text.length);
+    diagnostics.push(error('nested-too-deeply', 'This is nested too deeply; a match description never is.', { start, end: Math.min(start + 1, text.length) }));
+    return { root: null, diagnostics, sound: false, unexplained: [] };
+  }
   const skipped = skipLines(clean, edits, reading);
   reading = skipped.reading;
   const { repaired, composed } = reading;
@@ -69,7 +74,7 @@ export function yamlTree(text: string): YamlTree {
   // A complex key is a mistake of its own only where YAML has nothing to say about its line.
   const complexKeys: Diagnostic[] = [];
   const contents = composed.document?.contents;
-  const root = contents ? treeFromYaml(contents, repaired, (diagnostic) => complexKeys.push(diagnostic)) : null;
+  const root = contents ? treeFromYaml(contents, repaired, (diagnostic) => { if (complexKeys.length < diagnosticsAtMost) complexKeys.push(diagnostic); }) : null;
   diagnostics.push(...complexKeys.filter(({ span }) => !unexplained.includes(lineAt(text, span.start).start)));
   diagnostics.push(...silentComments(composed.tokens, repaired));
   const report = (diagnostic: Diagnostic) => void diagnostics.push(diagnostic);
@@ -99,7 +104,7 @@ function skipLines(clean: string, mended: readonly TextEdit[], first: Reading): 
     const better = skippedLines(composed, repaired, clean).map((edit) => {
       const others = edits.filter((other) => !overlaps(other.span, edit.span) && !contains(edit.span, other.span.start));
       return { edits: [...others, edit], reading: read(clean, [...others, edit]) };
-    }).find((each) => each.reading.composed.errors.length < composed.errors.length);
+    }).find((each) => each.reading.composed.tooDeep === null && each.reading.composed.errors.length < composed.errors.length);
     if (!better) break;
     const unclosed = refusedFeatures(composed, repaired.toOriginal).filter(({ code }) => code.startsWith('unclosed-'));
     told.push(...[...unclosed, ...remainingErrors(composed, repaired, clean)].slice(0, 1));
