@@ -25,6 +25,7 @@ async function bundle(): Promise<void> {
     esbuild.build({ ...common, format: 'cjs', outfile: path.join(out, 'suite.cjs'), external: ['vscode', 'mocha'], entryPoints: [path.join(here, 'suite', 'index.ts')] }),
     esbuild.build({
       ...common, platform: 'browser', target: 'es2022', format: 'cjs', outfile: path.join(out, 'webSuite.cjs'), external: ['vscode'],
+      define: { module: 'undefined' }, // or mocha would take itself for the whole module and put itself in the place of our exports
       stdin: { contents: [`import './webIndex';`, ...web.map((name) => `import './${name}';`), `export { run } from './webIndex';`].join('\n'), resolveDir: path.join(here, 'suite') },
     }),
     esbuild.build({

@@ -9,6 +9,8 @@ export type PageAction =
   | { readonly do: 'phase' }
   /** Prints a line of the test run. */
   | { readonly do: 'say'; readonly text: string }
+  /** How a suite ended whose host cannot write files. */
+  | { readonly do: 'result'; readonly passes: number; readonly failures: number }
   | { readonly do: 'picture'; readonly name: string; readonly of: Place }
   /** A key or chord, as `Control+Shift+P`. */
   | { readonly do: 'press'; readonly key: string }

@@ -1,4 +1,4 @@
-import { mkdir, readFile } from 'node:fs/promises';
+import { appendFile, mkdir, readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
 import path from 'node:path';
 import type { Locator, Page } from 'playwright-core';
@@ -40,6 +40,8 @@ export async function performAction({ page, picturesFolder, phase, policyViolati
       return phase();
     case 'say':
       return console.log(action.text);
+    case 'result':
+      return appendFile(process.env.OHMWARD_RESULTS ?? '/dev/null', `${JSON.stringify({ passes: action.passes, failures: action.failures })}\n`);
     case 'picture': {
       await mkdir(picturesFolder, { recursive: true });
       const file = path.join(picturesFolder, `${action.name.replace(/[^\w-]+/g, '-')}.png`);

@@ -18,6 +18,7 @@ async function ask<T>(action: PageAction): Promise<T> {
 export const page = {
   phase: () => (bridgeUrl === null ? Promise.resolve(1) : ask<number>({ do: 'phase' })),
   say: (text: string) => ask<void>({ do: 'say', text }),
+  result: (passes: number, failures: number) => ask<void>({ do: 'result', passes, failures }),
   picture: (name: string, of: Place = 'window') => ask<string>({ do: 'picture', name, of }),
   press: (key: string) => ask<void>({ do: 'press', key }),
   type: (text: string) => ask<void>({ do: 'type', text }),

@@ -9,8 +9,8 @@ function printed([format, ...values]: unknown[]): string {
 /** The reporter's lines, in their order, out of the worker. */
 let last: Promise<unknown> = Promise.resolve();
 
-// Loaded before the reporter, which keeps the function that it finds.
-console.log = (...words: unknown[]) => {
+/** What the reporter calls for each line. */
+export const say = (...words: unknown[]): void => {
   last = last.then(() => page.say(printed(words)));
 };
 
