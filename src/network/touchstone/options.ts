@@ -1,27 +1,34 @@
-import { refuse } from './touchstoneResult';
+import { quoted, refuse } from './touchstoneResult';
+
+export type Parameter = 'S' | 'Y' | 'Z' | 'G' | 'H';
 
 export interface TouchstoneOptions {
-  readonly unitHz: number;
-  readonly parameter: 'S' | 'Y' | 'Z' | 'G' | 'H';
+  /** Frequencies of the file count in 10^n Hz. */
+  readonly unitExponent: number;
+  readonly parameter: Parameter;
   readonly format: 'DB' | 'MA' | 'RI';
-  /** One for all ports, or one a port. */
+  /** Ω: one for all ports, or one a port. */
   readonly referenceOhm: readonly number[];
+  /** Where the option line stands, from 1. */
+  readonly line: number;
 }
 
-const units: Readonly<Record<string, number>> = { HZ: 1, KHZ: 1e3, MHZ: 1e6, GHZ: 1e9 };
+type Option = 'frequency unit' | 'parameter' | 'format' | 'reference';
 
-/** The option line after its `#`: any order, but the numbers follow R; defaults GHz S MA R 50. */
-export function readOptions(words: readonly string[]): TouchstoneOptions {
-  const found = new Map<'unit' | 'parameter' | 'format' | 'reference', string>();
+const unitExponents: Readonly<Record<string, number>> = { HZ: 0, KHZ: 3, MHZ: 6, GHZ: 9 };
+
+/** The option line after its `#`: any order and case, but the numbers follow R; defaults GHz S MA R 50. */
+export function readOptions(words: readonly string[], line: number): TouchstoneOptions {
+  const found = new Map<Option, string>();
   let referenceOhm: number[] = [50];
-  const state = (what: 'unit' | 'parameter' | 'format' | 'reference', value: string) => {
+  const state = (what: Option, value: string) => {
     const before = found.get(what);
     if (before !== undefined && before !== value) refuse(`the option line states the ${what} twice: ${before} and ${value}`);
     found.set(what, value);
   };
   for (let i = 0; i < words.length; i++) {
     const word = words[i].toUpperCase();
-    if (Object.hasOwn(units, word)) state('unit', word);
+    if (Object.hasOwn(unitExponents, word)) state('frequency unit', word);
     else if (/^[SYZGH]$/.test(word)) state('parameter', word);
     else if (/^(DB|MA|RI)$/.test(word)) state('format', word);
     else if (word === 'R') {
@@ -33,24 +40,32 @@ export function readOptions(words: readonly string[]): TouchstoneOptions {
     } else refuse(unknownWord(words[i]));
   }
   return {
-    unitHz: units[found.get('unit') ?? 'GHZ'],
-    parameter: (found.get('parameter') ?? 'S') as TouchstoneOptions['parameter'],
+    unitExponent: unitExponents[found.get('frequency unit') ?? 'GHZ'],
+    parameter: (found.get('parameter') ?? 'S') as Parameter,
     format: (found.get('format') ?? 'MA') as TouchstoneOptions['format'],
     referenceOhm,
+    line,
   };
 }
 
 function unknownWord(word: string): string {
-  if (/hz$/i.test(word)) return `«${word}» is no unit of a Touchstone file; there are Hz, kHz, MHz and GHz`;
-  if (/^[A-Za-z]$/.test(word)) return `«${word}» is no parameter of a Touchstone file; there are S, Y, Z, G and H`;
-  return `«${word}» on the option line is not understood`;
+  if (/hz$/i.test(word)) return `${quoted(word)} is not a frequency unit of a Touchstone file; there are Hz, kHz, MHz and GHz`;
+  if (/^[A-Za-z]$/.test(word)) return `${quoted(word)} is not a parameter of a Touchstone file; there are S, Y, Z, G and H`;
+  if (/^[+-]?[\d.]/.test(word)) return `${quoted(word)} on the option line does not belong to anything; a reference resistance follows R`;
+  if (/^[A-Za-z]{2}$/.test(word)) return `${quoted(word)} is not a number format of a Touchstone file; there are DB, MA and RI`;
+  return `${quoted(word)} on the option line is not understood`;
 }
 
-/** A reference resistance: a positive real number. */
+/** A reference resistance: a positive real number of ohms. */
 export function readReference(word: string): number {
-  if (/[ij]/i.test(word)) refuse(`the reference «${word}» is not real; complex references are not part of the format`);
-  const value = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(word) ? Number(word) : NaN;
-  if (word.includes(',') && Number.isNaN(value)) refuse(`«${word}» has a decimal comma; numbers have a point`);
-  if (!(value > 0) || !Number.isFinite(value)) refuse(`the reference «${word}» is not a resistance greater than zero`);
+  if (/^[+-]?\d+,\d/.test(word)) refuse(`${quoted(word)} has a decimal comma; numbers have a point`);
+  if (/\d.*[ij]|[ij].*\d/i.test(word)) refuse(`the reference ${quoted(word)} is not real; references are real numbers of ohms`);
+  const value = word.length <= 40 && /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(word) ? Number(word) : NaN;
+  if (Number.isNaN(value)) refuse(`the reference ${quoted(word)} is not a number of ohms`);
+  if (!(value >= referenceAtLeastOhm && value <= referenceAtMostOhm)) refuse(`the reference ${quoted(word)} is not a resistance greater than zero that a line can have`);
   return value;
 }
+
+/** Beyond these a reference is a slip, and its square leaves the numbers. */
+const referenceAtLeastOhm = 1e-12;
+const referenceAtMostOhm = 1e12;

@@ -1,20 +1,22 @@
-import type { KeywordState } from './keywords';
-import type { TouchstoneOptions } from './options';
-import { growingArray, type GrowingArray } from './growingArray';
+import type { NetworkData } from '../networkData';
+import { portsText, type DataLayout } from './dataLayout';
+import { numberStore } from './numberStore';
+import { toScattering } from './toScattering';
 import { refuse } from './touchstoneResult';
 
-/** Collects numbers line by line into frequency points, in real and imaginary parts and in the order of the file. */
+/** Collects numbers line by line into frequency points, and each whole point into a row of S. */
 export interface PointAssembly {
-  /** The numbers of one line: `numbers[0 … count − 1]`. */
-  takeLine(numbers: Float64Array, count: number, line: number): void;
+  /** The numbers `numbers[0 … count − 1]` of line `line`; `firstHz` is the first of them taken as a frequency. */
+  takeLine(numbers: Float64Array, count: number, firstHz: number, line: number): void;
+  /** A line of noise data under its own keyword. */
+  takeNoise(count: number, firstHz: number): void;
   /** The last point must be whole. */
   close(): void;
-  readonly frequencyHz: GrowingArray;
-  /** Pairs re, im: as many a point as the file states. */
-  readonly values: GrowingArray;
-  readonly pairs: number;
+  /** Empties the assembly. */
+  data(): NetworkData;
+  readonly points: number;
   readonly noisePoints: number;
-  /** Line (from 1) of the first reflection above 1, where the parameters are S; null where there is none. */
+  /** Line of the first reflection above 1; null where there is none. */
   readonly firstAboveOne: number | null;
 }
 
@@ -23,76 +25,109 @@ const noiseColumns = 5;
 /** Rounding of a file's digits is no gain. */
 const aboveOne = 1 + 1e-9;
 
-export function pointAssembly(ports: number, options: TouchstoneOptions, state: KeywordState): PointAssembly {
-  const versioned = state.version !== null;
-  const pairs = state.matrix === 'full' ? ports * ports : (ports * (ports + 1)) / 2;
+/**
+ * A line with an odd count of numbers starts a point, one with an even count continues it: a pair never falls on two
+ * lines. In version 1 the points of one and two ports have one line each, and noise data begin where the frequency of a
+ * two-port stops increasing and five numbers stand on the line.
+ */
+export function pointAssembly(layout: DataLayout): PointAssembly {
+  const { ports, options, versioned, places, pairs, referenceOhm } = layout;
+  const { format, parameter } = options;
   const wanted = 2 * pairs;
-  const frequencyHz = growingArray();
-  const values = growingArray();
-  let pending = 0;
-  let held = 0;
+  const oneLine = !versioned && ports <= 2;
+  const frequencyHz = numberStore();
+  const sRe = numberStore();
+  const sIm = numberStore();
+  const pairRe = new Float64Array(pairs);
+  const pairIm = new Float64Array(pairs);
+  let lastHz = -1;
+  let held = wanted;
   let inNoise = false;
   let noisePoints = 0;
-  let lastNoise = 0;
+  let lastNoiseHz = -1;
   let firstAboveOne: number | null = null;
 
-  const take = (first: number, second: number, line: number) => {
-    let re = first;
-    let im = second;
-    if (options.format !== 'RI') {
-      const size = options.format === 'DB' ? 10 ** (first / 20) : first;
-      re = size * Math.cos(second * degrees);
-      im = size * Math.sin(second * degrees);
+  const takePair = (first: number, second: number) => {
+    const index = held / 2;
+    if (format === 'RI') {
+      pairRe[index] = first;
+      pairIm[index] = second;
+    } else {
+      if (format === 'MA' && first < 0) refuse('a magnitude is negative');
+      const size = format === 'DB' ? 10 ** (first / 20) : first;
+      pairRe[index] = size * Math.cos(second * degrees);
+      pairIm[index] = size * Math.sin(second * degrees);
     }
-    if (!Number.isFinite(re) || !Number.isFinite(im)) refuse('a value is too large to compute with');
-    if (firstAboveOne === null && options.parameter === 'S' && Math.hypot(re, im) > aboveOne && isDiagonal((values.length / 2) % pairs, ports, state)) firstAboveOne = line;
-    values.push(re);
-    values.push(im);
+    if (!Number.isFinite(pairRe[index]) || !Number.isFinite(pairIm[index])) refuse(`the value ${first} ${format === 'DB' ? 'dB ' : ''}is too large to compute with`);
+    held += 2;
   };
 
-  const takeNoise = (numbers: Float64Array, count: number) => {
+  const finishPoint = (line: number) => {
+    if (parameter === 'S') {
+      for (const place of places) {
+        sRe.push(pairRe[place]);
+        sIm.push(pairIm[place]);
+      }
+      for (let port = 0; port < ports && firstAboveOne === null; port++) {
+        const place = places[port * ports + port];
+        if (pairRe[place] ** 2 + pairIm[place] ** 2 > aboveOne) firstAboveOne = line;
+      }
+      return;
+    }
+    const matrix = Array.from({ length: ports }, (_, row) => Array.from({ length: ports }, (__, column) => {
+      const place = places[row * ports + column];
+      return { re: pairRe[place], im: pairIm[place] };
+    }));
+    const scattering = toScattering(parameter, matrix, referenceOhm, !versioned);
+    if (scattering === null) return refuse(`this point of ${parameter} parameters has no finite scattering parameters`);
+    scattering.forEach((row, port) => row.forEach((value, column) => {
+      sRe.push(value.re);
+      sIm.push(value.im);
+      if (port === column && firstAboveOne === null && value.re ** 2 + value.im ** 2 > aboveOne) firstAboveOne = line;
+    }));
+  };
+
+  const takeNoise = (count: number, firstHz: number) => {
     if (count !== noiseColumns) refuse(`a line of noise data has ${noiseColumns} numbers, not ${count}`);
-    const hz = numbers[0] * options.unitHz;
-    if (noisePoints > 0 && hz <= lastNoise) refuse('the frequencies of the noise data must increase');
-    lastNoise = hz;
+    if (firstHz < 0) refuse('a frequency is negative');
+    if (firstHz <= lastNoiseHz) refuse('the frequencies of the noise data must increase');
+    lastNoiseHz = firstHz;
     noisePoints++;
   };
 
-  const startPoint = (numbers: Float64Array, count: number) => {
-    if (held > 0) refuse(incomplete(held, wanted, ports));
-    const hz = numbers[0] * options.unitHz;
-    if (hz < 0) refuse('a frequency is not negative');
-    if (!Number.isFinite(hz)) refuse('a frequency is too large to compute with');
-    if (frequencyHz.length > 0 && hz <= frequencyHz.at(frequencyHz.length - 1)) refuse('the frequencies must increase');
-    if (count - 1 > wanted) refuse(tooMany(count, wanted, ports));
-    frequencyHz.push(hz);
-    held = 1;
-    pending = wanted;
+  const startPoint = (count: number, firstHz: number) => {
+    if (held < wanted) refuse(incomplete(held, wanted, ports));
+    if (count - 1 > wanted || (oneLine && count - 1 < wanted)) refuse(wrongCount(count, wanted, ports));
+    if (firstHz < 0) refuse('a frequency is negative');
+    if (!Number.isFinite(firstHz)) refuse('a frequency is too large to compute with');
+    if (firstHz <= lastHz) refuse('the frequencies must increase');
+    frequencyHz.push(firstHz);
+    lastHz = firstHz;
+    held = 0;
   };
 
   return {
-    takeLine(numbers, count, line) {
-      if (versioned ? state.section === 'noise' : inNoise) return takeNoise(numbers, count);
+    takeLine(numbers, count, firstHz, line) {
       const starts = count % 2 === 1;
-      if (!starts && held === 0) {
-        refuse(ports <= 2 ? `${count} numbers on the line, and a point has ${wanted + 1}` : 'a point begins with a line of an odd count of numbers: its frequency, then whole pairs');
-      }
-      if (!versioned && starts && held === 0 && ports === 2 && count === noiseColumns && frequencyHz.length > 0 && numbers[0] * options.unitHz <= frequencyHz.at(frequencyHz.length - 1)) {
+      const whole = held === wanted;
+      if (inNoise || (!versioned && ports === 2 && whole && count === noiseColumns && frequencyHz.length > 0 && firstHz <= lastHz)) {
         inNoise = true;
-        return takeNoise(numbers, count);
+        return takeNoise(count, firstHz);
       }
-      if (starts) startPoint(numbers, count);
-      const from = starts ? 1 : 0;
-      if (count - from > pending) refuse(tooMany(count - from + wanted - pending + 1, wanted, ports));
-      for (let i = from; i < count; i += 2) take(numbers[i], numbers[i + 1], line);
-      pending -= count - from;
-      if (pending === 0) held = 0;
-      else if (!versioned && ports <= 2) refuse(incomplete(wanted - pending, wanted, ports));
+      if (starts) startPoint(count, firstHz);
+      else if (whole) refuse(oneLine ? wrongCount(count, wanted, ports) : tornOrExtra(count));
+      if (count > wanted - held + (starts ? 1 : 0)) refuse(wrongCount(1 + held + count, wanted, ports));
+      for (let i = starts ? 1 : 0; i < count; i += 2) takePair(numbers[i], numbers[i + 1]);
+      if (held === wanted) finishPoint(line);
     },
+    takeNoise,
     close() {
-      if (held > 0) refuse(incomplete(wanted - pending, wanted, ports));
+      if (held < wanted) refuse(incomplete(held, wanted, ports));
     },
-    frequencyHz, values, pairs,
+    data: () => ({ ports, frequencyHz: frequencyHz.drain(), referenceOhm: Float64Array.from(referenceOhm), sRe: sRe.drain(), sIm: sIm.drain() }),
+    get points() {
+      return frequencyHz.length;
+    },
     get noisePoints() {
       return noisePoints;
     },
@@ -102,23 +137,14 @@ export function pointAssembly(ports: number, options: TouchstoneOptions, state: 
   };
 }
 
-const incomplete = (found: number, wanted: number, ports: number): string =>
-  `a point of ${portsText(ports)} has ${wanted + 1} numbers with its frequency, and here it has ${found + 1}`;
+const incomplete = (held: number, wanted: number, ports: number): string =>
+  `the point before is not complete: ${portsText(ports)} make ${wanted + 1} numbers with the frequency, and it has ${held + 1}`;
 
-function tooMany(count: number, wanted: number, ports: number): string {
+const tornOrExtra = (count: number): string =>
+  `${count} numbers where a point begins: its line has an odd count, the frequency and whole pairs, so a pair is torn by the line's end or a number is missing or too many`;
+
+function wrongCount(count: number, wanted: number, ports: number): string {
   const other = [1, 2, 3, 4].find((candidate) => candidate !== ports && 2 * candidate * candidate + 1 === count);
-  return `${count} numbers, and a point of ${portsText(ports)} has ${wanted + 1}${other ? `: this looks like the data of ${portsText(other)} under the wrong name` : ''}`;
-}
-
-const portsText = (ports: number) => (ports === 1 ? 'one port' : `${ports} ports`);
-
-/** Whether the pair of that index is a reflection. */
-function isDiagonal(index: number, ports: number, { matrix }: KeywordState): boolean {
-  if (matrix === 'full') return index % (ports + 1) === 0;
-  for (let row = 0, at = 0; row < ports; row++) {
-    const diagonal = matrix === 'lower' ? at + row : at;
-    if (index === diagonal) return true;
-    at += matrix === 'lower' ? row + 1 : ports - row;
-  }
-  return false;
+  const hint = other === undefined ? '' : `: these look like the data of ${portsText(other)} under the name of another count`;
+  return `${count === 1 ? 'one number' : `${count} numbers`} for a point, and ${portsText(ports)} make ${wanted + 1} with the frequency${hint}`;
 }

@@ -1,9 +1,12 @@
+import { dataLayout } from './dataLayout';
 import { keywordState, takeKeyword, takeReferences } from './keywords';
-import { networkFromPoints } from './networkFromPoints';
+import { numbersPerLine, warningsAtMost } from './limits';
+import { lineSplitter } from './lineSplitter';
+import { asciiText, contentEnd, skipText } from './lineText';
 import { readOptions, type TouchstoneOptions } from './options';
 import { pointAssembly, type PointAssembly } from './pointAssembly';
 import { scanNumber } from './scanNumber';
-import { refuse, TouchstoneRefusal, type TouchstoneProblem, type TouchstoneResult } from './touchstoneResult';
+import { quoted, refuse, TouchstoneRefusal, type TouchstoneProblem, type TouchstoneResult } from './touchstoneResult';
 
 export type { TouchstoneProblem, TouchstoneResult } from './touchstoneResult';
 
@@ -13,15 +16,12 @@ export interface TouchstoneReader {
   finish(): TouchstoneResult;
 }
 
-const portsAtMost = 4;
-const numbersPerLine = 2 * portsAtMost * portsAtMost + 1;
-/** A line beyond this is no text. */
-const longestLine = 1 << 16;
-
 /**
  * A Touchstone file of version 1.1, 2.0 or 2.1 with one to four ports; S, Y, Z, G or H; RI, MA or DB; any real references.
- * The number of ports is the name's (`.s1p` … `.s4p`) or that of [Number of Ports]. Noise data are counted and skipped. Never
- * throws: what is wrong is named with its line, and then nothing of the file counts.
+ * The number of ports is the name's (`.s1p` … `.s4p`) or that of [Number of Ports]. Data of other parameters are converted
+ * to S; noise data are counted and skipped. Never throws: what is wrong is named with its line, and then nothing of the
+ * file counts. All values of the result are finite. After «Touchstone File Format Specification» 1.1, 2.0 and 2.1; the
+ * published snippets are in `test/network/touchstone/snippets.ts`.
  */
 export function readTouchstone(fileName: string, content: string | Uint8Array): TouchstoneResult {
   const reader = touchstoneReader(fileName);
@@ -29,175 +29,116 @@ export function readTouchstone(fileName: string, content: string | Uint8Array): 
   return reader.finish();
 }
 
+const openingBracket = 91;
+const numberSign = 35;
+
+/** The same in pieces of any size. Memory: the numbers of the file and, at the end, a third of them once more. */
 export function touchstoneReader(fileName: string): TouchstoneReader {
-  const named = /\.s(\d+)p$/i.exec(fileName);
   const state = keywordState();
   const warnings: TouchstoneProblem[] = [];
-  const numbers = new Float64Array(numbersPerLine + 1);
-  const scanned = { value: 0, end: 0 };
+  const numbers = new Float64Array(numbersPerLine);
+  const scanned = { value: 0, shifted: 0, end: 0 };
   let options: TouchstoneOptions | null = null;
   let points: PointAssembly | null = null;
-  let ports = 0;
-  let line = 0;
-  let carry = new Uint8Array(0);
   let problem: TouchstoneProblem | null = null;
-  let afterReturn = false;
-  let foreignSeen = false;
 
-  const portsOf = (): number => {
-    const stated = named ? Number(named[1]) : null;
-    if (state.version === null && stated === null) return refuse('without [Version] the number of ports comes from the name: .s1p to .s4p');
-    if (state.version !== null && state.ports === null) return refuse('[Number of Ports] is missing');
-    if (stated !== null && state.ports !== null && stated !== state.ports) refuse(`the name says ${stated} ports, [Number of Ports] says ${state.ports}`);
-    const count = state.ports ?? stated!;
-    if (count < 1 || count > portsAtMost) refuse(`files of 1 to ${portsAtMost} ports are read, and this has ${count}`);
-    return count;
+  const warn = (message: string) => {
+    const said = warnings.some((warning) => warning.message === message);
+    if (!said && warnings.length < warningsAtMost) warnings.push({ message, line: lines.line });
   };
-
-  const begin = (): PointAssembly => {
-    if (!options) return refuse('the option line (# …) is missing before the data');
-    ports = portsOf();
-    if (state.version !== null) {
-      if (state.section !== 'network') refuse('the data must come after [Network Data]');
-      if (ports === 2 && state.twoPortOrder === null) refuse('[Two-Port Data Order] is missing, and the order of S12 and S21 is not to be guessed');
-      if (state.frequencies === null) refuse('[Number of Frequencies] is missing');
-    }
-    if (ports !== 2 && (options.parameter === 'H' || options.parameter === 'G')) refuse(`${options.parameter} parameters are those of two-ports`);
-    const referenceCount = (state.references ?? options.referenceOhm).length;
-    if (referenceCount !== ports && !(referenceCount === 1 && state.references === null)) refuse(`${referenceCount} references are stated for ${ports === 1 ? 'one port' : `${ports} ports`}`);
-    return pointAssembly(ports, options, state);
-  };
-
-  const textOf = (bytes: Uint8Array, start: number, end: number) => new TextDecoder('latin1').decode(bytes.subarray(start, end));
 
   const takeLine = (bytes: Uint8Array, from: number, to: number) => {
     let start = from;
-    if (line === 1 && bytes[start] === 0xef && bytes[start + 1] === 0xbb && bytes[start + 2] === 0xbf) start += 3;
-    if (to - start > longestLine) refuse('the line is too long for a text file');
-    let end = to;
-    for (let i = start; i < to; i++) {
-      const byte = bytes[i];
-      if (byte === 33) {
-        end = i;
-        checkComment(bytes, i, to);
-        break;
-      }
-      if (byte > 126 || (byte < 32 && byte !== 9)) refuse(strangeByte(bytes, i));
-    }
-    while (start < end && bytes[start] <= 32) start++;
-    if (start === end || state.section === 'end') return;
-    const first = bytes[start];
-    if (first === 91) return takeKeyword(state, textOf(bytes, start, end).trim(), options !== null);
-    if (state.section === 'information') return;
-    if (first === 35) {
-      const words = textOf(bytes, start + 1, end).split(/\s+/).filter((word) => word !== '');
-      options ??= readOptions(words);
-      return;
-    }
-    if (state.section === 'references') return takeReferences(state, textOf(bytes, start, end));
-    points ??= begin();
-    takeNumbers(bytes, start, end);
+    if (lines.line === 1 && bytes[start] === 0xef && bytes[start + 1] === 0xbb && bytes[start + 2] === 0xbf && to - start >= 3) start += 3;
+    while (start < to && (bytes[start] === 32 || bytes[start] === 9)) start++;
+    if (state.section === 'end') return takeAfterEnd(bytes, start, to);
+    if (state.section === 'information' && bytes[start] !== openingBracket) return skipText(bytes, start, to, 'the information block', warn);
+    const end = contentEnd(bytes, start, to, warn);
+    if (start === end) return;
+    if (bytes[start] === openingBracket) return takeKeyword(state, asciiText(bytes, start, end).trim(), lines.line, options !== null);
+    if (bytes[start] === numberSign) return takeOptions(asciiText(bytes, start + 1, end));
+    if (state.section === 'references') return takeReferences(state, asciiText(bytes, start, end));
+    points ??= pointAssembly(dataLayout(fileName, options, state, lines.line));
+    takeNumbers(points, bytes, start, end);
   };
 
-  const takeNumbers = (bytes: Uint8Array, start: number, end: number) => {
+  const takeAfterEnd = (bytes: Uint8Array, start: number, to: number) => {
+    skipText(bytes, start, to, 'what follows [End]', warn);
+    if (start < to && bytes[start] !== 33) warn('what follows [End] is not read');
+  };
+
+  const takeOptions = (text: string) => {
+    if (options === null) options = readOptions(text.split(/\s+/).filter((word) => word !== ''), lines.line);
+    else warn('a second option line is not read; the first one holds');
+  };
+
+  const takeNumbers = (assembly: PointAssembly, bytes: Uint8Array, start: number, end: number) => {
+    const shift = options!.unitExponent;
     let count = 0;
+    let firstHz = 0;
     for (let at = start; at < end; ) {
       if (bytes[at] <= 32) {
         at++;
         continue;
       }
-      scanNumber(bytes, at, end, scanned);
-      if (!Number.isFinite(scanned.value)) refuse(notNumber(textOf(bytes, at, scanned.end)));
+      scanNumber(bytes, at, end, count === 0 ? shift : 0, scanned);
+      if (!Number.isFinite(scanned.value)) refuse(notNumber(asciiText(bytes, at, scanned.end), scanned.value));
       if (count === numbersPerLine) refuse(`more than ${numbersPerLine} numbers stand on the line`);
+      if (count === 0) firstHz = scanned.shifted;
       numbers[count++] = scanned.value;
       at = scanned.end;
     }
-    points!.takeLine(numbers, count, line);
+    if (state.section === 'noise') assembly.takeNoise(count, firstHz);
+    else assembly.takeLine(numbers, count, firstHz, lines.line);
   };
 
-  const checkComment = (bytes: Uint8Array, start: number, end: number) => {
-    if (foreignSeen) return;
-    for (let i = start; i < end; i++) {
-      if (bytes[i] <= 126) continue;
-      foreignSeen = true;
-      warnings.push({ message: 'a comment has characters outside ASCII', line });
-      return;
+  const conclude = (): TouchstoneResult => {
+    if (state.section === 'information') refuse('[End Information] is missing', state.lines.get('begin information'));
+    if (points === null) return refuse(options === null ? 'the option line (# …) is missing, and there are no data' : 'the file has no data');
+    points.close();
+    if (state.version !== null) checkCounts(points);
+    if (points.firstAboveOne !== null) warnings.push({ message: 'a reflection is above 1, as noise or gain makes it', line: points.firstAboveOne });
+    return { ok: true, data: points.data(), warnings, noisePoints: points.noisePoints };
+  };
+
+  const checkCounts = ({ points: found, noisePoints }: PointAssembly) => {
+    if (state.section !== 'end') refuse('[End] is missing: the file may have been cut off');
+    if (found !== state.frequencies) refuse(`[Number of Frequencies] says ${state.frequencies}, and ${found} were found`, state.lines.get('number of frequencies'));
+    if (state.noiseFrequencies === null) {
+      if (noisePoints > 0) warn('[Number of Noise Frequencies] is missing');
+    } else if (noisePoints !== state.noiseFrequencies) {
+      refuse(`[Number of Noise Frequencies] says ${state.noiseFrequencies}, and ${noisePoints} were found`, state.lines.get('number of noise frequencies'));
     }
   };
 
+  /** Refusals are the one kind of exception that is expected; the first ends the reading. */
   const guarded = (work: () => void) => {
-    if (problem) return;
+    if (problem !== null) return;
     try {
       work();
     } catch (error) {
       if (!(error instanceof TouchstoneRefusal)) throw error;
-      problem = { message: error.message, line: Math.max(line, 1) };
+      problem = { message: error.message, line: error.line ?? Math.max(lines.line, 1) };
     }
   };
 
+  const lines = lineSplitter(takeLine);
   return {
-    push(chunk) {
-      guarded(() => {
-        let bytes = chunk;
-        if (carry.length > 0) {
-          bytes = new Uint8Array(carry.length + chunk.length);
-          bytes.set(carry);
-          bytes.set(chunk, carry.length);
-        }
-        let start = 0;
-        for (let i = carry.length; i < bytes.length; i++) {
-          const byte = bytes[i];
-          if (byte !== 10 && byte !== 13) {
-            if (i - start > 2 * longestLine) refuse('the line is too long for a text file');
-            afterReturn = false;
-            continue;
-          }
-          // CR LF is one end; the LF may even come with the next piece.
-          if (byte === 10 && afterReturn && i === start) {
-            afterReturn = false;
-            start = i + 1;
-            continue;
-          }
-          line++;
-          takeLine(bytes, start, i);
-          afterReturn = byte === 13;
-          start = i + 1;
-        }
-        carry = bytes.slice(start);
-      });
-    },
+    push: (chunk) => guarded(() => lines.push(chunk)),
     finish() {
-      guarded(() => {
-        if (carry.length > 0) {
-          line++;
-          takeLine(carry, 0, carry.length);
-        }
-      });
       let result: TouchstoneResult | null = null;
       guarded(() => {
-        if (state.section === 'information') refuse('[End Information] is missing');
-        if (!points) return refuse(!options ? 'the option line (# …) is missing' : 'the file has no data');
-        points.close();
-        if (state.version !== null) checkCounts(points);
-        if (points.firstAboveOne !== null) warnings.push({ message: 'a reflection is above 1, as noise can make it', line: points.firstAboveOne });
-        result = { ok: true, data: networkFromPoints(points, ports, options!, state), warnings, noisePoints: points.noisePoints };
+        lines.finish();
+        result = conclude();
       });
       return result ?? { ok: false, problem: problem! };
     },
   };
-
-  function checkCounts({ frequencyHz, noisePoints }: PointAssembly): void {
-    if (state.section !== 'end') refuse('[End] is missing: the file may have been cut off');
-    if (frequencyHz.length !== state.frequencies) refuse(`[Number of Frequencies] says ${state.frequencies}, and ${frequencyHz.length} were found`);
-    if (state.noiseFrequencies !== null && noisePoints !== state.noiseFrequencies) refuse(`[Number of Noise Frequencies] says ${state.noiseFrequencies}, and ${noisePoints} were found`);
-  }
 }
 
-const notNumber = (word: string): string =>
-  /^[+-]?\d*,\d/.test(word) ? `«${word.slice(0, 40)}» has a decimal comma; numbers have a point` : `«${word.slice(0, 40)}» is not a number`;
-
-function strangeByte(bytes: Uint8Array, at: number): string {
-  if (bytes[at] === 0) return 'the file is not plain text (a zero byte)';
-  if (bytes[at] === 0xc2 && bytes[at + 1] === 0xa0) return 'a no-break space stands among the data';
-  return bytes[at] > 126 ? 'a character outside ASCII stands among the data' : 'a control character stands among the data';
+function notNumber(word: string, value: number): string {
+  if (!Number.isNaN(value)) return `${quoted(word)} is too large for a number`;
+  if (/^[+-]?\d*,\d+(?:[eE][+-]?\d+)?$/.test(word)) return `${quoted(word)} has a decimal comma; numbers have a point`;
+  if (/^[^,]+,/.test(word)) return `${quoted(word)} has commas; numbers are set apart by blanks`;
+  return `${quoted(word)} is not a number`;
 }
