@@ -1,4 +1,4 @@
-import { closeSync, openSync, readdirSync, readFileSync, readSync, statSync } from 'node:fs';
+import { closeSync, fstatSync, openSync, readdirSync, readFileSync, readSync, statSync } from 'node:fs';
 import { dirname, isAbsolute, join, resolve } from 'node:path';
 import type { FileReference, LoadedFile, LoadedFiles } from '../description/files';
 import { filesNeeded } from '../assistance/assess';
@@ -48,10 +48,12 @@ function readDrawer(path: string): LoadedFile {
 function readNetwork(path: string): LoadedFile {
   const reader = touchstoneReader(path);
   const handle = openSync(path, 'r');
+  // Most measurements are some kilobytes: no need to clear a megabyte for each.
+  const size = Math.min(chunkBytes, fstatSync(handle).size + 1);
   try {
     for (;;) {
-      const buffer = new Uint8Array(chunkBytes);
-      const count = readSync(handle, buffer, 0, chunkBytes, null);
+      const buffer = new Uint8Array(size);
+      const count = readSync(handle, buffer, 0, size, null);
       if (count === 0) break;
       reader.push(buffer.subarray(0, count));
     }
