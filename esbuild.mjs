@@ -30,7 +30,6 @@ const outputs = [
   { entry: 'src/editor/extensionBrowser.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.browser.cjs', external: ['vscode'] } },
   { entry: 'src/cli/main.ts', options: { ...node, outfile: 'dist/ohmward.cjs', banner: { js: '#!/usr/bin/env node' } }, executable: true },
   { entry: 'src/worker/main.ts', options: { ...node, outfile: 'dist/worker.cjs' } },
-  { entry: 'src/worker/mainBrowser.ts', options: { ...browser, format: 'iife', outfile: 'dist/worker.browser.js' } },
   { entry: 'webview/main.ts', options: { ...browser, format: 'iife', outfile: 'dist/webview.js' } },
   { entry: 'webview/panel.css', options: { ...browser, outfile: 'dist/webview.css' } },
 ];

@@ -1,7 +1,10 @@
 import { dirname, relative, sep } from 'node:path';
-import type { Assessment } from '../assistance/assess';
-import { assessFile } from './assessFile';
+import { assessDescription, type Assessment } from '../assistance/assess';
+import { readDescription } from '../description/readDescription';
+import { readText } from './assessFile';
+import { assessInWorkers, workerPath } from './assessInWorkers';
 import { findDescriptions } from './findDescriptions';
+import { loadFiles } from './loadFiles';
 
 export interface AssessedFile {
   readonly path: string;
@@ -12,6 +15,24 @@ export interface AssessedFile {
 
 export const shownPath = (path: string): string => relative(process.cwd(), path).split(sep).join('/');
 
-export function assessFiles(paths: readonly string[]): AssessedFile[] {
-  return findDescriptions(paths).map((path) => ({ path, shown: shownPath(path), assessment: assessFile(path, [dirname(path)]) }));
+/** Fewer descriptions than this are done before the workers have started. */
+const worthWorkers = 24;
+
+export async function assessFiles(paths: readonly string[]): Promise<AssessedFile[]> {
+  const found = findDescriptions(paths);
+  const prepared = (path: string) => {
+    const description = readDescription(readText(path), { expressions: true });
+    return { description, files: loadFiles(description, [dirname(path)]) };
+  };
+  const worker = found.length >= worthWorkers ? workerPath(__dirname) : null;
+  const assessments = worker === null
+    ? found.map((path) => {
+        const { description, files } = prepared(path);
+        return assessDescription(description, files);
+      })
+    : await assessInWorkers(worker, found.length, (index) => {
+        const { description, files } = prepared(found[index]);
+        return { text: description.syntax.text, files, expressions: true };
+      });
+  return found.map((path, index) => ({ path, shown: shownPath(path), assessment: assessments[index] }));
 }

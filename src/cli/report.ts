@@ -9,9 +9,9 @@ import { writeWhole } from './writeWhole';
 import { writeDiagnostics } from './writeDiagnostics';
 
 /** One self-contained HTML file with pictures and tables. */
-export function report(paths: readonly string[], options: CallOptions, around: Surroundings): number {
+export async function report(paths: readonly string[], options: CallOptions, around: Surroundings): Promise<number> {
   if (options.output === undefined) throw new CallError('report needs -o FILE');
-  const files = assessFiles(paths);
+  const files = await assessFiles(paths);
   for (const file of files) writeDiagnostics(file.shown, file.assessment, around);
   mkdirSync(dirname(options.output), { recursive: true });
   writeWhole(options.output, reportHtml(files.map(({ shown, assessment }) => ({ path: shown, assessment }))));

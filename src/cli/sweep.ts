@@ -22,11 +22,11 @@ interface Swept {
 }
 
 /** The traces over the sweep, as text, JSON, CSV or Touchstone. */
-export function sweep(paths: readonly string[], options: CallOptions, around: Surroundings): number {
+export async function sweep(paths: readonly string[], options: CallOptions, around: Surroundings): Promise<number> {
   const format = formatOf(options.format, ['text', 'json', 'csv', 'touchstone']);
   if (options['two-port'] && format !== 'touchstone') throw new CallError('--two-port goes with --format touchstone');
   if (options['two-port'] && options.case !== undefined) throw new CallError('--two-port is the ladder alone, without any load case');
-  const files = assessFiles(paths);
+  const files = await assessFiles(paths);
   const swept: Swept[] = [];
   let failed = false;
   for (const file of files) {
