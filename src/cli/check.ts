@@ -16,13 +16,11 @@ export async function check(paths: readonly string[], options: CallOptions, arou
   const earlier = (path: string): Assessment | undefined =>
     options.since === undefined ? undefined : assessFile(options.since, [dirname(options.since), dirname(path)]);
   const files: CheckedFile[] = assessed.map(({ shown, path, assessment }) => ({ path: shown, assessment, earlier: earlier(path) }));
+  for (const file of files) writeDiagnostics(file.path, file.assessment, around);
   if (format === 'json') {
     around.out(`${JSON.stringify(checkJson(files), null, 2)}\n`);
   } else {
-    for (const file of files) {
-      writeDiagnostics(file.path, file.assessment, around);
-      around.out(checkText(file, around.colour));
-    }
+    for (const file of files) around.out(checkText(file, around.colour));
     if (files.length > 1) around.out(`${files.filter((file) => isOk(file.assessment)).length} of ${files.length} descriptions are in order\n`);
   }
   return files.every((file) => isOk(file.assessment)) ? 0 : 1;

@@ -32,7 +32,7 @@ export async function sweep(paths: readonly string[], options: CallOptions, arou
   for (const file of files) {
     const { problem } = file.assessment.model;
     const { evaluation, diagnostics } = file.assessment;
-    if (format !== 'json' || !evaluation) writeDiagnostics(file.shown, file.assessment, around);
+    writeDiagnostics(file.shown, file.assessment, around);
     failed ||= diagnostics.some((diagnostic) => diagnostic.severity === 'error') || !evaluation;
     if (problem && evaluation) swept.push({ file, problem, evaluation: oneCase(evaluation, options.case, file.shown) });
   }
