@@ -13,7 +13,7 @@ const dot = tag('circle', { class: 'node', cx: spine, cy: middle, r: 2.4 });
 /**
  * One row of the ladder drawn from the load downwards: the path runs along `spine`, what hangs across it points to
  * the left. The content of an SVG of `symbolSize`; rows of that height join without a gap. Symbols are those of
- * common practice (IEC 60617 shapes for resistor and coil as humps).
+ * common practice (shapes of IEC 60617: a box for a resistor, humps for a coil, two circles for a transformer).
  */
 export function ladderSymbol({ symbol, orientation }: Pick<LadderRowView, 'symbol' | 'orientation'>): string {
   if (symbol === 'load') return tag('rect', { class: 'wire', x: spine - 7, y: middle - 10, width: 14, height: 16 }) + wire(spine, middle + 6, spine, symbolSize.height);
@@ -29,8 +29,7 @@ function along(symbol: LadderRowView['symbol']): string {
     case 'capacitor': return ends(3) + wire(spine - 11, middle - 3, spine + 11, middle - 3) + wire(spine - 11, middle + 3, spine + 11, middle + 3);
     case 'resistor': return ends(11) + tag('rect', { class: 'wire', x: spine - 5, y: middle - 11, width: 10, height: 22 });
     case 'line': return ends(13) + tag('rect', { class: 'wire filled', x: spine - 4, y: middle - 13, width: 8, height: 26 });
-    case 'transformer': return ends(12) + stroke(`M${spine} ${middle - 12}h-5a3 3 0 0 1 0 6a3 3 0 0 1 0 6M${spine - 5} ${middle + 12}`)
-      + stroke(`M${spine} ${middle + 12}h5a3 3 0 0 0 0 -6a3 3 0 0 0 0 -6`);
+    case 'transformer': return ends(12) + [-5, 5].map((shift) => tag('circle', { class: 'wire', cx: spine, cy: middle + shift, r: 7 })).join('');
     case 'bridge': return wire(spine, 0, spine, symbolSize.height) + dot;
     case 'unsolved': return ends(9) + tag('circle', { class: 'wire dashed', cx: spine, cy: middle, r: 9 });
     default: return ends(10) + tag('rect', { class: 'wire', x: spine - 10, y: middle - 10, width: 20, height: 20 });
