@@ -10,6 +10,8 @@ export interface Literal {
   readonly prefixExponent: number;
   /** `letters`: 4n7 and the like. `prefix`: 5.6n. `unit`: a word follows, known or not. `bare`: nothing does. */
   readonly form: 'letters' | 'prefix' | 'unit' | 'bare';
+  /** The letter of a code or the bare prefix; empty else. */
+  readonly letter: string;
   /** The unit's letters as written; empty without one. */
   readonly unit: string;
   readonly unitStart: number;
@@ -43,10 +45,10 @@ export function literalAt(text: string, at: number, expected: readonly Dimension
   const coded = expected.some((dimension) => dimensionsWithCodes.includes(dimension));
   if (coded) {
     const code = match(codeInside, text, at);
-    if (code && (code[1] !== '' || code[2] === 'R' || code[2] === 'L')) {
+    if (code) {
       const sign = /^[-−]/.test(code[0]) ? '-' : '';
       const end = at + code[0].length;
-      return { start: at, end, digits: `${sign}${code[1] || '0'}.${code[3]}`, prefixExponent: codeExponents[code[2]], form: 'letters', unit: '', unitStart: end };
+      return { start: at, end, digits: `${sign}${code[1] || '0'}.${code[3]}`, prefixExponent: codeExponents[code[2]], form: 'letters', letter: code[2], unit: '', unitStart: end };
     }
   }
   const found = match(number, text, at);
@@ -56,16 +58,16 @@ export function literalAt(text: string, at: number, expected: readonly Dimension
   if (coded) {
     const prefix = match(barePrefix, text, numberEnd);
     if (prefix && !(prefix[0] === 'm' && expected.includes('length'))) {
-      return { start: at, end: numberEnd + 1, digits, prefixExponent: codeExponents[prefix[0]], form: 'prefix', unit: '', unitStart: numberEnd };
+      return { start: at, end: numberEnd + 1, digits, prefixExponent: codeExponents[prefix[0]], form: 'prefix', letter: prefix[0], unit: '', unitStart: numberEnd };
     }
   }
   const word = match(unitWord, text, numberEnd);
   const spelled = word?.[1] ?? '';
   const isFollower = followers.has(spelled) && !(spelled === 'in' && expected.includes('length') && expected.length === 1) && dimensionOf(spelled) === (spelled === 'in' ? 'length' : null);
   if (!word || isFollower || (spelled !== '' && unitOf(spelled) === null && /^[ \u00a0]/.test(word[0]) && !looksLikeUnit(spelled))) {
-    return { start: at, end: numberEnd, digits, prefixExponent: 0, form: 'bare', unit: '', unitStart: numberEnd };
+    return { start: at, end: numberEnd, digits, prefixExponent: 0, form: 'bare', letter: '', unit: '', unitStart: numberEnd };
   }
-  return { start: at, end: numberEnd + word[0].length, digits, prefixExponent: 0, form: 'unit', unit: spelled, unitStart: numberEnd + word[0].length - spelled.length };
+  return { start: at, end: numberEnd + word[0].length, digits, prefixExponent: 0, form: 'unit', letter: '', unit: spelled, unitStart: numberEnd + word[0].length - spelled.length };
 }
 
 /** After a blank only short words are taken for a misspelt unit; longer ones are the next word of the phrase. */

@@ -22,6 +22,12 @@ export function complexAt(s: Scanner): ImpedanceSyntax {
   const found = take(s, rectangular);
   if (!found) return slip(s, start);
   const [, real, inner, innerSign, lonelySign, imaginary] = found;
+  const comma = take(s, /,\d+(?:[ \u00a0]?[\p{L}\u2126]+)?/uy);
+  if (comma) {
+    const at = s.at - comma[0].length;
+    complain(s, 'decimal-comma', `«${imaginary}${comma[0]}» has a decimal comma; numbers here have a point.`, spanOf(s, at - imaginary.length, s.at), [replaceBy(spanOf(s, at, at + 1), '.')]);
+    return { form: 'faulty', span: spanOf(s, start, s.at) };
+  }
   const innerUnit = (inner ?? '').trim();
   // The unit stands behind the imaginary part and counts for both; `18 Ω - j37 Ω` says it twice.
   const literal = literalAt(`${imaginary}${s.text.slice(s.at)}`, 0, ['resistance'])!;
@@ -42,6 +48,10 @@ export function complexAt(s: Scanner): ImpedanceSyntax {
   const re = real === undefined ? 0 : value(real);
   const im = sign(real === undefined ? lonelySign : innerSign) * value(imaginary);
   const atHz = takeWord(s, 'at') ? quantityAt(s, ['frequency']) : null;
+  if (atHz && !(atHz.value > 0)) {
+    complain(s, 'frequency-not-positive', 'A frequency is greater than zero.', atHz.span);
+    return { form: 'faulty', span };
+  }
   if (re < 0) complain(s, 'not-passive', 'The real part of a passive impedance is not negative.', span, [], 'warning');
   return { form: 'complex', value: { re: scale(re), im: scale(im) }, atHz: atHz && { value: atHz.value, span: atHz.span }, span: spanOf(s, start, s.at) };
 }

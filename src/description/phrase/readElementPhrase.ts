@@ -1,11 +1,13 @@
+import type { Span } from '../../base/span';
 import type { PartKind } from '../../network/part';
 import type { ElementSyntax, ImpedanceSyntax } from '../syntax';
 import type { Phrase, PhraseContext } from './phrase';
 import { impedanceAt } from './readImpedance';
+import { expressionEnd } from './readExpression';
 import { lineAt } from './readLine';
 import { pathAt } from './readPath';
 import { quantityAt } from './readQuantity';
-import { complain, expectEnd, replaceBy, restSpan, restText, scanner, spanOf, take, takeWord, type Scanner } from './scanner';
+import { complain, expectEnd, replaceBy, restSpan, restText, scanner, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
 
 /** What the first letter of a reference designator says (IEEE 315): R, L or C; null for others, where the unit decides. */
 export const kindOfDesignator = (name: string): PartKind | null =>
@@ -52,19 +54,32 @@ function branchAt(s: Scanner, keyword: 'series' | 'shunt', name: string): Elemen
     complain(s, 'not-fitted-in-series', 'An empty position in series would cut the path; only shunt positions are «not fitted». A bridge is «0 Ω».', spanOf(s, 0, s.text.length));
     return { form: 'faulty' };
   }
+  skipBlanks(s);
+  const start = s.at;
+  // A bridge stands in any position, whatever its designator promises.
+  if (take(s, /0+(?:\.0*)?(?:R|[ \u00a0]?[kmM]?(?:Ω|\u2126|ohm))(?![\p{L}\d])(?=\s*$)/uy)) return bridge(s, keyword, spanOf(s, start, s.at));
   const pair = takeWord(s, 'pair');
-  const branch = impedanceAt(s, kindOfDesignator(name), 'parts');
+  const branch = impedanceAt(s, severalFollow(s) ? null : kindOfDesignator(name), 'parts');
   if (branch.form === 'faulty') return { form: 'faulty' };
-  if (isZeroOhm(branch)) {
-    if (keyword === 'series') return { form: 'bridge' };
-    complain(s, 'bridge-in-shunt', '0 Ω across the path would short it; only series positions are bridged. Empty pads are «not fitted».', branch.span);
-    return { form: 'faulty' };
-  }
+  if (isZeroOhm(branch)) return bridge(s, keyword, branch.span);
   return { form: 'branch', branch, pair };
+}
+
+function bridge(s: Scanner, keyword: 'series' | 'shunt', span: Span): ElementSyntax['body'] {
+  if (keyword === 'series') return { form: 'bridge' };
+  complain(s, 'bridge-in-shunt', '0 Ω across the path would short it; only series positions are bridged. Empty pads are «not fitted».', span, [replaceBy(span, 'not fitted', false)]);
+  return { form: 'faulty' };
 }
 
 const isZeroOhm = (branch: ImpedanceSyntax): boolean =>
   branch.form === 'part' && branch.value.form === 'known' && branch.value.unit === 'Ω' && branch.value.value === 0;
+
+/** Several parts in one branch: the designator then tells nothing about their kinds. An expression's own sum does not count. */
+function severalFollow(s: Scanner): boolean {
+  skipBlanks(s);
+  const rest = s.text.slice(s.text[s.at] === '=' ? expressionEnd(s.text, s.at + 1) : s.at);
+  return /\|\||\+\s+(?![\d.]+\s*%)|^\(/.test(rest);
+}
 
 function transformerAt(s: Scanner): ElementSyntax['body'] {
   const turns = takeWord(s, 'turns') ? take(s, /([\d.]+):([\d.]+)(?![\d.])/y) : null;

@@ -46,7 +46,8 @@ export function readExpressionAt(s: Scanner, kinds: readonly QuantityKind[]): (R
 const vectorOf = (kind: QuantityKind): DimensionVector =>
   Object.hasOwn(dimensionVectors, kind) ? dimensionVectors[kind as keyof typeof dimensionVectors] : plain;
 
-function expressionEnd(text: string, from: number): number {
+/** Where an expression that begins behind its `=` ends. */
+export function expressionEnd(text: string, from: number): number {
   const end = text.trimEnd().length;
   let at = from;
   while (at < end && text[at] === ' ') at++;

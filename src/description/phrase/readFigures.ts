@@ -1,7 +1,7 @@
 import type { FiguresSyntax, Quantity, ToleranceSyntax } from '../syntax';
 import type { PartKind } from '../../network/part';
-import { quantityAt, type QuantityKind } from './readQuantity';
-import { complain, nextWord, peek, spanOf, skipBlanks, take, takeWord, type Scanner } from './scanner';
+import { quantityAt, usualUnit, type QuantityKind } from './readQuantity';
+import { complain, nextWord, peek, replaceBy, spanOf, skipBlanks, take, takeWord, type Scanner } from './scanner';
 
 export const noFigures: FiguresSyntax = {
   tolerance: null, q: null, qAtHz: null, esrOhm: null, eslH: null, srfHz: null, ratedVoltageV: null, ratedCurrentA: null, ratedPowerW: null,
@@ -100,7 +100,8 @@ function toleranceAt(s: Scanner, kind: PartKind | null): ToleranceSyntax | null 
     if (!found) return null;
     const span = spanOf(s, start, s.at);
     if (found.kind === 'ratio' && found.literal?.form === 'bare') {
-      complain(s, 'unit-missing', 'A tolerance is in % or in the unit of the part.', found.span);
+      const own = kind ? [replaceBy(found.span, `${found.literal.digits} ${usualUnit[valueKind[kind]]}`, false)] : [];
+      complain(s, 'unit-missing', 'A tolerance is in % or in the unit of the part.', found.span, [replaceBy(found.span, `${found.literal.digits} %`, false), ...own]);
       return null;
     }
     return bounded(s, { form: found.kind === 'ratio' ? 'relative' : 'absolute', up: found.value, down: found.value, span });

@@ -68,13 +68,14 @@ function limitAt(s: Scanner, word: GoalWord, comparison: Located<Comparison>, st
     return plain(found.value, '');
   }
   if ((word.quantity === 'return loss' || word.quantity === 'mismatch loss' || word.quantity === 'insertion loss') && written < 0) {
-    const turned = comparison.value.startsWith('<') ? comparison.value.replace('<', '>') : comparison.value.replace('>', '<');
+    // The sign is what slipped: whoever writes a loss below zero still wants a good match and little loss.
+    const turned = word.usual[0] + comparison.value.slice(1);
     const span = { start: comparison.span.start, end: found.span.end };
-    complain(s, 'loss-negative', `A ${word.quantity} is positive for a passive ladder: more of it is ${word.quantity === 'return loss' ? 'better' : 'worse'}.`, spanOf(s, start, s.at), [replaceBy(span, `${turned} ${Math.abs(written)} dB`)]);
+    complain(s, 'loss-negative', `${word.quantity.startsWith('i') ? 'An' : 'A'} ${word.quantity} is positive for a passive ladder: more of it is ${word.quantity === 'return loss' ? 'better' : 'worse'}.`, spanOf(s, start, s.at), [replaceBy(span, `${turned} ${Math.abs(written)} dB`)]);
     return null;
   }
-  if (word.quantity === 'yield' && literal?.form === 'bare') {
-    complain(s, 'unit-missing', 'A yield is in %.', found.span, [replaceBy(found.span, `${written <= 1 ? written * 100 : written} %`)]);
+  if ((word.quantity === 'yield' || word.quantity === 'efficiency') && literal?.form === 'bare') {
+    complain(s, 'unit-missing', word.quantity === 'yield' ? 'A yield is in %.' : 'An efficiency is in % or dB.', found.span, [replaceBy(found.span, `${written <= 1 ? Number((written * 100).toPrecision(12)) : written} %`)]);
     return null;
   }
   const unit = unitOfGoal(found.kind);
@@ -109,7 +110,7 @@ function wrongLimit(word: GoalWord, value: number, unit: string): { message: str
 /** `S11 <= -10 dB`: reported with the goal that says it here. */
 function signedSlip(s: Scanner): boolean {
   const { at } = s;
-  const found = take(s, /(S11|s11|S22|S21|s21)\s*(>=|<=|≥|≤|>|<)\s*([-−+]?[\d.]+)\s*dB/y);
+  const found = take(s, /\|?(S11|s11|S22|S21|s21)\|?\s*(>=|<=|≥|≤|>|<)\s*([-−+]?[\d.]+)\s*dB/y);
   if (!found) {
     s.at = at;
     return false;
@@ -127,7 +128,9 @@ function signedSlip(s: Scanner): boolean {
 function slipAt(s: Scanner): GoalWord | null {
   const text = restText(s).split(/\s*(?:>=|<=|=>|=<|≥|≤|>|<|=)/)[0].trim();
   const names = [...goalWords.map((word) => word.quantity as string), ...goalConditions];
-  const own = Object.hasOwn(goalSlips, text) ? goalSlips[text] : Object.hasOwn(signedSlips, text) ? signedSlips[text] : null;
+  const limit = restText(s).slice(text.length);
+  // As a plain number the magnitude is meant.
+  const own = /^\|?[Ss](?:11|22)\|?$/.test(text) && !/dB/.test(limit) ? 'reflection' : Object.hasOwn(goalSlips, text) ? goalSlips[text] : Object.hasOwn(signedSlips, text) ? signedSlips[text] : null;
   const first = text.split(/\s+/)[0] ?? '';
   const meant = own ?? nearestWord(text, names) ?? nearestWord(first, ['voltage', 'current', 'dissipation']);
   skipBlanks(s);

@@ -5,7 +5,7 @@ import { impedanceAt } from './readImpedance';
 import { quantityAt } from './readQuantity';
 import { rangeAt, rangeFollows } from './readRange';
 import { familyNameAt } from './readSolve';
-import { complain, peek, restSpan, spanOf, take, takeWord, type Scanner } from './scanner';
+import { complain, peek, restSpan, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
 
 export type GoalClauses = Pick<GoalSyntax, 'place' | 'caseName' | 'into' | 'against' | 'bandwidthDropDb'>;
 
@@ -19,6 +19,7 @@ export function goalClausesAt(s: Scanner, quantity: GoalQuantity | null): GoalCl
   let against: Located<string> | null = null;
   let bandwidthDropDb: number | null = null;
   for (;;) {
+    skipBlanks(s);
     const start = s.at;
     const twice = (stated: unknown) => {
       if (stated !== null) complain(s, 'clause-twice', 'This is stated twice.', spanOf(s, start, s.at));
@@ -35,6 +36,10 @@ export function goalClausesAt(s: Scanner, quantity: GoalQuantity | null): GoalCl
       if (quantity === 'bandwidth' && peek(s, /[-−+]?[\d.]+\s*dB/y)) {
         const drop = quantityAt(s, ['decibels']);
         if (!drop) return null;
+        if (drop.value === 0) {
+          complain(s, 'not-physical', 'A bandwidth lies between two points some decibels down: «at 3 dB».', drop.span);
+          return null;
+        }
         bandwidthDropDb = Math.abs(drop.value);
         continue;
       }

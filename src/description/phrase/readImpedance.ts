@@ -25,11 +25,19 @@ export function impedanceAt(s: Scanner, expects: PartKind | null, vocabulary: Vo
   skipBlanks(s);
   const start = s.at;
   const members = [parallelAt(s, expects, vocabulary, depth)];
-  while (peek(s, /\+(?=\s)/y) && members.length < membersAtMost) {
-    take(s, /\+/y);
-    members.push(parallelAt(s, expects, vocabulary, depth));
-  }
+  while (members.length < membersAtMost && plusAt(s)) members.push(parallelAt(s, expects, vocabulary, depth));
   return joined(s, 'series', members, start);
+}
+
+/** A + between two members. Without blanks it is reported, and counts all the same. */
+function plusAt(s: Scanner): boolean {
+  if (take(s, /\+(?=\s)/y)) return true;
+  skipBlanks(s);
+  const before = s.text.slice(0, s.at).trimEnd().length;
+  if (!take(s, /\+(?=[\d.(])/y)) return false;
+  const span = { start: s.phrase.at(before), end: s.phrase.at(s.at) };
+  complain(s, 'plus-without-blanks', 'A + between parts has a blank on either side.', spanOf(s, s.at - 1, s.at), [{ title: 'Write « + »', edits: [{ span, text: ' + ' }], preferred: true }]);
+  return true;
 }
 
 function parallelAt(s: Scanner, expects: PartKind | null, vocabulary: Vocabulary, depth: number): ImpedanceSyntax {
@@ -54,7 +62,7 @@ function atomAt(s: Scanner, expects: PartKind | null, vocabulary: Vocabulary, de
     for (const form of ['open', 'short'] as const) {
       if (!pathFollows(s) && takeWord(s, form)) return { form, span: spanOf(s, start, s.at) };
     }
-    if (takeWord(s, 'gamma')) return gammaAt(s, start);
+    if (!pathFollows(s) && takeWord(s, 'gamma')) return gammaAt(s, start);
     if (!peek(s, /[\d.]+\s*[\p{L}Ω\u2126%]+\s*(?:\+|\|\||at\b)/uy) && pathFollows(s)) return fileAt(s, start);
     if (complexFollows(s)) return complexAt(s);
     if (!peek(s, /[\d.=+\-−RL]|solve|coil|tunable/y)) return strangerAt(s, start);
@@ -101,10 +109,11 @@ function groupAt(s: Scanner, vocabulary: Vocabulary, depth: number, start: numbe
 /** After the word: `0.62 at -38°`. */
 function gammaAt(s: Scanner, start: number): ImpedanceSyntax {
   const magnitude = quantityAt(s, ['number']);
-  const angle = magnitude && (takeWord(s, 'at') || take(s, /∠/y)) ? quantityAt(s, ['angle']) : null;
+  const joined = magnitude !== null && (takeWord(s, 'at') || take(s, /∠/y) !== null);
+  const angle = joined ? quantityAt(s, ['angle']) : null;
   const span = spanOf(s, start, s.at);
   if (!magnitude || !angle) {
-    if (magnitude) complain(s, 'gamma', 'A reflection is «gamma 0.62 at -38°».', span);
+    if (magnitude && !joined) complain(s, 'gamma', 'A reflection is «gamma 0.62 at -38°».', span);
     return { form: 'faulty', span };
   }
   if (magnitude.value < 0 || magnitude.value > 1) {
@@ -125,6 +134,7 @@ function fileAt(s: Scanner, start: number): ImpedanceSyntax {
     const number = quantityAt(s, ['integer']);
     if (number && number.value >= 1) port = number.value;
     else if (number) complain(s, 'port', 'Ports are counted from 1.', number.span);
+    else s.at = s.text.length;
   }
   if (!/\.(?:s\d+p|ts)$/i.test(path.value)) {
     complain(s, 'file-kind', `${path.value} is no Touchstone file; an impedance comes from .s1p to .s4p or .ts.`, path.span);

@@ -1,13 +1,15 @@
 import type { PartKind } from '../../network/part';
+import { nearestWord } from '../../base/nearestWord';
 import type { Located } from '../../base/span';
+import { literalAt } from '../../quantity/literal';
 import type { PartSyntax, PartValueSyntax } from '../syntax';
 import type { Phrase, PhraseContext } from './phrase';
 import { coilAt } from './readCoil';
 import { figuresAt, kindOfQuantity, quantityOfKind } from './readFigures';
-import { quantityAt, type QuantityKind } from './readQuantity';
+import { dimensionsOf, quantityAt, type QuantityKind } from './readQuantity';
 import { rangeFollows } from './readRange';
 import { familyNameAt, solveAt } from './readSolve';
-import { complain, expectEnd, scanner, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
+import { complain, expectEnd, nextWord, peek, replaceBy, scanner, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
 
 /** The whole phrase as one part with its figures. */
 export function readPartPhrase(phrase: Phrase, expects: PartKind | null, context: PhraseContext): PartSyntax {
@@ -48,8 +50,33 @@ export function partAt(s: Scanner, expects: PartKind | null): PartSyntax {
     }
     figures = merged(s, figures, figuresAt(s, kind));
   }
-  return { form: 'part', span: spanOf(s, start, s.at), kind, value, figures, from, label, fixed };
+  const span = spanOf(s, start, s.at);
+  if (value.form !== 'faulty') slipAfterFigures(s);
+  return { form: 'part', span, kind, value, figures, from, label, fixed };
 }
+
+/** Figures that are nearly ones, which would else be words too many: `5 %`, `+ 10 %`, `q 40`. */
+function slipAfterFigures(s: Scanner): void {
+  const { at } = s;
+  const share = take(s, /(\+\s+)?\d[\d.]*\s*%/y);
+  if (share) {
+    const span = spanOf(s, s.at - share[0].length, s.at);
+    const written = share[1] ? share[0].replace(/^\+\s+/, '+') : `±${share[0]}`;
+    complain(s, 'tolerance-sign', share[1] ? 'No blank stands behind the sign of a tolerance.' : 'A tolerance has its sign before it: ±5 %.', span, [replaceBy(span, written)]);
+    s.at = s.text.length;
+    return;
+  }
+  const word = nextWord(s);
+  const meant = word && figureWords.find((known) => known.toLowerCase() === word.value.toLowerCase());
+  if (word && meant) {
+    complain(s, 'figure-word', `«${word.value}» is written ${meant}; upper and lower case count.`, word.span, [replaceBy(word.span, meant)]);
+    s.at = s.text.length;
+  } else {
+    s.at = at;
+  }
+}
+
+const figureWords = ['Q', 'ESR', 'ESL', 'SRF', 'rated', 'from', 'fixed', 'part'];
 
 function merged(s: Scanner, first: PartSyntax['figures'], second: PartSyntax['figures']): PartSyntax['figures'] {
   const result: { -readonly [K in keyof PartSyntax['figures']]: PartSyntax['figures'][K] } = { ...first };
@@ -72,7 +99,7 @@ function valueAt(s: Scanner, expects: PartKind | null): { value: PartValueSyntax
   const faulty = (): { value: PartValueSyntax; kind: PartKind | null } => ({ value: { form: 'faulty', span: spanOf(s, start, Math.max(s.at, start)) }, kind: expects });
   if (takeWord(s, 'solve')) {
     const solve = solveAt(s, start, kinds);
-    const kind = expects ?? kindOfRange(s, solve.range?.max.span ?? null);
+    const kind = expects ?? (solve.range ? kindOfRange(s.text.slice(start)) : null);
     return { value: { form: 'solve', solve, span: solve.span }, kind };
   }
   if (takeWord(s, 'tunable')) {
@@ -95,20 +122,31 @@ function valueAt(s: Scanner, expects: PartKind | null): { value: PartValueSyntax
     s.at = s.text.length;
     return faulty();
   }
+  if (peek(s, /[\p{L}]/uy) && wordSlip(s, kinds)) return faulty();
   const found = quantityAt(s, kinds);
   if (!found) return faulty();
   const kind = kindOfQuantity(found.kind)!;
   const unit = kind === 'resistor' ? 'Ω' : kind === 'inductor' ? 'H' : 'F';
   if (found.value < 0 || (found.value === 0 && kind !== 'resistor')) {
-    complain(s, 'not-physical', found.value < 0 ? `A ${found.kind} is not negative.` : `A ${kind} of 0 ${unit} is no part; write ${kind === 'inductor' ? '0 Ω for a bridge' : 'not fitted for empty pads'}.`, found.span);
+    complain(s, 'not-physical', found.value < 0 ? `A ${found.kind} is not negative.` : `${kind === 'inductor' ? 'An' : 'A'} ${kind} of 0 ${unit} is no part; write ${kind === 'inductor' ? '0 Ω for a bridge' : 'not fitted for empty pads'}.`, found.span);
     return { ...faulty(), kind };
   }
   return { value: { form: 'known', value: found.value, unit, span: found.span }, kind };
 }
 
+/** `Solve`, `coild`: the word of the language that was meant. */
+function wordSlip(s: Scanner, kinds: readonly QuantityKind[]): boolean {
+  skipBlanks(s);
+  const word = nextWord(s);
+  if (!word || word.value.length < 3 || literalAt(s.text, s.at, dimensionsOf(kinds))) return false;
+  const near = nearestWord(word.value, ['solve', 'coil', 'tunable', 'pair']);
+  if (!near) return false;
+  complain(s, 'word-unknown', `«${word.value}» is no value; ${near} was probably meant.`, word.span, [replaceBy(word.span, near)]);
+  return true;
+}
+
 /** The kind that the unit of a range's upper end tells. */
-function kindOfRange(s: Scanner, span: { start: number; end: number } | null): PartKind | null {
-  if (!span) return null;
-  const written = s.text.slice(span.start - s.phrase.at(0), span.end - s.phrase.at(0));
-  return /H$/.test(written) ? 'inductor' : /F$/.test(written) ? 'capacitor' : /(?:Ω|\u2126|ohm)$/.test(written) ? 'resistor' : null;
+function kindOfRange(text: string): PartKind | null {
+  const unit = /\.\.\.?\s*[+\-−]?[\d.]+(?:[eE][+\-−]?\d+)?\s?([\p{L}\u2126]+)/u.exec(text)?.[1] ?? '';
+  return /H$/.test(unit) ? 'inductor' : /F$/.test(unit) ? 'capacitor' : /(?:Ω|\u2126|ohm)$/.test(unit) ? 'resistor' : null;
 }

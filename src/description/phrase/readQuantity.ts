@@ -1,6 +1,7 @@
 import { readExpressionAt } from './readExpression';
 import { literalAt, literalValue, type Literal } from '../../quantity/literal';
 import { dimensionOf, meantUnit, unitOf, type Dimension } from '../../quantity/unit';
+import type { Span } from '../../base/span';
 import type { Quantity } from '../syntax';
 import type { Phrase, PhraseContext } from './phrase';
 import { complain, expectEnd, nextWord, replaceBy, scanner, skipBlanks, spanOf, type Scanner } from './scanner';
@@ -54,11 +55,10 @@ export function quantityAt(s: Scanner, kinds: readonly QuantityKind[], unitless:
   const literal = literalAt(s.text, s.at, dimensions);
   if (!literal) {
     const word = nextWord(s);
-    complain(s, 'number-expected', word ? `Here ${article[kinds[0]]} was expected, not «${word.value}».` : `Here ${article[kinds[0]]} is missing.`, word?.span ?? spanOf(s, s.at, s.at));
+    const wanted = kinds.map((kind) => article[kind]).join(', or ');
+    complain(s, 'number-expected', word ? `Here ${wanted} was expected, not «${word.value}».` : `Here ${wanted} is missing.`, word?.span ?? spanOf(s, s.at, s.at));
     return null;
   }
-  const comma = /,\d/y;
-  comma.lastIndex = literal.form === 'unit' ? literal.start : literal.end;
   const commaAt = decimalComma(s.text, literal);
   if (commaAt !== null) {
     const span = spanOf(s, literal.start, commaAt.end);
@@ -93,8 +93,8 @@ function judge(s: Scanner, literal: Literal, kinds: readonly QuantityKind[], uni
     return { value, span, literal, kind };
   };
   if (literal.form === 'letters' || literal.form === 'prefix') {
-    const kind = kinds.find((candidate) => candidate === 'resistance' || candidate === 'inductance' || candidate === 'capacitance');
-    if (kind && kinds.length === 1) return done(kind);
+    const coded = kinds.filter((candidate) => candidate === 'resistance' || candidate === 'inductance' || candidate === 'capacitance');
+    if (coded.length === 1) return letterFits(s, literal, coded[0], span) ? done(coded[0]) : null;
     complain(s, 'unit-missing', `«${written}» needs a unit here, since nothing else says whether it is Ω, H or F.`, span);
     return null;
   }
@@ -111,6 +111,15 @@ function judge(s: Scanner, literal: Literal, kinds: readonly QuantityKind[], uni
     return null;
   }
   return judgeUnit(s, literal, kinds, done);
+}
+
+/** `4R7` is a code of resistances and `4n7` one of inductances and capacitances; one in the other's place is a slip. */
+function letterFits(s: Scanner, literal: Literal, kind: QuantityKind, span: Span): boolean {
+  if ((kind === 'resistance' ? /[RKkMGLm]/ : /[pnuµμmf]/).test(literal.letter)) return true;
+  const written = s.text.slice(literal.start, literal.end);
+  const fixes = kind === 'inductance' && literal.letter === 'R' ? [replaceBy(span, `${literal.digits.replace(/^(-?\d+)\.$/, '$1')} µH`, false)] : [];
+  complain(s, 'unit-wrong', `«${written}» is a code of ${kind === 'resistance' ? 'inductances and capacitances' : 'resistances'}, and this is ${article[kind]}${fixes.length > 0 ? '; printed on a coil it means µH' : ''}.`, span, fixes);
+  return false;
 }
 
 function judgeUnit<T>(s: Scanner, literal: Literal, kinds: readonly QuantityKind[], done: (kind: QuantityKind) => T): T | null {
@@ -135,6 +144,11 @@ function judgeUnit<T>(s: Scanner, literal: Literal, kinds: readonly QuantityKind
 }
 
 function meantFixes(literal: Literal, kinds: readonly QuantityKind[], span: { start: number; end: number }) {
+  // `5.6 n`: the prefix alone is short for the unit only where it touches the number.
+  if (kinds.length === 1 && /^[pnuµμmkM]$/.test(literal.unit)) {
+    const meant = `${literal.unit}${usualUnit[kinds[0]].replace(/^[pnmM](?=.)/, '')}`;
+    if (unitOf(meant) && accepted[kinds[0]].includes(dimensionOf(meant)!)) return [replaceBy(span, meant)];
+  }
   for (const dimension of dimensionsOf(kinds)) {
     const meant = meantUnit(literal.unit, dimension);
     if (meant && meant !== literal.unit && (unitOf(meant)?.dimension ?? dimensionOf(meant))) return [replaceBy(span, meant)];

@@ -44,9 +44,8 @@ export function rangeAt(s: Scanner, kinds: readonly QuantityKind[], extent: 'who
   }
   const span = spanOf(s, start, s.at);
   if (min.value > last.value) {
-    complain(s, 'range-upside-down', 'The smaller end of a range comes first.', span, [
-      { title: 'Swap the ends', edits: [{ span: min.span, text: writtenWithUnit(s, last.literal, last.span) }, { span: last.span, text: writtenWithUnit(s, first.literal, first.span, last.literal) }], preferred: true },
-    ]);
+    const swapped = first.literal && last.literal && [{ span: min.span, text: writtenWithUnit(s, last.literal) }, { span: last.span, text: writtenWithUnit(s, first.literal, last.literal) }];
+    complain(s, 'range-upside-down', 'The smaller end of a range comes first.', span, swapped ? [{ title: 'Swap the ends', edits: swapped, preferred: true }] : []);
     return null;
   }
   if (step && points) {
@@ -79,8 +78,7 @@ function withUnitOf(first: Quantity & { literal: Literal | null; kind: QuantityK
   return { value: literalValue({ ...literal, form: other.form, unit: other.unit, prefixExponent: other.prefixExponent }), span: first.span };
 }
 
-function writtenWithUnit(s: Scanner, literal: Literal | null, span: { start: number; end: number }, unitFrom?: Literal | null): string {
-  if (!literal) return s.text.slice(span.start - s.phrase.at(0), span.end - s.phrase.at(0));
+function writtenWithUnit(s: Scanner, literal: Literal, unitFrom?: Literal): string {
   const own = s.text.slice(literal.start, literal.end);
   return literal.form === 'bare' && unitFrom && unitFrom.form === 'unit' ? `${own} ${unitFrom.unit}` : own;
 }

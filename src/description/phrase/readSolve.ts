@@ -50,8 +50,9 @@ export function sourcesAt(s: Scanner): Sources {
 /** After the word `solve`: range, `from …`, `or none`, in this order; figures may follow. */
 export function solveAt(s: Scanner, start: number, kinds: readonly QuantityKind[]): SolveSyntax {
   const range = peek(s, /[=\d.+−-]/y) && rangeFollows(s) ? rangeAt(s, kinds, 'ends') : null;
+  const noneFirst = takeWord(s, 'or none');
   const sources = takeWord(s, 'from') ? sourcesAt(s) : { series: null, families: [] };
-  const orNone = takeWord(s, 'or none');
+  const orNone = takeWord(s, 'or none') || noneFirst;
   if (range && !(range.min.value > 0)) complain(s, 'not-physical', 'A value to solve for is greater than zero.', range.min.span);
   return { span: spanOf(s, start, s.at), range: range && range.min.value > 0 ? range : null, ...sources, orNone };
 }

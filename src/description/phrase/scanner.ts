@@ -13,10 +13,18 @@ export interface Scanner {
 
 export const scanner = (phrase: Phrase, context: PhraseContext): Scanner => ({ phrase, text: phrase.text, context, at: 0 });
 
-export const spanOf = (s: Scanner, start: number, end: number): Span => ({ start: s.phrase.at(start), end: s.phrase.at(end) });
+/** Offsets of the phrase as a place in the document, without blanks at either end. */
+export function spanOf(s: Scanner, start: number, end: number): Span {
+  let [from, to] = [start, end];
+  while (from < to && isBlank(s.text[to - 1])) to--;
+  while (from < to && isBlank(s.text[from])) from++;
+  return { start: s.phrase.at(from), end: s.phrase.at(to) };
+}
+
+const isBlank = (character: string): boolean => /[\s\u00a0]/.test(character);
 
 export function skipBlanks(s: Scanner): void {
-  while (s.at < s.text.length && /[\s\u00a0]/.test(s.text[s.at])) s.at++;
+  while (s.at < s.text.length && isBlank(s.text[s.at])) s.at++;
 }
 
 export function atEnd(s: Scanner): boolean {
