@@ -9,6 +9,7 @@ import type { ValueEdits } from './panel/valueEdits';
 import { isDescription } from './ranges';
 
 interface Services {
+  readonly extensionUri: vscode.Uri;
   readonly studies: DocumentStudies;
   readonly panels: PanelHost;
   readonly edits: ValueEdits;
@@ -53,7 +54,7 @@ async function step(edits: ValueEdits, direction: 'up' | 'down'): Promise<void> 
 }
 
 /** The commands of package.json; each failure is logged and told. */
-export function registerCommands({ studies, panels, edits, log }: Services): vscode.Disposable {
+export function registerCommands({ extensionUri, studies, panels, edits, log }: Services): vscode.Disposable {
   const command = (name: string, run: (argument: unknown) => unknown) =>
     vscode.commands.registerCommand(name, async (argument: unknown) => {
       try {
@@ -70,6 +71,7 @@ export function registerCommands({ studies, panels, edits, log }: Services): vsc
     command('ohmward.stepUp', () => step(edits, 'up')),
     command('ohmward.stepDown', () => step(edits, 'down')),
     command('ohmward.revealWorstGoal', () => revealWorstGoal(studies)),
+    command('ohmward.openReference', () => vscode.commands.executeCommand('markdown.showPreview', vscode.Uri.joinPath(extensionUri, 'media', 'language-reference.md'))),
     command('ohmward.showLog', () => log.show()),
   );
 }

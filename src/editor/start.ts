@@ -34,7 +34,7 @@ export function start(context: vscode.ExtensionContext): void {
     log, store, studies, highlight, panels,
     publishDiagnostics(studies),
     createStatusItem(studies),
-    registerCommands({ studies, panels, edits, log }),
+    registerCommands({ extensionUri: context.extensionUri, studies, panels, edits, log }),
     ...register.map((feature) => feature(assistance)),
   );
 }
