@@ -3,7 +3,7 @@ import { dimensionVectors, plain, type DimensionVector } from './dimensionVector
 
 /** A unit of the language as an expression uses it. Levels (dB, dBm) and shares have no place in arithmetic. */
 export function literalUnit(name: string): { readonly dimension: DimensionVector; readonly of: (digits: string) => number } | null {
-  if (Object.hasOwn(metresOf, name)) return { dimension: dimensionVectors.length, of: (digits) => Number(digits) * metresOf[name] };
+  if (Object.hasOwn(metresOf, name)) return { dimension: dimensionVectors.length, of: (digits) => metresOf[name](Number(digits)) };
   const unit = unitOf(name);
   if (!unit) return null;
   if (unit.dimension === 'angle') return { dimension: plain, of: (digits) => (Number(digits) * Math.PI) / 180 };

@@ -17,7 +17,7 @@ export interface Literal {
   readonly unitStart: number;
 }
 
-const number = /[+\-−]?(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+\-−]?\d+)?/y;
+const number = /[+\-−]?(?:\d+(?:\.(?!\.)\d*)?|\.\d+)(?:[eE][+\-−]?\d+)?/y;
 const unitWord = /[ \u00a0]?(dB\/m(?![\p{L}\d])|[\p{L}\u2126]+|°|%)/uy;
 const codeInside = /[+\-−]?(\d*)([RKkMGLpnuµμmf])(\d+)(?![\p{L}\d.])/uy;
 const barePrefix = /[pnuµμmkKMGRf](?![\p{L}\d\u2126])/uy;
@@ -28,7 +28,7 @@ const codeExponents: Readonly<Record<string, number>> = { ...prefixes, R: 0, K: 
 const dimensionsWithCodes: readonly Dimension[] = ['resistance', 'inductance', 'capacitance'];
 
 /** Words that follow a number without being its unit. */
-const followers = new Set(['at', 'in', 'for', 'into', 'against', 'with', 'from', 'or', 'x', 'points', 'step', 'bits', 'turns', 'port', 'Q', 'ESR', 'ESL', 'SRF', 'rated', 'part', 'fixed', 'up', 'to', 'vf', 'elements', 'watch', 'e']);
+const followers = new Set(['at', 'in', 'for', 'into', 'against', 'with', 'from', 'or', 'x', 'points', 'step', 'bits', 'bit', 'turns', 'turn', 'port', 'Q', 'ESR', 'ESL', 'SRF', 'rated', 'part', 'fixed', 'up', 'to', 'vf', 'elements', 'watch', 'e']);
 
 const ascii = (text: string) => text.replace(/−/g, '-').replace(/^\+/, '');
 
@@ -63,7 +63,7 @@ export function literalAt(text: string, at: number, expected: readonly Dimension
   }
   const word = match(unitWord, text, numberEnd);
   const spelled = word?.[1] ?? '';
-  const isFollower = followers.has(spelled) && !(spelled === 'in' && expected.includes('length') && expected.length === 1) && dimensionOf(spelled) === (spelled === 'in' ? 'length' : null);
+  const isFollower = followers.has(spelled) && !(spelled === 'in' && expected.includes('length')) && dimensionOf(spelled) === (spelled === 'in' ? 'length' : null);
   if (!word || isFollower || (spelled !== '' && unitOf(spelled) === null && /^[ \u00a0]/.test(word[0]) && !looksLikeUnit(spelled))) {
     return { start: at, end: numberEnd, digits, prefixExponent: 0, form: 'bare', letter: '', unit: '', unitStart: numberEnd };
   }
@@ -78,7 +78,7 @@ export function literalValue(literal: Literal): number {
   const [mantissa, exponent = '0'] = literal.digits.toLowerCase().split('e');
   const scaled = (power: number) => Number(`${mantissa}e${Number(exponent) + power}`);
   if (literal.form !== 'unit') return scaled(literal.prefixExponent);
-  if (Object.hasOwn(metresOf, literal.unit)) return scaled(0) * metresOf[literal.unit];
+  if (Object.hasOwn(metresOf, literal.unit)) return metresOf[literal.unit](scaled(0));
   const unit = unitOf(literal.unit);
   if (unit?.dimension === 'power level') return 10 ** (scaled(0) / 10) / 1000;
   return scaled((unit?.exponent ?? 0) + (unit?.dimension === 'percent' ? -2 : 0));

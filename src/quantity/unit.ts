@@ -59,8 +59,8 @@ function buildUnits(): Map<string, Unit> {
 
 const units = buildUnits();
 
-/** Inches and mils are exact in micrometres. */
-export const metresOf: Readonly<Record<string, number>> = { mil: 25.4e-6, in: 25.4e-3 };
+/** An inch is 25.4 mm exactly; whole numbers first, so that 250 mil is the double nearest to 6.35 mm. */
+export const metresOf: Readonly<Record<string, (count: number) => number>> = { mil: (count) => (count * 254) / 1e7, in: (count) => (count * 254) / 1e4 };
 
 /** The unit of that exact spelling; null where there is none. */
 export const unitOf = (spelling: string): Unit | null => units.get(spelling) ?? null;

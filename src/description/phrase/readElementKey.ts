@@ -21,7 +21,8 @@ export function readElementKey(key: Phrase, context: PhraseContext): { keyword: 
     const meant = others[written] ?? nearestWord(written, elementKeywords) ?? others[words[0]] ?? nearestWord(words[0], elementKeywords);
     const span = spanOf(s, key.text.length - key.text.trimStart().length, key.text.trimEnd().length);
     const first = spanOf(s, key.text.indexOf(written), key.text.indexOf(written) + written.length);
-    complain(s, 'element-keyword', `A ladder's entry begins with ${elementKeywords.join(', ')}, not with «${written}»${meant ? `; ${meant} was probably meant` : ''}.`, span, meant ? [replaceBy(first, meant)] : []);
+    complain(s, 'element-keyword', `A ladder's entry begins with ${elementKeywords.join(', ')}, not with «${written}»${meant ? `; ${meant} was probably meant` : ''}.`, span,
+      meant ? [replaceBy(first, meant)] : words[0] === 'stub' ? ['stub open', 'stub short'].map((word) => replaceBy(spanOf(s, key.text.indexOf('stub'), key.text.indexOf('stub') + 4), word, false)) : []);
     return null;
   }
   const text = restText(s);

@@ -1,3 +1,4 @@
+import type { Fix } from '../../base/diagnostic';
 import type { Span } from '../../base/span';
 import type { PartKind } from '../../network/part';
 import type { ElementSyntax, ImpedanceSyntax } from '../syntax';
@@ -81,11 +82,19 @@ function severalFollow(s: Scanner): boolean {
   return /\|\||\+\s+(?![\d.]+\s*%)|^\(/.test(rest);
 }
 
+/** `1 : 2`: the same without blanks. */
+function turnsFix(s: Scanner): Fix[] {
+  const at = /([\d.]+)\s*:\s*([\d.]+)/.exec(s.text);
+  if (!at || !(Number(at[1]) > 0 && Number(at[2]) > 0)) return [];
+  const start = s.text.startsWith('turns') ? 0 : at.index;
+  return [replaceBy(spanOf(s, start, at.index + at[0].length), `turns ${at[1]}:${at[2]}`)];
+}
+
 function transformerAt(s: Scanner): ElementSyntax['body'] {
   const turns = takeWord(s, 'turns') ? take(s, /([\d.]+):([\d.]+)(?![\d.])/y) : null;
   const [turnsSource, turnsLoad] = turns ? [Number(turns[1]), Number(turns[2])] : [NaN, NaN];
   if (!turns || !(turnsSource > 0) || !(turnsLoad > 0) || !Number.isFinite(turnsSource / turnsLoad)) {
-    complain(s, 'transformer', 'A transformer is «turns 1:2» (source side : load side, no blank), optionally with «winding 3 µH» and «coupling 0.98».', restText(s) ? restSpan(s) : spanOf(s, 0, s.text.length));
+    complain(s, 'transformer', 'A transformer is «turns 1:2» (source side : load side, no blank), optionally with «winding 3 µH» and «coupling 0.98».', restText(s) ? restSpan(s) : spanOf(s, 0, s.text.length), turnsFix(s));
     return { form: 'faulty' };
   }
   let windingH = null;

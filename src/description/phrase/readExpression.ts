@@ -40,7 +40,8 @@ export function readExpressionAt(s: Scanner, kinds: readonly QuantityKind[]): (R
     complain(s, 'unit-wrong', `This comes to ${dimensionText(found.dimension)}, but here ${kinds.map((candidate) => dimensionText(vectorOf(candidate))).join(' or ')} is wanted.`, span);
     return null;
   }
-  return { value: found.value, span, literal: null, kind };
+  // Expressions reckon angles in radians, phrases in degrees.
+  return { value: kind === 'angle' ? (found.value * 180) / Math.PI : found.value, span, literal: null, kind };
 }
 
 const vectorOf = (kind: QuantityKind): DimensionVector =>

@@ -54,7 +54,9 @@ function sourceAt(s: Scanner, kind: PartKind): FamilySyntax['source'] {
   const word = nextWord(s);
   if (word && isSeriesName(word.value)) {
     take(s, /E\d+/y);
-    const range = rangeFollows(s) ? rangeAt(s, [quantityOfKind(kind)], 'ends') : null;
+    const stated = rangeFollows(s);
+    const range = stated ? rangeAt(s, [quantityOfKind(kind)], 'ends') : null;
+    if (stated && !range) return { form: 'faulty' };
     if (range && !(range.min.value > 0)) {
       complain(s, 'not-physical', 'A part of a family has a value greater than zero.', range.min.span);
       return { form: 'faulty' };

@@ -29,8 +29,12 @@ export function readLetPhrase(name: Located<string>, phrase: Phrase, context: Ph
   return { value: found.value, dimension };
 }
 
+const wordsOfExpressions = ['mod', 'to', 'and', 'or', 'xor', 'not', 'true', 'false', 'null', 'undefined', 'NaN', 'Infinity', 'end'];
+
 function nameProblem(name: string): string | null {
   if (!/^[\p{L}_][\p{L}\d_]*$/u.test(name)) return `«${name}» cannot be a name in expressions: letters, digits and _, a letter first.`;
+  if (/[µμΩ\u2126]/.test(name)) return `«${name}» cannot be a name in expressions: µ and Ω are letters of units.`;
+  if (wordsOfExpressions.includes(name)) return `«${name}» is a word of expressions and cannot be a name.`;
   if (dimensionOf(name) !== null || ['dB', 'dBm'].includes(name)) return `«${name}» is a unit and cannot be a name.`;
   if (Object.hasOwn(expressionConstants, name)) return `«${name}» is a constant and cannot be a name.`;
   return expressionFunctions.includes(name) ? `«${name}» is a function and cannot be a name.` : null;

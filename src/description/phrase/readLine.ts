@@ -1,7 +1,7 @@
 import type { LineSyntax, Quantity } from '../syntax';
 import { quantityAt } from './readQuantity';
 import { rangeAt, rangeFollows } from './readRange';
-import { complain, nextWord, peek, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
+import { complain, nextWord, peek, restSpan, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
 
 const shape = '«50 Ω, 6 mm, vf 0.55», «50 Ω, 90° at 868 MHz», or «microstrip width …, height …, permittivity …, length …»';
 
@@ -23,6 +23,7 @@ export function lineAt(s: Scanner): LineSyntax | null {
   for (let first = microstrip; first || take(s, /,/y); first = false) {
     if (!lineFigureAt(s, draft, sizes, microstrip)) return null;
   }
+  if (commaMissing(s)) return null;
   if (microstrip) draft.medium = microstripMedium(s, sizes, start);
   const span = spanOf(s, start, s.at);
   if (!draft.medium) return null;
@@ -31,6 +32,16 @@ export function lineAt(s: Scanner): LineSyntax | null {
     return null;
   }
   return { span, medium: draft.medium, length: draft.length, velocityFactor: draft.velocityFactor, loss: draft.loss };
+}
+
+/** `50 Ω 6 mm`: figures without the comma between them. */
+function commaMissing(s: Scanner): boolean {
+  if (!peek(s, /[\d.]|(?:vf|width|height|permittivity|copper|loss|length|solve)(?![\p{L}])/uy)) return false;
+  const before = s.text.slice(0, s.at).trimEnd().length;
+  const place = spanOf(s, before, before);
+  complain(s, 'comma-missing', 'The figures of a line are separated by commas.', restSpan(s), [{ title: 'Write a comma', edits: [{ span: place, text: ',' }], preferred: true }]);
+  s.at = s.text.length;
+  return true;
 }
 
 const plain = ({ value, span }: Quantity): Quantity => ({ value, span });
@@ -85,7 +96,7 @@ function lineFigureAt(s: Scanner, draft: Draft, sizes: Map<string, Quantity>, mi
     draft.length = { form: 'physical', lengthM: plain(found) };
     return true;
   }
-  if (!takeWord(s, 'at')) {
+  if (!takeWord(s, 'at') && !take(s, /@/y)) {
     complain(s, 'line-length', 'An electrical length needs its frequency: «90° at 868 MHz».', found.span);
     return false;
   }

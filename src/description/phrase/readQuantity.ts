@@ -35,6 +35,9 @@ const article: Readonly<Record<QuantityKind, string>> = {
 
 export const describeKind = (kind: QuantityKind): string => article[kind];
 
+const kindsInWords = 5;
+const describeKinds = (kinds: readonly QuantityKind[]): string => (kinds.length > kindsInWords ? 'a number with its unit' : kinds.map((kind) => article[kind]).join(', or '));
+
 /** The dimensions that any of `kinds` takes. */
 export const dimensionsOf = (kinds: readonly QuantityKind[]): Dimension[] => kinds.flatMap((kind) => accepted[kind]);
 
@@ -55,7 +58,7 @@ export function quantityAt(s: Scanner, kinds: readonly QuantityKind[], unitless:
   const literal = literalAt(s.text, s.at, dimensions);
   if (!literal) {
     const word = nextWord(s);
-    const wanted = kinds.map((kind) => article[kind]).join(', or ');
+    const wanted = describeKinds(kinds);
     complain(s, 'number-expected', word ? `Here ${wanted} was expected, not «${word.value}».` : `Here ${wanted} is missing.`, word?.span ?? spanOf(s, s.at, s.at));
     return null;
   }
@@ -102,12 +105,21 @@ function judge(s: Scanner, literal: Literal, kinds: readonly QuantityKind[], uni
     const plain = kinds.find((kind) => accepted[kind].includes('number'));
     if (plain) return done(plain);
     if (unitless === 'keep') return { value: literalValue(literal), span, literal, kind: kinds[0] };
+    const joint = /\s*(?:-|−|–|—|to\b)\s*(?=[\d.])/y;
+    joint.lastIndex = literal.end;
+    const joined = joint.exec(s.text);
+    if (joined) {
+      const place = { start: s.phrase.at(literal.end), end: s.phrase.at(literal.end + joined[0].length) };
+      complain(s, 'range-dots', 'A range is written with two dots: «863 .. 870 MHz».', spanOf(s, literal.start, s.text.length), [{ title: 'Write « .. »', edits: [{ span: place, text: ' .. ' }], preferred: true }]);
+      s.at = s.text.length;
+      return null;
+    }
     if (literalValue(literal) === 0 && kinds.includes('resistance')) {
       // 0 is 0 in any unit, but the language wants it written.
       complain(s, 'unit-missing', `«${written}» needs a unit: ${article[kinds[0]]}.`, span, [replaceBy(span, `${written} Ω`)]);
       return null;
     }
-    complain(s, 'unit-missing', `«${written}» needs a unit: ${kinds.map((kind) => article[kind]).join(', or ')}.`, span, kinds.map((kind, i) => replaceBy(span, `${written} ${usualUnit[kind]}`, kinds.length === 1 && i === 0)));
+    complain(s, 'unit-missing', `«${written}» needs a unit: ${describeKinds(kinds)}.`, span, kinds.map((kind, i) => replaceBy(span, `${written} ${usualUnit[kind]}`, kinds.length === 1 && i === 0)));
     return null;
   }
   return judgeUnit(s, literal, kinds, done);
@@ -132,7 +144,7 @@ function judgeUnit<T>(s: Scanner, literal: Literal, kinds: readonly QuantityKind
     complain(s, 'unit-case', `«${literal.unit}» is ${literal.unit === 'mHz' ? 'millihertz' : 'a fraction of a hertz'}; ${meant} was probably meant.`, unitSpan, [replaceBy(unitSpan, meant)]);
     return null;
   }
-  const wanted = kinds.map((candidate) => article[candidate]).join(', or ');
+  const wanted = describeKinds(kinds);
   if (dimension) {
     complain(s, 'unit-wrong', `«${literal.unit}» does not fit here: this is ${wanted}.`, unitSpan, meantFixes(literal, kinds, unitSpan));
     return null;

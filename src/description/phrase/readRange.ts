@@ -19,7 +19,7 @@ export function readRangePhrase(phrase: Phrase, kind: QuantityKind, context: Phr
 
 /** True where a range stands at the scanner rather than one quantity. */
 export function rangeFollows(s: Scanner): boolean {
-  return peek(s, /[^,]*?\.\./y);
+  return peek(s, /[^,]*?(?:\.\.|…)/y);
 }
 
 /** A range at the scanner; null (reported) where it cannot be read. With `ends`, step and points are left alone. */
