@@ -21,7 +21,7 @@ export interface TouchstoneReader {
  * The number of ports is the name's (`.s1p` … `.s4p`) or that of [Number of Ports]. Data of other parameters are converted
  * to S; noise data are counted and skipped. Never throws: what is wrong is named with its line, and then nothing of the
  * file counts. All values of the result are finite. After «Touchstone File Format Specification» 1.1, 2.0 and 2.1; the
- * published snippets are in `test/network/touchstone/snippets.ts`.
+ * published snippets are in `test/network/touchstone/legalSnippets.test.ts`.
  */
 export function readTouchstone(fileName: string, content: string | Uint8Array): TouchstoneResult {
   const reader = touchstoneReader(fileName);

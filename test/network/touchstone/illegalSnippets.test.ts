@@ -24,7 +24,7 @@ const snippets: readonly (readonly [id: string, why: string, name: string, text:
   ['T-X20', 'no data', 'a.s1p', '# GHz S RI R 50\n! nothing else\n', 2, /no data/],
   ['T-X22', 'order of S12 and S21 not stated', 'a.ts', '[Version] 2.0\n# GHz S RI R 50\n[Number of Ports] 2\n[Number of Frequencies] 1\n[Network Data]\n1 0.1 0 0.7 0 0.7 0 0.1 0\n[End]\n', 5, /Two-Port Data Order/],
   ['T-X23', 'fewer points than announced', 'a.ts', '[Version] 2.0\n# GHz S RI R 50\n[Number of Ports] 1\n[Number of Frequencies] 3\n[Network Data]\n1 0.1 0\n2 0.1 0\n[End]\n', 4, /3.*2 were found/],
-  ['T-X24', 'one reference for two ports', 'a.ts', `${twoPort}[Reference] 50\n[Network Data]\n1 0.1 0 0.7 0 0.7 0 0.1 0\n[End]\n`, 6, /1 resistance/],
+  ['T-X24', 'one reference for two ports', 'a.ts', `${twoPort}[Reference] 50\n[Network Data]\n1 0.1 0 0.7 0 0.7 0 0.1 0\n[End]\n`, 6, /one resistance/],
   ['T-X25', '[Version] behind the option line', 'a.ts', '# GHz S RI R 50\n[Version] 2.0\n[Number of Ports] 1\n[Number of Frequencies] 1\n[Network Data]\n1 0.1 0\n[End]\n', 2, /\[Version\].*before/],
   ['T-X27', 'unknown matrix format', 'a.ts', `${onePort}[Matrix Format] Diagonal\n[Network Data]\n1 0.1 0\n[End]\n`, 5, /«Diagonal»/],
   ['T-X28', 'a pair torn apart by the line end', 'a.ts', `${twoPort}[Network Data]\n1.0 0.1 0 0.7\n0.1 0.7 0.1 0.2 0\n[End]\n`, 7, /odd count/],

@@ -39,7 +39,8 @@ const normalised: Readonly<Record<string, (R: number) => number[]>> = {
 
 function written({ re, im }: Complex, format: string): string {
   if (format === 'RI') return `${re} ${im}`;
-  const size = Math.hypot(re, im);
+  // Zero has no decibels; −6000 dB is as good.
+  const size = Math.max(Math.hypot(re, im), 1e-300);
   return `${format === 'MA' ? size : 20 * Math.log10(size)} ${(Math.atan2(im, re) * 180) / Math.PI}`;
 }
 
