@@ -7,6 +7,9 @@ import type { AccessibilityViolation, PageAction, Place } from './pageActions';
 /** Long enough for a loaded machine; a wait ends as soon as the thing is there. */
 const ACTION_TIMEOUT_MS = 15_000;
 
+/** No hand is faster between a click and a key. */
+const FOCUS_TOLD_MS = 200;
+
 export interface Performer {
   readonly page: Page;
   readonly picturesFolder: string;
@@ -53,12 +56,15 @@ export async function performAction({ page, picturesFolder, phase, policyViolati
       return page.keyboard.press(action.key);
     case 'type':
       return page.keyboard.type(action.text);
-    case 'click':
-      return locate(page, action.in, action.selector).click({ timeout });
     case 'hover':
       return locate(page, action.in, action.selector).hover({ timeout });
-    case 'focus':
-      return locate(page, action.in, action.selector).focus({ timeout });
+    case 'click':
+    case 'focus': {
+      const target = locate(page, action.in, action.selector);
+      await (action.do === 'click' ? target.click({ timeout }) : target.focus({ timeout }));
+      // The editor learns by a message that a webview has the focus; until then it takes chords such as select all for its own.
+      return action.in === 'panel' ? page.waitForTimeout(FOCUS_TOLD_MS) : undefined;
+    }
     case 'drag': {
       const box = await locate(page, action.in, action.selector).boundingBox({ timeout });
       if (!box) throw new Error(`${action.selector} has no place on the screen`);
