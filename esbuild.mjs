@@ -29,7 +29,6 @@ const outputs = [
   // The worker host of the editors that live in a browser takes an entry for CommonJS only if its name ends in .cjs.
   { entry: 'src/editor/extensionBrowser.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.browser.cjs', external: ['vscode'] } },
   { entry: 'src/cli/main.ts', options: { ...node, outfile: 'dist/ohmward.cjs', banner: { js: '#!/usr/bin/env node' } }, executable: true },
-  { entry: 'src/worker/main.ts', options: { ...node, outfile: 'dist/worker.cjs' } },
   { entry: 'webview/main.ts', options: { ...browser, format: 'iife', outfile: 'dist/webview.js' } },
   { entry: 'webview/panel.css', options: { ...browser, outfile: 'dist/webview.css' } },
 ];

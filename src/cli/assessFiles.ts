@@ -2,7 +2,7 @@ import { dirname, relative, sep } from 'node:path';
 import { assessDescription, type Assessment } from '../assistance/assess';
 import { readDescription } from '../description/readDescription';
 import { readText } from './assessFile';
-import { assessInWorkers, workerPath } from './assessInWorkers';
+import { assessInWorkers } from './assessInWorkers';
 import { findDescriptions } from './findDescriptions';
 import { loadFiles } from './loadFiles';
 
@@ -24,7 +24,8 @@ export async function assessFiles(paths: readonly string[]): Promise<AssessedFil
     const description = readDescription(readText(path), { expressions: true });
     return { description, files: loadFiles(description, [dirname(path)]) };
   };
-  const worker = found.length >= worthWorkers ? workerPath(__dirname) : null;
+  // The bundle is its own worker; the source, as tests run it, is not.
+  const worker = found.length >= worthWorkers && __filename.endsWith('.cjs') ? __filename : null;
   const assessments = worker === null
     ? found.map((path) => {
         const { description, files } = prepared(path);

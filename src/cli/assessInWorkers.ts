@@ -1,15 +1,7 @@
-import { existsSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
-import { join } from 'node:path';
 import { Worker } from 'node:worker_threads';
 import type { Assessment } from '../assistance/assess';
 import type { AssessAnswer, AssessJob } from '../worker/assessJob';
-
-/** Beside the bundle of the command line; null where the source itself runs, as in tests. */
-export function workerPath(folder: string): string | null {
-  const path = join(folder, 'worker.cjs');
-  return existsSync(path) ? path : null;
-}
 
 /**
  * Assesses many descriptions on all cores, in the order of the jobs. `prepare` reads the files of one description just

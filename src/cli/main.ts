@@ -1,3 +1,5 @@
+import { isMainThread, parentPort } from 'node:worker_threads';
+import { answerJob, type AssessJob } from '../worker/assessJob';
 import { runCommandLine } from './runCommandLine';
 
 const words = process.argv.slice(2);
@@ -12,11 +14,17 @@ process.stdout.on('error', (error: NodeJS.ErrnoException) => {
 });
 process.on('SIGINT', () => process.exit(130));
 
-runCommandLine(words, around).then(
-  // Set, not exit(): what was written to a pipe must still arrive.
-  (code) => { process.exitCode = code; },
-  (error) => {
-    around.error(`ohmward: this should not have happened, please report it: ${(error as Error).stack ?? error}\n`);
-    process.exitCode = 2;
-  },
-);
+function run(): void {
+  runCommandLine(words, around).then(
+    // Set, not exit(): what was written to a pipe must still arrive.
+    (code) => { process.exitCode = code; },
+    (error) => {
+      around.error(`ohmward: this should not have happened, please report it: ${(error as Error).stack ?? error}\n`);
+      process.exitCode = 2;
+    },
+  );
+}
+
+// One file is the command line and its own workers.
+if (isMainThread) run();
+else parentPort!.on('message', (job: AssessJob) => parentPort!.postMessage(answerJob(job)));
