@@ -12,7 +12,7 @@ import { complain, expectEnd, replaceBy, restSpan, restText, scanner, skipBlanks
 
 /** What the first letter of a reference designator says (IEEE 315): R, L or C; null for others, where the unit decides. */
 export const kindOfDesignator = (name: string): PartKind | null =>
-  /^R(?![\p{L}])/u.test(name) ? 'resistor' : /^L(?![\p{L}])/u.test(name) ? 'inductor' : /^C(?![\p{L}])/u.test(name) ? 'capacitor' : null;
+  name.startsWith('R') ? 'resistor' : name.startsWith('L') ? 'inductor' : name.startsWith('C') ? 'capacitor' : null;
 
 /** The phrase of a ladder's entry. Never null: what cannot be read is `faulty`, and reported. */
 export function readElementPhrase(keyword: ElementSyntax['keyword'], name: string, phrase: Phrase, context: PhraseContext): ElementSyntax['body'] {
