@@ -1,5 +1,6 @@
+import { copperConductivity, skinDepthM } from './skinDepth';
+
 const vacuumPermeability = 4e-7 * Math.PI;
-const copperConductivity = 5.8e7;
 
 export interface AirCoil {
   readonly inductanceH: number;
@@ -41,7 +42,7 @@ export function airCoil(turns: number, diameterM: number, lengthM: number, wireM
     inductanceH,
     selfCapacitanceF,
     qAt(frequencyHz) {
-      const skinM = Math.min(wireM / 4, Math.sqrt(1 / (Math.PI * frequencyHz * vacuumPermeability * copperConductivity)));
+      const skinM = Math.min(wireM / 4, skinDepthM(frequencyHz, copperConductivity));
       const area = Math.PI * skinM * (wireM - skinM);
       return (2 * Math.PI * frequencyHz * inductanceH * area * copperConductivity) / (wireLengthM * proximity);
     },

@@ -12,19 +12,24 @@ export interface InterpolatedNetwork {
 const roundingOfEnds = 1e-12;
 
 /**
- * S between the points of a file: Lagrange's cubic through the four nearest points, linear with fewer than four; exact
- * at the points. Nothing is made up outside of them.
+ * S between the points of a file: Lagrange's cubic through the four nearest points (two on either side, at the ends the first
+ * or last four, so that it is continuous on any grid), linear with fewer than four; exact at the points. Nothing is made up
+ * outside of them (Hz), nor where the values are too large for a finite result.
  */
 export function interpolateNetwork(data: NetworkData, frequencyHz: Float64Array): InterpolatedNetwork {
   const entries = data.ports * data.ports;
   const sRe = new Float64Array(frequencyHz.length * entries).fill(NaN);
   const sIm = new Float64Array(frequencyHz.length * entries).fill(NaN);
   const known = new Uint8Array(frequencyHz.length);
+  let outside = false;
   const points = data.frequencyHz;
   const [low, high] = [points[0], points[points.length - 1]];
   const weights = new Float64Array(4);
   frequencyHz.forEach((f, k) => {
-    if (!(f >= low * (1 - roundingOfEnds) && f <= high * (1 + roundingOfEnds))) return;
+    if (!(f >= low * (1 - roundingOfEnds) && f <= high * (1 + roundingOfEnds))) {
+      outside = true;
+      return;
+    }
     const at = Math.min(Math.max(f, low), high);
     const { first, count } = neighbours(points, at);
     lagrangeWeights(points, first, count, at, weights);
@@ -35,12 +40,18 @@ export function interpolateNetwork(data: NetworkData, frequencyHz: Float64Array)
         re += weights[i] * data.sRe[(first + i) * entries + entry];
         im += weights[i] * data.sIm[(first + i) * entries + entry];
       }
+      if (!Number.isFinite(re) || !Number.isFinite(im)) {
+        sRe.fill(NaN, k * entries, (k + 1) * entries);
+        sIm.fill(NaN, k * entries, (k + 1) * entries);
+        return;
+      }
       sRe[k * entries + entry] = re;
       sIm[k * entries + entry] = im;
     }
     known[k] = 1;
   });
-  return { sRe, sIm, known, reason: known.includes(0) ? `the file covers ${covered(low, high)}` : null };
+  const reason = outside ? `the file covers ${covered(low, high)}` : known.includes(0) ? 'the file\'s values are too large to compute with' : null;
+  return { sRe, sIm, known, reason };
 }
 
 /** The four points around, fewer at short files: two then, or the only one. */

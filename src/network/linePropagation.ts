@@ -5,6 +5,8 @@ import type { Line } from './line';
 
 const speedOfLight = 299_792_458;
 const nepersPerDb = Math.LN10 / 20;
+/** A line of more is as good as this one, 2,600 dB, and its hyperbolic functions still are numbers. */
+const attenuationAtMost = 300;
 
 /**
  * γl = αl + jβl of the whole line at one frequency: β·l = 2πf·l/(vf·c), the conductor's loss with √f, the dielectric's
@@ -13,7 +15,7 @@ const nepersPerDb = Math.LN10 / 20;
 function propagation(line: Line, frequencyHz: number): { attenuation: number; phase: number } {
   const ratio = frequencyHz / line.lossAtHz;
   const lossDb = line.conductorLossDb * Math.sqrt(ratio) + line.dielectricLossDb * ratio;
-  return { attenuation: lossDb * nepersPerDb, phase: (2 * Math.PI * frequencyHz * line.lengthM) / (line.velocityFactor * speedOfLight) };
+  return { attenuation: Math.min(lossDb * nepersPerDb, attenuationAtMost), phase: (2 * Math.PI * frequencyHz * line.lengthM) / (line.velocityFactor * speedOfLight) };
 }
 
 /** cosh γl and sinh γl by sines and cosines, so that a quarter wave is an ordinary length. */

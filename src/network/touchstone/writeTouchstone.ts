@@ -6,14 +6,16 @@ export interface WriteOptions {
   readonly format?: 'RI' | 'MA' | 'DB';
 }
 
-const unitHz = { Hz: 1, kHz: 1e3, MHz: 1e6, GHz: 1e9 } as const;
+const unitExponents = { Hz: 0, kHz: 3, MHz: 6, GHz: 9 } as const;
 
 /** Twelve digits: read back, the values agree to 1e-9 and better. */
-const number = (value: number) => Number(value.toPrecision(12)).toString();
+const number = (value: number): string => String(Number(value.toPrecision(12)));
 
 /**
- * A Touchstone 1.1 file. References that differ stand behind R one a port, as files may since the revision of 2023. Points
- * of zero in DB are written as −400 dB. Comments are cut to ASCII and one line each.
+ * A Touchstone 1.1 file; `unit` Hz and `format` RI where they are left out. References that differ stand behind R one a
+ * port, as files may since the revision of 2023. Zero in DB is written as −400 dB. Comments are cut to ASCII and one line
+ * each. Frequencies are written in full, so that no two become one. Points with a value that is not finite have no place in a
+ * file and are left out.
  */
 export function writeTouchstone(data: NetworkData, { comments, unit = 'Hz', format = 'RI' }: WriteOptions): string {
   const { ports, referenceOhm } = data;
@@ -21,19 +23,25 @@ export function writeTouchstone(data: NetworkData, { comments, unit = 'Hz', form
   const lines = comments.map((comment) => `! ${comment.replace(/[^\x20-\x7e]+/g, '?')}`);
   lines.push(`# ${unit} S ${format} R ${references}`);
   for (let k = 0; k < data.frequencyHz.length; k++) {
-    const pairs = Array.from({ length: ports * ports }, (_, i) => {
-      // Two ports stand column by column in version 1, larger ones row by row.
-      const entry = ports === 2 ? [0, 2, 1, 3][i] : i;
-      const at = k * ports * ports + entry;
-      return pairText(data.sRe[at], data.sIm[at], format);
-    });
+    // Two ports stand column by column in version 1, larger ones row by row.
+    const places = Array.from({ length: ports * ports }, (_, i) => k * ports * ports + (ports === 2 ? [0, 2, 1, 3][i] : i));
+    if (!places.every((at) => Number.isFinite(Math.hypot(data.sRe[at], data.sIm[at])))) continue;
+    const pairs = places.map((at) => pairText(data.sRe[at], data.sIm[at], format));
     const perLine = ports <= 2 ? pairs.length : ports;
     for (let first = 0; first < pairs.length; first += perLine) {
       const row = pairs.slice(first, first + perLine).join(' ');
-      lines.push(first === 0 ? `${number(data.frequencyHz[k] / unitHz[unit])} ${row}` : row);
+      lines.push(first === 0 ? `${frequencyText(data.frequencyHz[k], unit)} ${row}` : row);
     }
   }
   return `${lines.join('\n')}\n`;
+}
+
+/** The shortest digits that are read back as the same frequency, the point moved by the unit. */
+function frequencyText(hz: number, unit: NonNullable<WriteOptions['unit']>): string {
+  const [mantissa, power = '0'] = String(hz).split('e');
+  const exact = `${mantissa}e${Number(power) - unitExponents[unit]}`;
+  const short = String(Number(exact));
+  return Number(`${short}e${unitExponents[unit]}`) === hz ? short : exact;
 }
 
 function pairText(re: number, im: number, format: 'RI' | 'MA' | 'DB'): string {
