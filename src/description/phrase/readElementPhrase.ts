@@ -84,7 +84,7 @@ function severalFollow(s: Scanner): boolean {
 
 /** `1 : 2`: the same without blanks. */
 function turnsFix(s: Scanner): Fix[] {
-  const at = /([\d.]+)\s*:\s*([\d.]+)/.exec(s.text);
+  const at = /(?<![\d.])([\d.]{1,20})\s*:\s*([\d.]{1,20})/.exec(s.text);
   if (!at || !(Number(at[1]) > 0 && Number(at[2]) > 0)) return [];
   const start = s.text.startsWith('turns') ? 0 : at.index;
   return [replaceBy(spanOf(s, start, at.index + at[0].length), `turns ${at[1]}:${at[2]}`)];

@@ -15,7 +15,7 @@ export const scanner = (phrase: Phrase, context: PhraseContext): Scanner => ({ p
 
 /** Offsets of the phrase as a place in the document, without blanks at either end. */
 export function spanOf(s: Scanner, start: number, end: number): Span {
-  let [from, to] = [start, end];
+  let [from, to] = [start, Math.max(start, end)];
   while (from < to && isBlank(s.text[to - 1])) to--;
   while (from < to && isBlank(s.text[from])) from++;
   return { start: s.phrase.at(from), end: s.phrase.at(to) };
