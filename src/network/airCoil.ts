@@ -14,7 +14,7 @@ const f2 = (x: number) => 0.093842 * x + 0.002029 * x * x - 0.000801 * x ** 3;
 
 /**
  * Inductance of a single-layer winding as a current sheet, which is Nagaoka's, by R. Lundin, «A handbook formula for the
- * inductance of a single-layer circular coil», Proc. IEEE 73, 1985: within 2.5e-6 of the exact sheet (row W8). A real winding
+ * inductance of a single-layer circular coil», Proc. IEEE 73, 1985: within 2.5e-6 of the exact sheet (`test/published/coils.test.ts`). A real winding
  * of round wire differs from the sheet by a few per cent where there are few turns. Diameter is that of the wire's centre.
  */
 export function currentSheetInductanceH(turns: number, diameterM: number, lengthM: number): number {
@@ -29,7 +29,8 @@ export function currentSheetInductanceH(turns: number, diameterM: number, length
 /**
  * A winding for the bench. Self-capacitance after R. G. Medhurst, «H.F. resistance and self-capacitance of single-layer
  * solenoids», Wireless Engineer 24, 1947 (formula from memory: C/pF = D/cm · (0.1126 l/D + 0.08 + 0.27 √(D/l)), about 5 %), loss
- * from the skin effect in the wire with a proximity factor of the same paper's order. Sizes in metres, all > 0.
+ * from the skin effect in the wire (current in a ring as deep as the skin, at low frequency in all of it) with a proximity
+ * factor of the same paper's order. In free air; sizes in metres, all > 0.
  */
 export function airCoil(turns: number, diameterM: number, lengthM: number, wireM: number): AirCoil {
   const inductanceH = currentSheetInductanceH(turns, diameterM, lengthM);
@@ -42,7 +43,7 @@ export function airCoil(turns: number, diameterM: number, lengthM: number, wireM
     inductanceH,
     selfCapacitanceF,
     qAt(frequencyHz) {
-      const skinM = Math.min(wireM / 4, skinDepthM(frequencyHz, copperConductivity));
+      const skinM = Math.min(wireM / 2, skinDepthM(frequencyHz, copperConductivity));
       const area = Math.PI * skinM * (wireM - skinM);
       return (2 * Math.PI * frequencyHz * inductanceH * area * copperConductivity) / (wireLengthM * proximity);
     },
