@@ -17,9 +17,11 @@ export const expressionConstants: Readonly<Record<string, number>> = { pi: Math.
 const plainFunctions: Readonly<Record<string, (x: number) => number>> = {
   exp: Math.exp, log: Math.log, log10: Math.log10, log2: Math.log2, sin: Math.sin, cos: Math.cos, tan: Math.tan,
   asin: Math.asin, acos: Math.acos, atan: Math.atan, sinh: Math.sinh, cosh: Math.cosh, tanh: Math.tanh,
+  // Of plain numbers only: what whole nanohenries are depends on the unit that one thinks in.
+  round: Math.round, floor: Math.floor, ceil: Math.ceil,
 };
 const samePlaceFunctions: Readonly<Record<string, (...x: number[]) => number>> = {
-  abs: Math.abs, min: Math.min, max: Math.max, round: Math.round, floor: Math.floor, ceil: Math.ceil,
+  abs: Math.abs, min: Math.min, max: Math.max,
 };
 
 export const expressionFunctions: readonly string[] = [...Object.keys(plainFunctions), ...Object.keys(samePlaceFunctions), 'sqrt', 'cbrt', 'atan2'];
@@ -29,11 +31,14 @@ let parser: ParseFunction | null = null;
 
 class Refusal extends Error {}
 
+const onlyArithmetic = 'only numbers, units, names, + − * / ^, parentheses and functions may stand in an expression';
+
 /**
  * Arithmetic on numbers with units and on names. mathjs parses; the tree is then walked with a list of what is allowed, so
  * nothing that it finds is ever run. Never throws, never takes long: text, nesting and nodes are bounded.
  */
 export function evaluateExpression(text: string, names: ReadonlyMap<string, Measured>): ExpressionResult {
+  if (text.trim() === '') return { ok: false, message: 'an expression follows «=»' };
   if (text.length > expressionLimits.characters) return { ok: false, message: `the expression is longer than ${expressionLimits.characters} characters` };
   if (nesting(text) > expressionLimits.depth) return { ok: false, message: 'the expression is nested too deeply' };
   if (/[;\n\r]/.test(text)) return { ok: false, message: 'an expression is one line of arithmetic' };
@@ -55,7 +60,7 @@ export function evaluateExpression(text: string, names: ReadonlyMap<string, Meas
   }
 }
 
-const asciiUnits = (text: string) => text.replace(/[Ω\u2126]/g, 'ohm').replace(/[µμ]/g, 'u').replace(/−/g, '-').replace(/×/g, '*').replace(/·/g, '*').replace(/°/g, ' deg');
+const asciiUnits = (text: string) => text.replace(/[Ω\u2126]/g, 'ohm').replace(/[µμ]/g, 'u').replace(/−/g, '-').replace(/[×·]/g, '*').replace(/π/g, 'pi').replace(/°/g, ' deg');
 
 function nesting(text: string): number {
   let depth = 0;
@@ -89,7 +94,7 @@ function walk(tree: MathNode, names: ReadonlyMap<string, Measured>, budget: { no
     case 'SymbolNode': return named(node.name!, names);
     case 'OperatorNode': return operate(node, names, budget);
     case 'FunctionNode': return call(node, names, budget);
-    default: throw new Refusal('only numbers, units, names, + − * / ^, parentheses and functions may stand in an expression');
+    default: throw new Refusal(onlyArithmetic);
   }
 }
 
@@ -139,7 +144,12 @@ function literalOf(first: AnyNode, second: AnyNode, names: ReadonlyMap<string, M
 }
 
 function call(node: AnyNode, names: ReadonlyMap<string, Measured>, budget: { nodes: number }): Measured {
-  const { name = '' } = node.fn as { name?: string };
+  const { type, name = '' } = node.fn as { type?: string; name?: string };
+  if (type !== 'SymbolNode') throw new Refusal(onlyArithmetic);
+  // Before its arguments are looked at, so that the message is about the call.
+  if (!expressionFunctions.includes(name)) {
+    throw new Refusal(names.has(name) ? `${name} is a value and not a function; write ${name} * (…)` : `there is no function «${name}» here; there are ${expressionFunctions.join(', ')}`);
+  }
   const args = (node.args ?? []).map((argument) => walk(argument, names, budget));
   const wants = (count: number) => {
     if (args.length !== count) throw new Refusal(`${name} takes ${count === 1 ? 'one value' : `${count} values`}`);
@@ -153,17 +163,13 @@ function call(node: AnyNode, names: ReadonlyMap<string, Measured>, budget: { nod
     if (!sameDimension(args[0].dimension, plain)) throw new Refusal(`${name} takes a plain number, not ${dimensionText(args[0].dimension)}`);
     return { value: plainFunctions[name](args[0].value), dimension: plain };
   }
-  if (name === 'atan2' || Object.hasOwn(samePlaceFunctions, name)) {
-    if (name === 'min' || name === 'max') {
-      if (args.length === 0) throw new Refusal(`${name} takes at least one value`);
-    } else {
-      wants(name === 'atan2' ? 2 : 1);
-    }
-    const other = args.find((argument) => !sameDimension(argument.dimension, args[0].dimension));
-    if (other) throw new Refusal(`${name} takes values of one unit, not ${dimensionText(args[0].dimension)} and ${dimensionText(other.dimension)}`);
-    if (name === 'atan2') return { value: Math.atan2(args[0].value, args[1].value), dimension: plain };
-    return { value: samePlaceFunctions[name](...args.map((argument) => argument.value)), dimension: args[0].dimension };
+  if (name === 'min' || name === 'max') {
+    if (args.length === 0) throw new Refusal(`${name} takes at least one value`);
+  } else {
+    wants(name === 'atan2' ? 2 : 1);
   }
-  const known = names.has(name) ? `${name} is a value and not a function; write ${name} * (…)` : `there is no function «${name}» here; there are ${expressionFunctions.join(', ')}`;
-  throw new Refusal(known);
+  const other = args.find((argument) => !sameDimension(argument.dimension, args[0].dimension));
+  if (other) throw new Refusal(`${name} takes values of one unit, not ${dimensionText(args[0].dimension)} and ${dimensionText(other.dimension)}`);
+  if (name === 'atan2') return { value: Math.atan2(args[0].value, args[1].value), dimension: plain };
+  return { value: samePlaceFunctions[name](...args.map((argument) => argument.value)), dimension: args[0].dimension };
 }
