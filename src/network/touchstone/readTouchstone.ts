@@ -53,13 +53,16 @@ export function touchstoneReader(fileName: string): TouchstoneReader {
     while (start < to && (bytes[start] === 32 || bytes[start] === 9)) start++;
     if (state.section === 'end') return takeAfterEnd(bytes, start, to);
     if (state.section === 'information' && bytes[start] !== openingBracket) return skipText(bytes, start, to, 'the information block', warn);
+    if (start === to) return;
+    const first = bytes[start];
+    if (points !== null && first !== openingBracket && first !== numberSign) return takeNumbers(points, bytes, start, to);
     const end = contentEnd(bytes, start, to, warn);
     if (start === end) return;
-    if (bytes[start] === openingBracket) return takeKeyword(state, asciiText(bytes, start, end).trim(), lines.line, options !== null);
-    if (bytes[start] === numberSign) return takeOptions(asciiText(bytes, start + 1, end));
+    if (first === openingBracket) return takeKeyword(state, asciiText(bytes, start, end).trim(), lines.line, options !== null);
+    if (first === numberSign) return takeOptions(asciiText(bytes, start + 1, end));
     if (state.section === 'references') return takeReferences(state, asciiText(bytes, start, end));
-    points ??= pointAssembly(dataLayout(fileName, options, state, lines.line));
-    takeNumbers(points, bytes, start, end);
+    points = pointAssembly(dataLayout(fileName, options, state, lines.line));
+    takeNumbers(points, bytes, start, to);
   };
 
   const takeAfterEnd = (bytes: Uint8Array, start: number, to: number) => {
@@ -72,22 +75,31 @@ export function touchstoneReader(fileName: string): TouchstoneReader {
     else warn('a second option line is not read; the first one holds');
   };
 
-  const takeNumbers = (assembly: PointAssembly, bytes: Uint8Array, start: number, end: number) => {
+  /** What is no number may be the comment, or a character that has no business there: looked at only then, for speed. */
+  const takeNumbers = (assembly: PointAssembly, bytes: Uint8Array, start: number, to: number) => {
     const shift = options!.unitExponent;
+    let end = to;
+    let looked = false;
     let count = 0;
     let firstHz = 0;
     for (let at = start; at < end; ) {
-      if (bytes[at] <= 32) {
+      if (bytes[at] === 32 || bytes[at] === 9) {
         at++;
         continue;
       }
       scanNumber(bytes, at, end, count === 0 ? shift : 0, scanned);
-      if (!Number.isFinite(scanned.value)) refuse(notNumber(asciiText(bytes, at, scanned.end), scanned.value));
+      if (!Number.isFinite(scanned.value)) {
+        if (looked) refuse(notNumber(asciiText(bytes, at, scanned.end), scanned.value));
+        end = contentEnd(bytes, start, to, warn);
+        looked = true;
+        continue;
+      }
       if (count === numbersPerLine) refuse(`more than ${numbersPerLine} numbers stand on the line`);
       if (count === 0) firstHz = scanned.shifted;
       numbers[count++] = scanned.value;
       at = scanned.end;
     }
+    if (count === 0) return;
     if (state.section === 'noise') assembly.takeNoise(count, firstHz);
     else assembly.takeLine(numbers, count, firstHz, lines.line);
   };

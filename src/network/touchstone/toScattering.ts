@@ -10,7 +10,7 @@ import type { Parameter } from './options';
  */
 export function toScattering(parameter: Exclude<Parameter, 'S'>, data: ComplexMatrix, referenceOhm: readonly number[], normalised: boolean): ComplexMatrix | null {
   const scattering = convert(parameter, data, referenceOhm, normalised);
-  return scattering !== null && scattering.flat().every(({ re, im }) => Number.isFinite(re) && Number.isFinite(im)) ? scattering : null;
+  return scattering !== null && scattering.every((row) => row.every(({ re, im }) => Number.isFinite(re) && Number.isFinite(im))) ? scattering : null;
 }
 
 function convert(parameter: Exclude<Parameter, 'S'>, data: ComplexMatrix, referenceOhm: readonly number[], normalised: boolean): ComplexMatrix | null {
@@ -23,10 +23,25 @@ function convert(parameter: Exclude<Parameter, 'S'>, data: ComplexMatrix, refere
   }
 }
 
+/** Entry by entry. */
 const weigh = (data: ComplexMatrix, weight: (i: number, j: number) => number): ComplexMatrix => data.map((row, i) => row.map((value, j) => scale(value, weight(i, j))));
 
-/** ±(m − 1)(m + 1)⁻¹, with m normalised; the two factors commute. */
-const cayley = (m: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null => solveMatrix(identityPlus(m, 1), identityPlus(m, -1))?.map((row) => row.map((value) => scale(value, sign))) ?? null;
+/** ±(m − 1)(m + 1)⁻¹, with m normalised; the two factors commute. Large files are of two ports: those by the closed form. */
+const cayley = (m: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null => (m.length === 2 ? cayleyOfTwo(m, sign) : cayleyOfAny(m, sign));
+
+function cayleyOfTwo([[m11, m12], [m21, m22]]: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null {
+  const one = complex(1);
+  const cross = multiply(m12, m21);
+  const sum = subtract(multiply(add(m11, one), add(m22, one)), cross);
+  if (!(magnitude(sum) > 0)) return null;
+  const over = (value: Complex) => scale(divide(value, sum), sign);
+  return [
+    [over(subtract(multiply(subtract(m11, one), add(m22, one)), cross)), over(scale(m12, 2))],
+    [over(scale(m21, 2)), over(subtract(multiply(add(m11, one), subtract(m22, one)), cross))],
+  ];
+}
+
+const cayleyOfAny = (m: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null => solveMatrix(identityPlus(m, 1), identityPlus(m, -1))?.map((row) => row.map((value) => scale(value, sign))) ?? null;
 
 /** S of normalised h; g is its dual, with all signs turned. */
 function hybrid([[h11, h12], [h21, h22]]: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null {
