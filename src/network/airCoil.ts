@@ -13,9 +13,10 @@ const f1 = (x: number) => (1 + 0.383901 * x + 0.017108 * x * x) / (1 + 0.258952 
 const f2 = (x: number) => 0.093842 * x + 0.002029 * x * x - 0.000801 * x ** 3;
 
 /**
- * Inductance of a single-layer winding as a current sheet, which is Nagaoka's, by R. Lundin, «A handbook formula for the
- * inductance of a single-layer circular coil», Proc. IEEE 73, 1985: within 2.5e-6 of the exact sheet (`test/published/coils.test.ts`). A real winding
- * of round wire differs from the sheet by a few per cent where there are few turns. Diameter is that of the wire's centre.
+ * Inductance (H) of a single-layer winding as a current sheet, which is Nagaoka's, by R. Lundin, «A handbook formula for the
+ * inductance of a single-layer circular coil», Proc. IEEE 73, 1985: within 2.5e-6 of the exact sheet
+ * (`test/published/coils.test.ts`). A real winding of round wire differs from the sheet by a few per cent where there are few
+ * turns. The diameter is that of the wire's centre; sizes in metres.
  */
 export function currentSheetInductanceH(turns: number, diameterM: number, lengthM: number): number {
   const a = diameterM / 2;

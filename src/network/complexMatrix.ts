@@ -8,7 +8,8 @@ export const matrixOf = (size: number, entry: (row: number, column: number) => C
 
 export const transposed = (m: ComplexMatrix): Complex[][] => matrixOf(m.length, (row, column) => m[column][row]);
 
-export const identityPlus = (m: ComplexMatrix, factor: number): Complex[][] => matrixOf(m.length, (row, column) => (row === column ? add(m[row][column], complex(factor)) : m[row][column]));
+export const identityPlus = (m: ComplexMatrix, factor: number): Complex[][] =>
+  matrixOf(m.length, (row, column) => (row === column ? add(m[row][column], complex(factor)) : m[row][column]));
 
 /** x of left · x = right by Gauss's elimination with pivots of the column; null where left is singular. */
 export function solveMatrix(left: ComplexMatrix, right: ComplexMatrix): Complex[][] | null {

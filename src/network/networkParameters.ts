@@ -12,7 +12,10 @@ import type { NetworkData } from './networkData';
 export function abcdOfNetwork(data: NetworkData, frequencyHz: Float64Array, reversed: boolean): Cascade {
   const [a, b, c, d, scale] = Array.from({ length: 5 }, () => filled(frequencyHz.length));
   const nothing = new Uint8Array(frequencyHz.length);
-  if (data.ports !== 2) return { frequencyHz, a, b, c, d, scale, known: nothing, reason: `the file has ${data.ports === 1 ? 'one port' : `${data.ports} ports`}, and two are needed` };
+  if (data.ports !== 2) {
+    const reason = `the file has ${data.ports === 1 ? 'one port' : `${data.ports} ports`}, and two are needed`;
+    return { frequencyHz, a, b, c, d, scale, known: nothing, reason };
+  }
   const { sRe, sIm, known, reason: outside } = interpolateNetwork(data, frequencyHz);
   let reason = outside;
   const [source, load] = reversed ? [1, 0] : [0, 1];

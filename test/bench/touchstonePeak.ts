@@ -7,15 +7,15 @@ function peakBytes(): number {
 }
 
 /**
- * By how many bytes reading a file in pieces of a megabyte, as the command line does, raises the peak of this process's memory.
+ * By how many bytes reading a file in pieces of a megabyte raises the peak of this process's memory.
  * Means something in a fresh process only.
  */
 export function readingPeakBytes(path: string): number {
   const before = peakBytes();
   const reader = touchstoneReader(path);
   const handle = openSync(path, 'r');
+  const buffer = new Uint8Array(1 << 20);
   for (;;) {
-    const buffer = new Uint8Array(1 << 20);
     const count = readSync(handle, buffer, 0, buffer.length, null);
     if (count === 0) break;
     reader.push(buffer.subarray(0, count));

@@ -24,11 +24,15 @@ export function dataLayout(fileName: string, options: TouchstoneOptions | null, 
   if (versioned && state.section !== 'network') refuse('the data must come after [Network Data]');
   const ports = portsOf(fileName, state);
   if (versioned) {
-    if (ports === 2 && state.twoPortOrder === null) refuse('[Two-Port Data Order] is missing, and the order of S12 and S21 is not to be guessed', at('network data'));
+    if (ports === 2 && state.twoPortOrder === null) {
+      refuse('[Two-Port Data Order] is missing, and the order of S12 and S21 is not to be guessed', at('network data'));
+    }
     if (ports !== 2 && state.twoPortOrder !== null) refuse('[Two-Port Data Order] belongs to files of two ports', at('two-port data order'));
     if (state.frequencies === null) refuse('[Number of Frequencies] is missing', at('network data'));
   }
-  if (ports !== 2 && (options.parameter === 'H' || options.parameter === 'G')) refuse(`${options.parameter} parameters are those of two-ports, and this file has ${portsText(ports)}`, options.line);
+  if (ports !== 2 && (options.parameter === 'H' || options.parameter === 'G')) {
+    refuse(`${options.parameter} parameters are those of two-ports, and this file has ${portsText(ports)}`, options.line);
+  }
   const { matrix } = state;
   return {
     ports, options, versioned,
@@ -59,7 +63,8 @@ function referencesOf(ports: number, options: TouchstoneOptions, state: KeywordS
   if (stated.length === ports) return [...stated];
   if (stated.length === 1 && !fromKeyword) return Array.from({ length: ports }, () => stated[0]);
   const where = fromKeyword ? '[Reference]' : 'the option line';
-  return refuse(`${where} states ${stated.length === 1 ? 'one resistance' : `${stated.length} resistances`}, and the file has ${portsText(ports)}`, fromKeyword ? state.lines.get('reference') : options.line);
+  const count = stated.length === 1 ? 'one resistance' : `${stated.length} resistances`;
+  return refuse(`${where} states ${count}, and the file has ${portsText(ports)}`, fromKeyword ? state.lines.get('reference') : options.line);
 }
 
 /** Two ports stand column by column where `columnsFirst`: in version 1, and in version 2 where it says 21_12. */

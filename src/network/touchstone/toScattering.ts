@@ -41,7 +41,8 @@ function cayleyOfTwo([[m11, m12], [m21, m22]]: ComplexMatrix, sign: 1 | -1): Com
   ];
 }
 
-const cayleyOfAny = (m: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null => solveMatrix(identityPlus(m, 1), identityPlus(m, -1))?.map((row) => row.map((value) => scale(value, sign))) ?? null;
+const cayleyOfAny = (m: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null =>
+  solveMatrix(identityPlus(m, 1), identityPlus(m, -1))?.map((row) => row.map((value) => scale(value, sign))) ?? null;
 
 /** S of normalised h; g is its dual, with all signs turned. */
 function hybrid([[h11, h12], [h21, h22]]: ComplexMatrix, sign: 1 | -1): ComplexMatrix | null {
