@@ -36,5 +36,6 @@ function caseView(problem: Problem, reading: MarkerReading, at: number, frequenc
 function markerText({ reflection, impedanceOhm, returnLossDb, reason }: MarkerReading): string {
   if (!reflection || !impedanceOhm) return reason ?? 'not known';
   const loss = returnLossDb === null || returnLossDb === Infinity ? '∞ dB' : printQuantity(returnLossDb, 'dB', { digits: 3 });
-  return `Γ ${printPolar(reflection)} · ${printComplex(impedanceOhm, 'Ω')} · ${loss}`;
+  // No figure is torn apart at the end of a line.
+  return [`Γ ${printPolar(reflection)}`, printComplex(impedanceOhm, 'Ω'), loss].map((figure) => figure.replace(/ /g, '\u00a0')).join(' · ');
 }

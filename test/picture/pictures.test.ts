@@ -99,7 +99,7 @@ describe('pictures', () => {
   });
 
   it('says in words what it shows', () => {
-    assert.match(chartSummary(view), /^Smith chart with the reflection trace of free air, wet bark\. At 866\.493 MHz, free air: Γ /);
+    assert.match(chartSummary(view), /^Smith chart with the reflection trace of free air, wet bark\. At 866\.493 MHz, free air: Γ\u00a0/);
   });
 
   it('a mask has its feet on the side on which the trace may not be, and is dashed where missed', () => {
