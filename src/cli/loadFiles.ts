@@ -50,9 +50,9 @@ function readNetwork(path: string): LoadedFile {
   const handle = openSync(path, 'r');
   // Most measurements are some kilobytes: no need to clear a megabyte for each.
   const size = Math.min(chunkBytes, fstatSync(handle).size + 1);
+  const buffer = new Uint8Array(size); // the reader keeps nothing of it
   try {
     for (;;) {
-      const buffer = new Uint8Array(size);
       const count = readSync(handle, buffer, 0, size, null);
       if (count === 0) break;
       reader.push(buffer.subarray(0, count));
