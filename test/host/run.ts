@@ -8,11 +8,11 @@ import { scenarios, type Scenario } from './scenarios';
 
 const here = path.dirname(fileURLToPath(import.meta.url));
 const root = path.resolve(here, '..', '..');
-const out = path.join(root, 'out', 'host');
+// A folder of this run's own, so that two runs at once do not take each other's programs away.
+const out = path.join(root, 'out', `host-${process.pid}`);
 
 /** The suite and the driver as programs: the extension host has no TypeScript. */
 async function bundle(): Promise<void> {
-  await rm(out, { recursive: true, force: true });
   const all = (await readdir(path.join(here, 'suite'), { recursive: true })).filter((name) => name.endsWith('.test.ts')).map((name) => name.split(path.sep).join('/'));
   const web = all.filter((name) => name.startsWith('web/'));
   const files = all.filter((name) => !name.startsWith('web/'));
@@ -95,4 +95,8 @@ async function main(): Promise<void> {
   process.exitCode = broken > 0 || passed === 0 ? 1 : 0;
 }
 
-await main();
+try {
+  await main();
+} finally {
+  await rm(out, { recursive: true, force: true });
+}

@@ -7,18 +7,26 @@ import { chromiumArguments, prepareChromium } from '../preparePrograms';
 import { pageBridge, type PageBridge } from './pageBridge';
 import { performAction } from './performAction';
 
-/** The editor in a browser writes its state down every five seconds, and cannot while the page unloads. */
-const STORED_AFTER_MS = 6_000;
+/**
+ * Keeps the page, once told so, from noticing that it is left. In a browser the editor's orderly end is a race between
+ * parting from the extension host and writing the state, and a panel whose host is gone is not written; what the editor
+ * wrote before counts. Put into the page before the editor, so that ours are the first listeners.
+ */
+const listenFirst = () => {
+  for (const event of ['beforeunload', 'pagehide', 'unload']) {
+    window.addEventListener(event, (told) => 'leaveUnnoticed' in window && told.stopImmediatePropagation(), { capture: true });
+  }
+};
 
 /** What the editor itself says about its own start, of no use to whoever reads a test run. */
 const isNoise = (line: string) =>
-  /connection token|^Creating a socket|Service Worker|ChatSessionStore|builtin extensions|vsda|open-vsx|extensions gallery|\[lifecycle\]/i.test(line);
+  /connection token|^Creating a socket|Service Worker|ChatSessionStore|builtin extensions|vsda|open-vsx|extensions gallery|\[lifecycle\]|^Creation of workbench contribution/i.test(line);
 
 /** A headless browser for an editor that runs a suite. */
 export interface EditorPage {
   readonly bridge: PageBridge;
-  /** Loads the editor's page so many times, one after another; gives the suite's exit code, the first that is not 0. */
-  run(url: string, loads: number): Promise<number>;
+  /** Loads the editor's page, again whenever the suite asks for it; gives the suite's exit code. */
+  run(url: string): Promise<number>;
   close(): Promise<void>;
 }
 
@@ -33,11 +41,19 @@ export async function openEditorPage(options: { readonly quiet: boolean }): Prom
   await writeFile(path.join(profile, 'Default', 'Preferences'), JSON.stringify({ profile: { cookie_controls_mode: 0, block_third_party_cookies: false } }));
   const browser = await chromium.launchPersistentContext(profile, { executablePath, headless: true, args: chromiumArguments, viewport: { width: 1400, height: 900 } });
   const page = await browser.newPage();
+  await page.addInitScript(listenFirst);
   const policyViolations: string[] = [];
   const picturesFolder = process.env.OHMWARD_PICTURES ?? path.join(tmpdir(), 'ohmward-pictures');
-  let load = 0;
+  let load = 1;
   let end: (code: number) => void = () => {};
-  const bridge = await pageBridge((action) => performAction({ page, picturesFolder, phase: () => load, policyViolations }, action));
+  const loadAgain = async () => {
+    load++;
+    await page.evaluate(() => Object.assign(window, { leaveUnnoticed: true }));
+    // After the answer: the suite that asks ends with the page.
+    setTimeout(() => void page.reload().catch((error: unknown) => console.error(error)), 100);
+  };
+  const bridge = await pageBridge((action) =>
+    action.do === 'load again' ? loadAgain() : performAction({ page, picturesFolder, load: () => load, policyViolations }, action));
   await page.exposeFunction('codeAutomationLog', (type: string, args: unknown[]) => {
     const line = format(...args);
     if ((options.quiet || isNoise(line)) && !verbose) return;
@@ -51,23 +67,15 @@ export async function openEditorPage(options: { readonly quiet: boolean }): Prom
   });
   page.on('dialog', (dialog) => void dialog.accept().catch(() => undefined)); // it may be gone with its page already
 
-  const loadOnce = (url: string) =>
-    new Promise<number>((resolve, reject) => {
-      end = resolve;
-      setTimeout(() => reject(new Error(`The suite did not end within ${limitMs} ms.`)), limitMs).unref();
-      page.once('crash', () => reject(new Error('The browser page crashed.')));
-      (load === 1 ? page.goto(url) : page.reload()).catch(reject);
-    });
   return {
     bridge,
-    async run(url, loads) {
-      for (load = 1; load <= loads; load++) {
-        if (load > 1) await new Promise((resolve) => setTimeout(resolve, STORED_AFTER_MS));
-        const code = await loadOnce(url);
-        if (code !== 0) return code;
-      }
-      return 0;
-    },
+    run: (url) =>
+      new Promise<number>((resolve, reject) => {
+        end = resolve;
+        setTimeout(() => reject(new Error(`The suite did not end within ${limitMs} ms.`)), limitMs).unref();
+        page.once('crash', () => reject(new Error('The browser page crashed.')));
+        page.goto(url).catch(reject);
+      }),
     async close() {
       await browser.close();
       bridge.close();

@@ -6,7 +6,9 @@ export type Place = 'window' | 'panel';
 
 export type PageAction =
   /** Which load of the window this is, from 1. */
-  | { readonly do: 'phase' }
+  | { readonly do: 'which load' }
+  /** Loads the window again, as after a crash. The suite that asks is gone with it. */
+  | { readonly do: 'load again' }
   /** Prints a line of the test run. */
   | { readonly do: 'say'; readonly text: string }
   /** How a suite ended whose host cannot write files. */

@@ -13,7 +13,7 @@ const FOCUS_TOLD_MS = 200;
 export interface Performer {
   readonly page: Page;
   readonly picturesFolder: string;
-  readonly phase: () => number;
+  readonly load: () => number;
   readonly policyViolations: readonly string[];
 }
 
@@ -36,11 +36,11 @@ async function accessibility(page: Page): Promise<AccessibilityViolation[]> {
 }
 
 /** Does in the browser what a suite asked for. */
-export async function performAction({ page, picturesFolder, phase, policyViolations }: Performer, action: PageAction): Promise<unknown> {
+export async function performAction({ page, picturesFolder, load, policyViolations }: Performer, action: Exclude<PageAction, { do: 'load again' }>): Promise<unknown> {
   const timeout = ACTION_TIMEOUT_MS;
   switch (action.do) {
-    case 'phase':
-      return phase();
+    case 'which load':
+      return load();
     case 'say':
       return console.log(action.text);
     case 'result':

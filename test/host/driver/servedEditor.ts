@@ -15,7 +15,7 @@ const settings = {
  * The editor as a program that the test runner can start: the served editor in a headless browser. Takes the desktop
  * editor's arguments that matter here, `--extensionDevelopmentPath=`, `--extensionTestsPath=` and a folder, workspace file or
  * nothing to open; prints what the suite prints; ends with the suite's exit code. Variables: `OHMWARD_TRUST=ask` (workspace
- * trust is on), `OHMWARD_LOADS` (how often the window is loaded; the suite learns which load it is in), and those of the page.
+ * trust is on), and those of the page.
  */
 async function main(): Promise<number> {
   const [extension, tests] = [argument('extensionDevelopmentPath'), argument('extensionTestsPath')];
@@ -33,7 +33,7 @@ async function main(): Promise<number> {
       ...(opened === undefined ? { ew: 'true' } : { [opened.endsWith('.code-workspace') ? 'workspace' : 'folder']: path.resolve(opened) }),
       payload: JSON.stringify([['extensionDevelopmentPath', remote(extension)], ['extensionTestsPath', remote(tests)]]),
     });
-    return await editor.run(`http://127.0.0.1:${server.port}/?${query}`, Number(process.env.OHMWARD_LOADS ?? '1'));
+    return await editor.run(`http://127.0.0.1:${server.port}/?${query}`);
   } finally {
     await editor.close();
     await server.stop();

@@ -64,7 +64,7 @@ async function main(): Promise<number> {
   const suite = path.relative(extension, path.join(path.dirname(tests), 'webSuite.cjs')).split(path.sep).join('/');
   const server = await serve(folder, extension, suite, editor.bridge.url);
   try {
-    return await editor.run(`http://localhost:${(server.address() as AddressInfo).port}/`, 1);
+    return await editor.run(`http://localhost:${(server.address() as AddressInfo).port}/`);
   } finally {
     await editor.close();
     server.closeAllConnections();

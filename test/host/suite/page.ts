@@ -16,7 +16,9 @@ async function ask<T>(action: PageAction): Promise<T> {
 
 /** The browser that shows the editor, as the person in front of it would use it. */
 export const page = {
-  phase: () => (bridgeUrl === null ? Promise.resolve(1) : ask<number>({ do: 'phase' })),
+  /** Which load of the window this is, from 1. */
+  load: () => (bridgeUrl === null ? Promise.resolve(1) : ask<number>({ do: 'which load' })),
+  loadAgain: () => ask<void>({ do: 'load again' }),
   say: (text: string) => ask<void>({ do: 'say', text }),
   result: (passes: number, failures: number) => ask<void>({ do: 'result', passes, failures }),
   picture: (name: string, of: Place = 'window') => ask<string>({ do: 'picture', name, of }),

@@ -1,4 +1,5 @@
 import * as vscode from 'vscode';
+import { page } from './page';
 
 /** Long enough for a loaded machine; a wait ends as soon as the thing is there. */
 const WAIT_MS = 20_000;
@@ -15,6 +16,7 @@ export async function eventually<T>(what: string | (() => string), look: () => T
     } catch (error) {
       last = error;
     }
+    if (Date.now() > end) await page.picture('waited-in-vain').catch(() => undefined); // where there is a window to take one of
     if (Date.now() > end) throw new Error(`waited in vain for ${typeof what === 'string' ? what : what()}${last instanceof Error ? `: ${last.message}` : ''}`);
     await new Promise((resolve) => setTimeout(resolve, 50));
   }
