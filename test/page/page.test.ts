@@ -11,7 +11,11 @@ const document = 'file:///orchard/frost.match.yaml';
 
 describe('the panel’s page', function () {
   this.timeout(60_000);
-  before(startPages);
+  // Chromium may have to be installed first.
+  before(function () {
+    this.timeout(600_000);
+    return startPages();
+  });
   after(stopPages);
 
   const last = async (served: ServedPage, type: ToHost['type']) => (await served.said()).filter((message) => message.type === type).at(-1);

@@ -3,6 +3,7 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { chromium, type Browser, type Page } from 'playwright-core';
 import { pageHtml } from '../../src/messages/pageHtml';
+import { chromiumArguments, prepareChromium } from '../host/preparePrograms';
 import type { ToHost, ToPage } from '../../src/messages/panel';
 import { bodyClass, themeVariables, type ThemeKind } from './themes';
 
@@ -40,10 +41,7 @@ export async function startPages(): Promise<void> {
     return send('text/html', (plain ? html.replace('id="panel"', 'id="panel" data-controls="plain"') : html).replace('<link', `<script nonce="${nonce}">${standIn}</script><link`));
   });
   await new Promise<void>((ready) => server!.listen(0, '127.0.0.1', ready));
-  browser = await chromium.launch({
-    executablePath: process.env.OHMWARD_CHROMIUM ?? '/usr/bin/chromium', headless: true,
-    args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
-  });
+  browser = await chromium.launch({ executablePath: await prepareChromium(), headless: true, args: chromiumArguments });
 }
 
 export async function stopPages(): Promise<void> {
