@@ -25,9 +25,9 @@ const browser = { ...common, platform: 'browser', target: 'es2022' };
 
 /** @type {{ entry: string; options: esbuild.BuildOptions; executable?: boolean }[]} */
 const outputs = [
-  { entry: 'src/editor/extension.ts', options: { ...node, outfile: 'dist/extension.cjs', external: ['vscode'] } },
-  // The worker host of the editors that live in a browser takes an entry for CommonJS only if its name ends in .cjs.
-  { entry: 'src/editor/extensionBrowser.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.browser.cjs', external: ['vscode'] } },
+  // One bundle for both extension hosts, with Node and without. The worker host of editors that live in a browser takes an
+  // entry for CommonJS only if its name ends in .cjs.
+  { entry: 'src/editor/extension.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.cjs', external: ['vscode'] } },
   { entry: 'src/cli/main.ts', options: { ...node, outfile: 'dist/ohmward.cjs', banner: { js: '#!/usr/bin/env node' } }, executable: true },
   { entry: 'webview/main.ts', options: { ...browser, format: 'iife', outfile: 'dist/webview.js' } },
   { entry: 'webview/panel.css', options: { ...browser, outfile: 'dist/webview.css' } },
