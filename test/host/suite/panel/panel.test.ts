@@ -161,6 +161,25 @@ describe('the panel', () => {
     await eventually('numbers of the text that is open again', async () => (await valueOf('L1')) === '15 nH');
   });
 
+  it('opens by itself where the setting says so, and stays closed once it was closed by hand', async () => {
+    const settings = vscode.workspace.getConfiguration('ohmward');
+    const isOpen = () => vscode.window.tabGroups.all.some(({ tabs }) => tabs.some(({ label }) => label.startsWith('Ohmward')));
+    await openSample(FROST);
+    assert.equal(isOpen(), false, 'not without the setting');
+    await closeAll();
+    await settings.update('panel.openByItself', true, vscode.ConfigurationTarget.Global);
+    try {
+      await openSample(FROST);
+      await eventually('the panel', isOpen);
+      await closeAll();
+      await openSample(FROST);
+      await new Promise((resolve) => setTimeout(resolve, 500));
+      assert.equal(isOpen(), false, 'closed by hand, it stays closed');
+    } finally {
+      await settings.update('panel.openByItself', undefined, vscode.ConfigurationTarget.Global);
+    }
+  });
+
   it('shows the worst margin in the status bar, which leads to its goal', async () => {
     const editor = await openSample(FROST);
     await replace(editor, 'return loss >= 14 dB', 'return loss >= 70 dB');
