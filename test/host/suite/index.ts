@@ -15,7 +15,7 @@ export async function run(): Promise<void> {
   const load = await page.load();
   const folder = path.join(__dirname, 'suite', load === 1 ? suite : `${suite}AfterReload`);
   const { default: Mocha } = await import('mocha');
-  const mocha = new Mocha({ timeout: 60_000, color: false, grep: process.env.OHMWARD_GREP, forbidOnly: true, forbidPending: true });
+  const mocha = new Mocha({ retries: 1, timeout: 60_000, color: false, grep: process.env.OHMWARD_GREP, forbidOnly: true, forbidPending: true });
   for (const name of (await readdir(folder)).sort()) if (name.endsWith('.test.cjs')) mocha.addFile(path.join(folder, name));
   if (mocha.files.length === 0) throw new Error(`${folder} has no tests`);
   const { passes, failures } = await new Promise<{ passes: number; failures: number }>((resolve) => {

@@ -126,6 +126,8 @@ describe('the panel', () => {
     const marker = '.marker-line > :nth-child(2)';
     const write = async (text: string) => {
       await page.click(marker);
+      // The keys that follow go where the focus is, and it comes by way of the editor's window.
+      await eventually('the focus', () => page.evaluate<boolean>(`() => document.hasFocus() && document.activeElement === document.querySelector('${marker}')`));
       await page.press('Control+A');
       await page.type(text);
       await page.press('Enter');
