@@ -1,108 +1,213 @@
 import { lineMap } from '../base/lineMap';
-import type { Span } from '../base/span';
-import { keysAt, type KeyEntry } from '../description/keys';
-import { goalConditions, goalWords } from '../description/phrase/goalQuantities';
-import { kindOfDesignator } from '../description/phrase/readElementPhrase';
-import { literalAt, literalValue } from '../quantity/literal';
-import { nextInSeries } from '../quantity/preferredSeries';
-import { writeQuantity } from '../quantity/printQuantity';
-import { unitOf } from '../quantity/unit';
+import { keysAt, type KeyEntry, type KeyPlace } from '../description/keys';
+import { elementKeywords } from '../description/phrase/readElementKey';
+import { partKinds } from '../description/phrase/readFamily';
+import type { DescriptionSyntax } from '../description/syntax';
+import { seriesNames } from '../quantity/preferredSeries';
 import type { Assessment } from './assess';
+import { bandOffers, caseOffers, goalOffers } from './completeGoal';
+import { figureOffers, partOffers } from './completePart';
+import { unitOffers, type UnitKind } from './completeUnit';
+import { completionsOf, nothingToOffer, offer, type Completion, type Offer, type Offers } from './completionItem';
 
-export interface Completion {
-  readonly label: string;
-  readonly detail: string;
-  readonly documentation: string;
-  readonly insertText: string;
-  readonly snippet: boolean;
-  /** What is replaced. */
-  readonly span: Span;
-}
-
-/** What may stand at the offset, by the section and the words before it; works on any half-typed text. */
-export function completionsAt(assessment: Assessment, offset: number): Completion[] {
+/**
+ * What may stand at the offset, by the section and the words before it: read from the lines themselves, so that it works on
+ * any half-typed text. `paths` are files that could be named, relative to the description.
+ */
+export function completionsAt(assessment: Assessment, offset: number, paths: readonly string[] = []): Completion[] {
   const { text } = assessment.description.syntax;
   const lines = lineMap(text);
-  const { line } = lines.positionAt(offset);
-  const { start } = lines.lineSpan(line);
+  const { start, end } = lines.lineSpan(lines.positionAt(offset).line);
   const before = text.slice(start, offset);
   if (/(?:^|\s)#/.test(before)) return [];
-  const word = /[\p{L}\d_.-]*$/u.exec(before)![0];
-  const span = { start: offset - word.length, end: offset };
-  if (/^\w*$/.test(before)) return keyCompletions(keysAt('description'), span);
-  const section = sectionAbove(text, start, before);
-  if (/^\s*-\s+\w*$/.test(before)) {
-    if (section === 'ladder' || section === 'fixture') return keyCompletions(keysAt('ladder entry'), span);
-    if (section === 'goals') return goalCompletions(span);
-    return [];
+  const rest = text.slice(offset, end).replace(/\s#.*$/, '');
+  const found = offersAt(assessment, { before, rest, above: text.slice(0, start), known: distinct([...paths, ...assessment.description.files.map(({ path }) => path)]) });
+  // YAML wants a blank behind the colon of a key.
+  const offers = before.endsWith(':') && found.before === 0 ? found.offers.map((each) => ({ ...each, insertText: ` ${each.insertText ?? each.label}` })) : found.offers;
+  return completionsOf(offers, { start: offset - found.before, end: offset + (found.after ?? 0) });
+}
+
+interface Place {
+  /** The line up to the cursor, and from it on without a comment. */
+  readonly before: string;
+  readonly rest: string;
+  readonly above: string;
+  readonly known: readonly string[];
+}
+
+const distinct = (words: readonly string[]) => [...new Set(words)];
+
+function offersAt(assessment: Assessment, place: Place): Offers {
+  const { before, above } = place;
+  const { syntax } = assessment.description;
+  if (/^\w*$/.test(before)) return keyOffers('description', before, place, (key) => !new RegExp(`^${key}[ \\t]*:`, 'm').test(above));
+  const own = /^(\w+)\s*:\s*(.*)$/.exec(before);
+  if (own) return valueOffers(assessment, own[1], own[2], place);
+  const section = [...above.matchAll(/^(\w+)[ \t]*:/gm)].at(-1)?.[1] ?? null;
+  const item = /^\s*-\s+(?:\{\s*)?(.*)$/.exec(before);
+  if (item) return itemOffers(assessment, section, item[1], place);
+  const line = /^\s+(?:(["']?)([^:"']*)\1:\s+)?(.*)$/.exec(before);
+  if (!line || section === null) return nothingToOffer;
+  const [, , key, phrase] = line;
+  if (key === undefined) {
+    const keyPlace = nestedKeys(section, before, above);
+    return keyPlace && /^\w*$/.test(phrase) ? keyOffers(keyPlace, phrase, place) : section === 'source' ? { offers: bandOffers(syntax), before: phrase.length } : nothingToOffer;
   }
-  if (section === 'goals') return placeCompletions(assessment, before, span);
-  return section === 'ladder' || section === 'load' || section === 'channels' ? phraseCompletions(assessment, section, before, span) : [];
+  return namedOffers(assessment, section, key.trim(), phrase, place);
 }
 
-const plain = (label: string, detail: string, span: Span): Completion => ({ label, detail, documentation: '', insertText: label, snippet: false, span });
+/** Which keys may stand on a line of its own below a section's key. */
+function nestedKeys(section: string, before: string, above: string): KeyPlace | null {
+  if (section === 'firmware') return 'firmware';
+  const indent = /^\s*/.exec(before)![0].length;
+  const outer = above.split(/\r\n|\n|\r/).findLast((line) => line.trim() !== '' && line.search(/\S/) < indent);
+  if (section === 'load' && outer !== undefined && /^\s/.test(outer)) return 'case';
+  return section === 'measured' && outer !== undefined && /^\s*-/.test(outer) ? 'measured item' : null;
+}
 
-const keyCompletions = (entries: readonly KeyEntry[], span: Span): Completion[] =>
-  entries.map(({ name, text, snippet, example }) => ({ label: name, detail: '', documentation: `${text}\n\n\`\`\`yaml\n${example}\n\`\`\``, insertText: snippet, snippet: true, span }));
+/** Keys with their snippets; of a key that has its colon already only the name. */
+function keyOffers(keyPlace: KeyPlace, begun: string, { rest }: Place, wanted: (key: string) => boolean = () => true): Offers {
+  const hasColon = /^\w*\s*:/.test(rest);
+  const offers = keysAt(keyPlace).filter(({ name }) => wanted(name)).map((entry) => keyOffer(entry, hasColon));
+  return { offers, before: begun.length, after: hasColon ? /^\w*/.exec(rest)![0].length : 0 };
+}
 
-const goalCompletions = (span: Span): Completion[] => [
-  ...goalWords.map(({ quantity, example }) => ({ ...plain(quantity, example, span), insertText: example })),
-  ...goalConditions.map((condition) => plain(condition, 'condition', span)),
+function keyOffer({ name, text, snippet, example, required }: KeyEntry, nameOnly: boolean): Offer {
+  return offer(name, required ? 'required' : '', {
+    documentation: `${text}\n\n\`\`\`yaml\n${example}\n\`\`\``, insertText: nameOnly ? name : snippet, snippet: !nameOnly,
+  });
+}
+
+/** Behind a dash. */
+function itemOffers(assessment: Assessment, section: string | null, words: string, place: Place): Offers {
+  const { syntax } = assessment.description;
+  if (section === 'goals') return goalOffers(syntax, words.replace(/^["']/, ''));
+  if (section === 'measured') return measuredOffers(syntax, words, place);
+  if (section === 'channels') return unitOffers(words, ['frequency']);
+  if (section !== 'ladder' && section !== 'fixture' && section !== 'load') return nothingToOffer;
+  const entry = /^(series|shunt|line|stub open|stub short|transformer|block)\s+([\p{L}][\p{L}\d_.-]*)\s*:\s*["']?(.*)$/u.exec(words);
+  if (entry) return elementOffers(assessment, entry[1], entry[2], entry[3], place);
+  const keyword = elementKeywords.find((each) => words.startsWith(`${each} `));
+  if (keyword) return { offers: nextNames(syntax, keyword), before: words.length - keyword.length - 1 };
+  return /^[\p{L} ]*$/u.test(words) ? keyOffers('ladder entry', words, place) : nothingToOffer;
+}
+
+/** The next free designators. */
+function nextNames(syntax: DescriptionSyntax, keyword: string): Offer[] {
+  const taken = new Set([...(syntax.ladder?.elements ?? []), ...syntax.fixture].map(({ name }) => name.value));
+  const letters = keyword === 'series' || keyword === 'shunt' ? ['L', 'C', 'R'] : keyword === 'line' ? ['TL'] : keyword === 'transformer' ? ['T'] : keyword === 'block' ? ['FL'] : ['S'];
+  return letters.map((letter) => {
+    let number = 1;
+    while (taken.has(`${letter}${number}`)) number++;
+    return offer(`${letter}${number}`, 'next free name', { insertText: `${letter}${number}: ` });
+  });
+}
+
+function elementOffers(assessment: Assessment, keyword: string, name: string, phrase: string, place: Place): Offers {
+  switch (keyword) {
+    case 'series':
+    case 'shunt': return partOffers(assessment, keyword, name, phrase, place.rest);
+    case 'block': return pathOffers(phrase, place.known, /\.(?:s2p|ts)$/i, [offer('reversed', 'port 1 toward the load')]);
+    case 'transformer': return /\s\S*$/.test(phrase) || phrase === '' ? words(phrase, [offer('turns 1:2', 'source side : load side'), offer('winding 3 µH', 'inductance of the source side'), offer('coupling 0.98', 'with «winding»')]) : nothingToOffer;
+    default: {
+      const units = unitOffers(phrase, /\b(?:at|@)\s+[^,]*$/.test(phrase) ? ['frequency'] : /^[^,]*$/.test(phrase) ? ['resistance'] : /vf\s+[^,]*$/.test(phrase) ? [] : ['length', 'angle']);
+      return units.offers.length > 0 ? units : words(phrase, lineWords);
+    }
+  }
+}
+
+const lineWords: readonly Offer[] = [
+  offer('50 Ω, 6 mm, vf 0.55', 'impedance and length'), offer('50 Ω, 90° at 868 MHz', 'electrical length'), offer('vf 0.55', 'velocity factor'),
+  offer('0.4 dB/m @ 1 GHz', 'loss'), offer('solve 2 mm .. 40 mm', 'length to be found'), offer('microstrip width 0.35 mm, height 0.2 mm, permittivity 4.3, length 6 mm', 'by geometry'),
 ];
 
-/** The key of the first level that the line lies under, or that stands on it. */
-function sectionAbove(text: string, lineStart: number, before: string): string | null {
-  const own = /^(\w+)\s*:/.exec(before);
-  if (own) return own[1];
-  const keys = [...text.slice(0, lineStart).matchAll(/^(\w+)\s*:/gm)];
-  return keys.at(-1)?.[1] ?? null;
+/** Words for the one that is being typed. */
+const words = (phrase: string, offers: readonly Offer[]): Offers => ({ offers, before: /[^\s,]*$/.exec(phrase)![0].length });
+
+function pathOffers(phrase: string, known: readonly string[], ending: RegExp, behind: readonly Offer[] = []): Offers {
+  const done = /^\S+\.\w+\s+(\S*)$/.exec(phrase);
+  if (done) return { offers: behind, before: done[1].length };
+  return { offers: known.filter((path) => ending.test(path)).map((path) => offer(path, 'file')), before: phrase.length };
 }
 
-/** After `in`, `at 2 x`, `for`, `against`: names of the description. */
-function placeCompletions({ description }: Assessment, before: string, span: Span): Completion[] {
-  const bands = description.syntax.bands.map(({ name }) => plain(name.value, 'band', span));
-  const cases = description.syntax.load?.cases.flatMap(({ name }) => (name ? [plain(name.value, 'load case', span)] : [])) ?? [];
-  const elements = description.syntax.ladder?.elements.map(({ name }) => plain(name.value, 'element', span)) ?? [];
-  if (/\s(?:in|against|x|×)\s+[^\s]*$/.test(before)) return bands;
-  if (/\sfor\s+[^\s]*$/.test(before)) return cases;
-  if (/(?:voltage|current|dissipation)\s+[^\s]*$/.test(before)) return [...elements, plain('load', 'the load', span)];
-  return [];
+const touchstone = /\.(?:s\d+p|ts)$/i;
+
+function measuredOffers(syntax: DescriptionSyntax, phrase: string, place: Place): Offers {
+  const cased = /\sfor\s+([\p{L}\d _-]*)$/u.exec(phrase);
+  if (cased && !/\swith\s/.test(cased[0])) return { offers: caseOffers(syntax), before: cased[1].length };
+  const coded = /\swith\s+(?:.*,\s*)?([\p{L}\d _-]*)$/u.exec(phrase);
+  if (coded) return { offers: syntax.tunables.map(({ name }) => offer(name.value, 'tunable', { insertText: `${name.value} = ` })), before: coded[1].length };
+  const path = phrase.replace(/^[\p{L}][\p{L}\d_.-]*:\s+/u, '');
+  const files = pathOffers(path, place.known, touchstone, [offer('for', 'the load case'), offer('with', 'the codes that were set')]);
+  const steps = path === phrase && /^\w*$/.test(phrase) ? (syntax.ladder?.elements ?? []).map(({ name }) => offer(name.value, 'built up to here', { insertText: `${name.value}: ` })) : [];
+  return { ...files, offers: [...steps, ...files.offers] };
 }
 
-function phraseCompletions({ description }: Assessment, section: string, before: string, span: Span): Completion[] {
-  const { syntax } = description;
-  const families = syntax.families.map(({ name }) => plain(name.value, 'family', span));
-  if (section === 'channels') return syntax.bands.map(({ name }) => plain(name.value, 'band', span));
-  if (/\bfrom\s+[^\s]*$/.test(before)) return [...families, plain('E24', 'preferred series', span), plain('E12', 'preferred series', span)];
-  if (/\btunable\s+[^\s]*$/.test(before)) return syntax.tunables.map(({ name }) => plain(name.value, 'tunable', span));
-  if (section === 'load') return ['open', 'short', 'gamma'].map((word) => plain(word, 'impedance', span));
-  const entry = /^\s*-\s+(series|shunt)\s+([\p{L}][\p{L}\d_.-]*)\s*:\s*(.*)$/u.exec(before);
-  if (!entry) return [];
-  const [, orientation, name, phrase] = entry;
-  if (phrase === '') return [plain('solve', 'to be found', span), plain('tunable', 'set by firmware', span), ...(orientation === 'shunt' ? [plain('not fitted', 'empty pads', span)] : [plain('0 Ω', 'a bridge', span)])];
-  const kind = kindOfDesignator(name);
-  const around = valuesAround(phrase, kind, span.end - phrase.length, span.end);
-  return around.length > 0 ? around : figureCompletions(span);
+const quantityKeys: Readonly<Record<string, readonly UnitKind[]>> = { z0: ['resistance'], power: ['power'], sweep: ['frequency'], channels: ['frequency'] };
+
+/** Behind a key of the first level. */
+function valueOffers({ description: { syntax } }: Assessment, key: string, phrase: string, place: Place): Offers {
+  if (key in quantityKeys) {
+    const units = unitOffers(phrase, quantityKeys[key]);
+    return units.offers.length > 0 || key !== 'channels' ? units : { offers: bandOffers(syntax), before: phrase.length };
+  }
+  switch (key) {
+    case 'ohmward': return { offers: [offer('1', 'version of the language')], before: phrase.length };
+    case 'spread': return { offers: [offer('uniform', 'within the tolerance'), offer('normal', 'tolerance at three sigma')], before: phrase.length };
+    case 'source': return impedanceOffers(phrase, place, [offer('wants …', 'the load that the port should see', { insertText: 'wants ' })]);
+    case 'load': return impedanceOffers(phrase, place);
+    case 'ladder': return ladderOffers(syntax, phrase);
+    default: return nothingToOffer;
+  }
 }
 
-/** E24 values around the number that is being typed, with the unit that it has or that its kind suggests. */
-function valuesAround(phrase: string, kind: ReturnType<typeof kindOfDesignator>, start: number, end: number): Completion[] {
-  const dimension = kind === 'resistor' ? 'resistance' : kind === 'capacitor' ? 'capacitance' : 'inductance';
-  const literal = literalAt(phrase, 0, [dimension]);
-  if (!literal || phrase.slice(literal.end).trim() !== '') return [];
-  const usual = { resistance: { unit: 'Ω', scale: 1 }, capacitance: { unit: 'F', scale: 1e-12 }, inductance: { unit: 'H', scale: 1e-9 } }[dimension];
-  const stated = literal.form === 'unit' && unitOf(literal.unit)?.dimension === dimension;
-  const value = literalValue({ ...literal, form: stated ? 'unit' : 'bare' }) * (stated ? 1 : usual.scale);
-  if (!(value > 0)) return [];
-  const down = nextInSeries(value, 'E24', 'down');
-  const up = nextInSeries(value, 'E24', 'up');
-  const values = [value, down, up, up && nextInSeries(up, 'E24', 'up'), down && nextInSeries(down, 'E24', 'down')];
-  return [...new Set(values.filter((candidate) => candidate !== null && candidate !== 0))].map((candidate) => plain(writeQuantity(Number(candidate!.toPrecision(6)), usual.unit), candidate === value ? 'with its unit' : 'E24', { start, end }));
+function ladderOffers(syntax: DescriptionSyntax, phrase: string): Offers {
+  const from = /\sfrom\s+(?:.*,\s*)?([\p{L}\d_-]*)$/u.exec(phrase);
+  if (from) return { offers: [...syntax.families.map(({ name }) => offer(name.value, 'family')), ...seriesNames.map((name) => offer(name, 'preferred series'))], before: from[1].length };
+  const forms = [offer('solve up to 4 elements', 'series and shunt by turns'), offer('solve pi Q 5', 'three elements'), offer('solve tee bandwidth 20 MHz', 'three elements')];
+  return /^[\p{L} ]*$/u.test(phrase) && !/^solve (?:pi|tee)\s/.test(phrase) ? { offers: forms, before: phrase.length } : words(phrase, [offer('from', 'families or a preferred series')]);
 }
 
-const figures: readonly (readonly [string, string])[] = [
-  ['from', 'one of a family'], ['±5 %', 'tolerance'], ['Q 35 @ 900 MHz', 'quality at a frequency'], ['ESR 0.1 Ω', 'loss'], ['ESL 0.35 nH', 'inductance in series'],
-  ['SRF 7 GHz', 'self-resonance'], ['rated 50 V', 'limit'], ['fixed', 'not to be solved again'],
-];
+function impedanceOffers(phrase: string, { known }: Place, first: readonly Offer[] = []): Offers {
+  const units = unitOffers(phrase, /\sat\s+\S*\s?\S*$/.test(phrase) ? ['frequency'] : ['resistance', 'capacitance', 'inductance']);
+  if (units.offers.length > 0) return units;
+  const done = /\.(?:s\d+p|ts)\s+(\w*)$/i.exec(phrase);
+  if (done) return { offers: [offer('port 1', 'one port of it'), offer('differential', 'two ports driven against each other')], before: done[1].length };
+  if (!/^\S*$/.test(phrase)) return nothingToOffer;
+  const forms = [offer('18 - j37 Ω at 868 MHz', 'impedance'), offer('gamma 0.62 at -38°', 'reflection coefficient'), offer('open', 'no load'), offer('short', 'no impedance')];
+  return { offers: [...first, ...known.filter((path) => touchstone.test(path)).map((path) => offer(path, 'file')), ...forms], before: phrase.length };
+}
 
-const figureCompletions = (span: Span): Completion[] => figures.map(([label, detail]) => plain(label, detail, span));
+/** Behind a name that the description gives, or a key below the first level. */
+function namedOffers({ description: { syntax } }: Assessment, section: string, key: string, phrase: string, place: Place): Offers {
+  switch (section) {
+    case 'bands': {
+      const units = unitOffers(phrase, ['frequency']);
+      return units.offers.length > 0 && !/Hz$/.test(phrase) ? units : words(phrase, [offer(', watch', 'plotted only'), offer(', 41 points', 'where it is judged')].filter(() => /Hz\s*$/.test(phrase)));
+    }
+    case 'source':
+    case 'load': return impedanceOffers(phrase, place);
+    case 'measured': return key === 'file' ? measuredOffers(syntax, phrase, place) : nothingToOffer;
+    case 'let': return unitOffers(phrase, ['frequency', 'resistance', 'inductance', 'capacitance', 'length']);
+    case 'parts': return familyOffers(phrase, place);
+    case 'tunables': return kindOffers(phrase, [offer('5 bits 1 pF .. 4 pF', 'code 0 is the first value')]);
+    default: return nothingToOffer;
+  }
+}
+
+function familyOffers(phrase: string, { known }: Place): Offers {
+  const sources = [...seriesNames.map((name) => offer(name, 'preferred series')), offer('files …', 'measured in series', { insertText: 'files ' })];
+  const found = kindOffers(phrase, sources);
+  return /^\S*$/.test(phrase) ? { offers: [...found.offers, ...known.filter((path) => /\.csv$/i.test(path)).map((path) => offer(path, 'parts at hand'))], before: phrase.length } : found;
+}
+
+/** The kind of part, then what follows it, then figures. */
+function kindOffers(phrase: string, next: readonly Offer[]): Offers {
+  const kind = partKinds.find((each) => phrase.startsWith(`${each} `)) ?? null;
+  if (!kind) return /^\S*$/.test(phrase) ? { offers: partKinds.map((each) => offer(each, 'kind of part')), before: phrase.length } : nothingToOffer;
+  const rest = phrase.slice(kind.length + 1);
+  if (/^\S*$/.test(rest)) return { offers: next, before: rest.length };
+  const units = unitOffers(rest, [kind === 'resistor' ? 'resistance' : kind === 'inductor' ? 'inductance' : 'capacitance']);
+  if (units.offers.length > 0 && !/[HFΩ]$/.test(rest)) return units;
+  return words(rest, figureOffers(kind).filter(({ label }) => label !== 'fixed' && !label.startsWith('from')));
+}

@@ -22,8 +22,13 @@ export function foldingSpans({ syntax: { text } }: Description): Span[] {
     if (indent < 0) continue;
     // A list may stand as far left as its key.
     const depth = content[indent] === '-' ? indent + 1 : indent;
-    close(content[indent] === '#' ? Math.min(depth, open.at(-1)?.indent ?? depth) + 1 : depth);
-    if (content[indent] !== '#') open.push({ indent: depth, start });
+    if (content[indent] === '#') {
+      // A comment ends nothing, and belongs to what it stands further in than; it may as well be about what follows.
+      if (depth <= (open.at(-1)?.indent ?? depth)) continue;
+    } else {
+      close(depth);
+      open.push({ indent: depth, start });
+    }
     lastEnd = end;
     lastLine = line;
   }

@@ -1,5 +1,5 @@
 import { contains, type Span } from '../base/span';
-import { keys } from '../description/keys';
+import { keys, type KeyPlace } from '../description/keys';
 import { lineMap } from '../base/lineMap';
 import type { Assessment } from './assess';
 import { nameAtOffset } from './definition';
@@ -17,7 +17,12 @@ export interface Hover {
 export function hoverAt(assessment: Assessment, offset: number): Hover | null {
   const { syntax, files } = assessment.description;
   const file = files.find(({ span, within }) => within === null && contains(span, offset));
-  if (file) return fileHover(assessment, file);
+  const loaded = syntax.load?.cases.find(({ impedance }) => impedance.form === 'file' && contains(impedance.span, offset));
+  if (file) {
+    const own = fileHover(assessment, file);
+    const amounts = loaded ? loadHover(assessment, loaded) : null;
+    return amounts ? { span: own.span, markdown: `${own.markdown}\n\n${amounts.markdown}` } : own;
+  }
   const goal = syntax.goals.find(({ span }) => contains(span, offset));
   const named = nameAtOffset(assessment.description, offset);
   if (named?.kind === 'band') return bandHover(assessment, named.name, spanAt(named, offset));
@@ -38,11 +43,17 @@ export function hoverAt(assessment: Assessment, offset: number): Hover | null {
 const spanAt = ({ definition, references }: { readonly definition: Span | null; readonly references: readonly Span[] }, offset: number): Span =>
   [...(definition ? [definition] : []), ...references].find((span) => contains(span, offset))!;
 
-/** A key of the first level, explained. */
+/** A key, explained: of the first level, or of firmware, a load case or a measurement. */
 function keyHover(text: string, offset: number): Hover | null {
-  const { line } = lineMap(text).positionAt(offset);
-  const { start, end } = lineMap(text).lineSpan(line);
-  const written = /^([\w]+)\s*:/.exec(text.slice(start, end));
-  const entry = written && offset <= start + written[1].length ? keys.find(({ name, place }) => name === written[1] && place === 'description') : undefined;
-  return entry && written ? { span: { start, end: start + written[1].length }, markdown: `**${entry.name}**: ${entry.text}\n\n\`\`\`yaml\n${entry.example}\n\`\`\`` } : null;
+  const lines = lineMap(text);
+  const { start, end } = lines.lineSpan(lines.positionAt(offset).line);
+  const written = /^(\s*(?:-\s+)?)(\w+)\s*:/.exec(text.slice(start, end));
+  if (!written) return null;
+  const [, indent, word] = written;
+  const span = { start: start + indent.length, end: start + indent.length + word.length };
+  const section = indent === '' ? 'description' : [...text.slice(0, start).matchAll(/^(\w+)[ \t]*:/gm)].at(-1)?.[1] ?? '';
+  const entry = keys.find(({ name, place }) => name === word && place === (keyPlaces[section] ?? null));
+  return entry && contains(span, offset) ? { span, markdown: `**${entry.name}**: ${entry.text}\n\n\`\`\`yaml\n${entry.example}\n\`\`\`` } : null;
 }
+
+const keyPlaces: Readonly<Record<string, KeyPlace>> = { description: 'description', firmware: 'firmware', load: 'case', measured: 'measured item' };

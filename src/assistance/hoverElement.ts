@@ -7,6 +7,7 @@ import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
 import type { Hover } from './hover';
 import { plainText, rowsTable } from './markdown';
+import { partWithValue } from './partWithValue';
 import { familyValues, knownPart } from './steppedValue';
 import { worstMarginWith } from './worstMarginWith';
 
@@ -17,7 +18,9 @@ export function elementHover(assessment: Assessment, entry: ElementSyntax): Hove
   const { problem } = assessment.model;
   const head = `**${plainText(name)}**, ${entry.keyword}`;
   if (!result) return { span: entry.span, markdown: `${head}: nothing is known of it yet.` };
-  const text = [`${head}${result.value !== null && result.unit ? `, ${printQuantity(result.value, result.unit, { digits: 4 })}` : ''}`, '', elementTable(result)];
+  const text = [`${head}${result.value !== null && result.unit ? `, ${printQuantity(result.value, result.unit, { digits: 4 })}` : ''}`];
+  const table = elementTable(result);
+  if (table !== '') text.push('', table);
   if (result.reason !== null) text.push('', plainText(result.reason));
   const candidates = problem ? neighbours(assessment, problem, name) : '';
   if (candidates !== '') text.push('', candidates);
@@ -34,13 +37,15 @@ function elementTable(result: ElementResult): string {
   if (result.peakVoltageV !== null) rows.push(['peak voltage', printQuantity(result.peakVoltageV, 'V', { digits: 3 })]);
   if (result.rmsCurrentA !== null) rows.push(['rms current', printQuantity(result.rmsCurrentA, 'A', { digits: 3 })]);
   if (result.dissipationW !== null) rows.push(['heat', printQuantity(result.dissipationW, 'W', { digits: 3 })]);
-  return rowsTable(rows);
+  return rows.length > 0 ? rowsTable(rows) : '';
 }
 
 /** The value itself and those beside it in E24 and in its family, each with the worst margin that it would leave. */
 function neighbours(assessment: Assessment, problem: Problem, name: string): string {
   const known = knownPart(assessment, name);
-  if (!known || problem.goals.length === 0) return '';
+  const element = problem.ladder.find((each) => each.name === name);
+  const now = element?.form === 'branch' && element.branch.form === 'part' ? element.branch.part : null;
+  if (!known || !now || problem.goals.length === 0) return '';
   const { value, unit } = known.value;
   const family = familyValues(assessment, known);
   const nearFamily = family?.filter((other) => other !== value).sort((a, b) => Math.abs(Math.log(a / value)) - Math.abs(Math.log(b / value))).slice(0, 2) ?? [];
@@ -48,7 +53,7 @@ function neighbours(assessment: Assessment, problem: Problem, name: string): str
   const inSeries = [nextInSeries(value, 'E24', 'down'), nearest, nextInSeries(value, 'E24', 'up')].filter((other) => other !== null);
   const values = [...new Set([value, ...inSeries, ...nearFamily])].sort((a, b) => a - b);
   const rows = values.map((other) => {
-    const margin = worstMarginWith(problem, name, other);
+    const margin = worstMarginWith(problem, name, partWithValue(problem, now, known.part, other));
     const from = [other === value ? 'now' : '', inSeries.includes(other) ? 'E24' : '', family?.includes(other) ? known.part.from!.value : ''].filter((word) => word !== '');
     return `| ${printQuantity(other, unit, { digits: 4 })} | ${plainText(from.join(', '))} | ${margin === null ? 'not known' : `${printNumber(margin, 3)} dB`} |`;
   });

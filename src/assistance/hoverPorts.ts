@@ -7,7 +7,9 @@ import { printComplex, printPolar } from '../quantity/printComplex';
 import { printQuantity } from '../quantity/printQuantity';
 import { sampleSource } from '../study/sampleCase';
 import { impedancePath } from '../study/impedancePath';
+import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
+import { fileData } from './fileData';
 import type { Hover } from './hover';
 import { plainText } from './markdown';
 import { defaultMarkerHz } from './markerView';
@@ -43,18 +45,27 @@ export function sourceHover({ model: { problem } }: Assessment, { wants, span, b
   return { span, markdown };
 }
 
-export function fileHover({ description, model: { problem } }: Assessment, { path, span, kind }: FileReference): Hover {
-  const loadCase = description.syntax.load?.cases.find(({ impedance }) => impedance.form === 'file' && impedance.path.value === path);
-  const data = (loadCase && problem?.cases.find(({ name }) => name === (loadCase.name?.value ?? null))?.load) ?? null;
-  if (kind !== 'touchstone' || data?.form !== 'file') return { span, markdown: `\`${path.replace(/`/g, '')}\`` };
-  const { frequencyHz, ports, referenceOhm } = data.data;
-  return {
-    span,
-    markdown: `\`${path.replace(/`/g, '')}\`: ${ports === 1 ? 'one port' : `${ports} ports`}, ${frequencyHz.length} points from ${printQuantity(frequencyHz[0], 'Hz', { digits: 5 })} to ${printQuantity(frequencyHz[frequencyHz.length - 1], 'Hz', { digits: 5 })}, against ${printQuantity(referenceOhm[0], 'Ω', { digits: 4 })}`,
-  };
+/** A file: its points, span and ports; of a drawer or a pattern, the parts that came of it. */
+export function fileHover({ description: { syntax }, model: { problem } }: Assessment, { path, span, kind }: FileReference): Hover {
+  const head = `\`${path.replace(/`/g, '')}\``;
+  const family = syntax.families.find(({ source }) => (source.form === 'csv' && source.path.value === path) || (source.form === 'files' && source.pattern.value === path));
+  const parts = kind !== 'touchstone' && family ? familyText(problem, family.name.value) : null;
+  if (parts) return { span, markdown: `${head}: ${parts}` };
+  const data = problem && kind === 'touchstone' ? fileData(syntax, problem, path) : null;
+  if (!data || data.frequencyHz.length === 0) return { span, markdown: `${head}: not read` };
+  const { frequencyHz, ports, referenceOhm } = data;
+  const [start, stop] = [frequencyHz[0], frequencyHz[frequencyHz.length - 1]].map((hz) => printQuantity(hz, 'Hz', { digits: 5 }));
+  const points = frequencyHz.length === 1 ? `1 point at ${start}` : `${frequencyHz.length} points from ${start} to ${stop}`;
+  return { span, markdown: `${head}: ${ports === 1 ? 'one port' : `${ports} ports`}, ${points}, against ${printQuantity(referenceOhm[0], 'Ω', { digits: 4 })}` };
 }
 
 export function familyHover({ model: { problem } }: Assessment, name: string, span: Span): Hover | null {
+  const text = familyText(problem, name);
+  return text === null ? null : { span, markdown: `**${plainText(name)}**: ${text}` };
+}
+
+/** `21 inductors, 1 nH to 47 nH`; null where its parts are not known. */
+function familyText(problem: Problem | null, name: string): string | null {
   const family = problem?.families.find((candidate) => candidate.name === name);
   if (!family || family.members.length === 0) return null;
   const units = { resistor: 'Ω', inductor: 'H', capacitor: 'F' } as const;
@@ -64,5 +75,5 @@ export function familyHover({ model: { problem } }: Assessment, name: string, sp
     const [least, most] = [Math.min(...values), Math.max(...values)].map((value) => printQuantity(value, units[kind], { digits: 4 }));
     return [`${values.length} ${kind}${values.length === 1 ? '' : 's'}, ${least === most ? least : `${least} to ${most}`}`];
   });
-  return { span, markdown: `**${plainText(name)}**: ${ranges.join('; ')}` };
+  return ranges.join('; ');
 }

@@ -16,7 +16,7 @@ export function outline({ syntax }: Description): OutlineItem[] {
   const detailOf = (span: Span) => text.slice(span.start, span.end).replace(/\s+/g, ' ').trim();
   const leaf = (kind: OutlineItem['kind'], name: string, span: Span, selectionSpan: Span, detail: string): OutlineItem => ({ name, detail, kind, span, selectionSpan, children: [] });
   const named = (kind: OutlineItem['kind'], items: readonly { readonly name: { readonly value: string; readonly span: Span }; readonly span: Span }[]) =>
-    items.map(({ name, span }) => leaf(kind, name.value, union(name.span, span), name.span, detailOf(span)));
+    items.map(({ name, span }) => leaf(kind, name.value, union(name.span, span), name.span, detailOf({ start: span.start <= name.span.start ? name.span.end : span.start, end: span.end }).replace(/^["']?\s*:\s*/, '')));
   const section = (name: string, children: readonly OutlineItem[]): OutlineItem[] => {
     if (children.length === 0) return [];
     const span = children.map((child) => child.span).reduce(union);

@@ -1,20 +1,22 @@
 import type { Element } from '../network/element';
+import type { Part } from '../network/part';
 import { evaluate } from '../study/evaluate';
 import type { GoalResult } from '../study/goal';
-import { marginDb } from '../study/marginDb';
+import { isCondition, marginDb } from '../study/marginDb';
 import type { Problem } from '../study/problem';
 
-/** The least margin in dB over the goals that have one; null where none has. */
+/** The least margin in dB over the goals that ladders are ranked by; null where there is none, or one of them is not known. */
 export function worstMarginDb(results: readonly GoalResult[]): number | null {
-  const margins = results.map(marginDb).filter((margin) => margin !== null);
-  return margins.length === 0 ? null : Math.min(...margins);
+  const margins = results.filter(({ goal }) => !isCondition(goal)).map(marginDb);
+  const known = margins.filter((margin) => margin !== null);
+  return known.length === 0 || known.length < margins.length ? null : Math.min(...known);
 }
 
-/** The least margin with another value in the one part of an element; null where that cannot be told. */
-export function worstMarginWith(problem: Problem, elementName: string, value: number): number | null {
+/** The least margin with another part in the place of the one part of an element; null where that cannot be told. */
+export function worstMarginWith(problem: Problem, elementName: string, part: Part): number | null {
   const ladder = problem.ladder.map((element): Element =>
     element.form === 'branch' && element.name === elementName && element.branch.form === 'part'
-      ? { ...element, branch: { form: 'part', part: { ...element.branch.part, value } } }
+      ? { ...element, branch: { form: 'part', part } }
       : element);
   // One point is enough of the sweep: only the goals are asked for.
   return worstMarginDb(evaluate({ ...problem, ladder, sweepHz: problem.sweepHz.slice(0, 1) }).goals);
