@@ -58,7 +58,7 @@ describe('stepping a value', () => {
   }
 
   const refused: [entry: string, because: RegExp][] = [
-    ['shunt C1: solve from caps', /no value yet/], ['shunt C1: tunable bank', /codes of «bank»/], ['shunt C1: not fitted', /not fitted/], ['series J1: 0 Ω', /bridge/],
+    ['shunt C1: solve from caps', /no value yet/], ['shunt C1: tunable bank', /codes of «bank»/], ['shunt C1: not fitted', /not fitted/], ['series L1: 0 Ω', /bridge/],
     ['series L1: coil 6 turns', /read/], ['series L1: "coil 6 turns, diameter 5 mm, length 7 mm, wire 0.8 mm"', /winding/], ['shunt T1: 3.9 nH + 1.2 pF', /several parts/],
     ['line T1: 50 Ω, 6 mm, vf 0.55', /length/], ['transformer T1: turns 1:2', /turns/], ['series L1: 13 nH from nowhere', /«nowhere»/], ['series L1:', /read/],
     ['series L1: 13 pF', /read/], ['series L1: =(10 nH + 3 nH)', /expression/], ['block B1: x.s2p', /file/],
@@ -90,8 +90,8 @@ describe('setting a value', () => {
     ['shunt C1: solve from caps or none', '2.2 pF', 'shunt C1: 2.2 pF from caps'],
     ['shunt X1: solve from coils, caps', '2.2 pF', 'shunt X1: 2.2 pF from caps'],
     ['shunt C1: not fitted', '2.2 pF', 'shunt C1: 2.2 pF'],
-    ['series J1: 0 Ω', '3.9 nH', 'series J1: 3.9 nH'],
-    ['series J1: 3.9 nH Q 30', '0 ohm', 'series J1: 0 Ω'],
+    ['series L1: 0 Ω', '3.9 nH', 'series L1: 3.9 nH'],
+    ['series L1: 3.9 nH Q 30', '0 ohm', 'series L1: 0 Ω'],
     ['shunt C1: 3.9 pF', 'not fitted', 'shunt C1: not fitted'],
     ['series L1: 13 pF', '13 nH', 'series L1: 13 nH'],
     ['series L1: "13 nH Q 40"', '15 nH', 'series L1: "15 nH Q 40"'],
