@@ -20,6 +20,11 @@ export function headerSection(controls: Controls, actions: Actions) {
       setText(pin, pinned ? 'Unpin' : 'Pin');
       pin.setAttribute('aria-label', pinned ? 'Unpin: follow the active description' : 'Pin: keep showing this description');
     },
+    /** Of a description that could not be shown yet, only its name is known. */
+    updateName(fileName: string) {
+      setText(title, fileName);
+      setText(file, '');
+    },
     setFreshness(text: string, old: boolean) {
       setText(freshness, text);
       root.classList.toggle('old', old);

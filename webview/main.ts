@@ -100,10 +100,11 @@ window.addEventListener('message', (event: MessageEvent<unknown>) => {
       break;
     case 'stale': {
       const kept = shown?.document === message.document ? shown.view : null;
+      if (kept === null) header.updateName(decodeURIComponent(message.document.split('/').at(-1) ?? ''));
       shown = { document: message.document, version: message.version, view: kept };
       host.remember({ document: message.document });
       if (message.problems.length > 0 || message.reason !== null) problems.update(message.problems, kept?.cautions ?? []);
-      header.setFreshness(message.reason === null ? 'being worked out anew' : `old numbers: ${message.reason}`, true);
+      header.setFreshness(message.reason === null ? 'being worked out anew' : `${kept === null ? 'nothing to show' : 'old numbers'}: ${message.reason}`, true);
       content.classList.add('stale');
       nothing.hidden = true;
       content.hidden = false;

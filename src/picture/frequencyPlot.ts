@@ -14,7 +14,7 @@ export interface PlotData {
 }
 
 export const plotSize = { width: 540, height: 170 } as const;
-const area = { left: 44, right: 14, top: 24, bottom: 26 } as const;
+const area = { left: 44, right: 24, top: 24, bottom: 26 } as const;
 const deepest = { reflection: -40, gain: -30 } as const;
 const shallowest = { reflection: -10, gain: -3 } as const;
 

@@ -90,7 +90,7 @@ describe('the panel’s page', function () {
     await served.page.mouse.up();
     const moved = await last(served, 'move marker');
     assert.ok(moved?.type === 'move marker');
-    const share = (0.7 * 540 - 44) / (540 - 44 - 14);
+    const share = (0.7 * 540 - 44) / (540 - 44 - 24);
     assert.ok(Math.abs(moved.frequencyHz - (750e6 + share * 250e6)) < 2e6, `${moved.frequencyHz}`);
     const marker = { ...view.marker!, text: 'the latest' };
     await served.post({ type: 'marker', document, version: 1, request: moved.request - 1, marker: { ...marker, text: 'an old one' }, refusal: null });
@@ -113,6 +113,15 @@ describe('the panel’s page', function () {
     await served.post(viewMessage(sampleView(), 5));
     assert.equal(await served.page.locator('.stale').count(), 0);
     assert.equal(await served.page.textContent('.freshness'), 'up to date');
+    await served.page.close();
+  });
+
+  it('names a description that cannot be shown yet, and not the one before it', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView(), 3));
+    await served.post({ type: 'stale', document: 'file:///b/other%20board.match.yaml', version: 4, reason: 'the text cannot be evaluated', problems: [] });
+    assert.equal(await served.page.textContent('h1'), 'other board.match.yaml');
+    assert.equal(await served.page.locator('svg.chart').isVisible(), false);
     await served.page.close();
   });
 
