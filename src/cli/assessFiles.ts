@@ -1,10 +1,11 @@
-import { dirname, relative, sep } from 'node:path';
+import { dirname } from 'node:path';
 import { assessDescription, type Assessment } from '../assistance/assess';
 import { readDescription } from '../description/readDescription';
 import { readText } from './assessFile';
 import { assessInWorkers } from './assessInWorkers';
-import { findDescriptions } from './findDescriptions';
+import { findDescriptions, shownPath } from './findDescriptions';
 import { loadFiles } from './loadFiles';
+import type { Surroundings } from './runCommandLine';
 
 export interface AssessedFile {
   readonly path: string;
@@ -13,13 +14,11 @@ export interface AssessedFile {
   readonly assessment: Assessment;
 }
 
-export const shownPath = (path: string): string => relative(process.cwd(), path).split(sep).join('/');
-
 /** Fewer descriptions than this are done before the workers have started. */
 const worthWorkers = 24;
 
-export async function assessFiles(paths: readonly string[]): Promise<AssessedFile[]> {
-  const found = findDescriptions(paths);
+export async function assessFiles(paths: readonly string[], around: Surroundings): Promise<AssessedFile[]> {
+  const found = findDescriptions(paths, around.error);
   const prepared = (path: string) => {
     const description = readDescription(readText(path), { expressions: true });
     return { description, files: loadFiles(description, [dirname(path)]) };

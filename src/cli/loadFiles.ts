@@ -1,9 +1,10 @@
-import { closeSync, fstatSync, openSync, readdirSync, readFileSync, readSync, statSync } from 'node:fs';
+import { closeSync, fstatSync, openSync, readdirSync, readSync, statSync } from 'node:fs';
 import { dirname, isAbsolute, join, resolve } from 'node:path';
 import type { FileReference, LoadedFile, LoadedFiles } from '../description/files';
 import { filesNeeded } from '../assistance/assess';
 import type { Description } from '../description/description';
 import { touchstoneReader } from '../network/touchstone/readTouchstone';
+import { textOfFile } from './textOfFile';
 
 const chunkBytes = 1 << 20;
 /** A drawer may name further files; more rounds than this would be a circle. */
@@ -41,7 +42,7 @@ function loadOne(reference: FileReference, folders: readonly string[]): LoadedFi
 
 function readDrawer(path: string): LoadedFile {
   if (statSync(path).size > maxCsvBytes) return { form: 'unreadable', message: 'is larger than a drawer may be (16 MiB)', line: null };
-  return { form: 'csv', text: readFileSync(path, 'utf8') };
+  return { form: 'csv', text: textOfFile(path).text };
 }
 
 /** In chunks, so that a large file is never held whole beside its numbers. */

@@ -1,4 +1,4 @@
-import { mkdirSync, statSync } from 'node:fs';
+import { statSync } from 'node:fs';
 import { basename, join } from 'node:path';
 import { cascade } from '../network/cascade';
 import { networkOfAbcd } from '../network/networkParameters';
@@ -26,7 +26,7 @@ export async function sweep(paths: readonly string[], options: CallOptions, arou
   const format = formatOf(options.format, ['text', 'json', 'csv', 'touchstone']);
   if (options['two-port'] && format !== 'touchstone') throw new CallError('--two-port goes with --format touchstone');
   if (options['two-port'] && options.case !== undefined) throw new CallError('--two-port is the ladder alone, without any load case');
-  const files = await assessFiles(paths);
+  const files = await assessFiles(paths, around);
   const swept: Swept[] = [];
   let failed = false;
   for (const file of files) {
@@ -37,8 +37,8 @@ export async function sweep(paths: readonly string[], options: CallOptions, arou
     if (problem && evaluation) swept.push({ file, problem, evaluation: oneCase(evaluation, options.case, file.shown) });
   }
   const outputs = format === 'json' ? [{ name: 'sweep.json', text: `${JSON.stringify(sweepJson(swept.map(({ file, evaluation }) => ({ path: file.shown, evaluation }))))}\n` }]
-    : swept.flatMap((one) => outputsOf(one, format, options['two-port'] === true));
-  deliver(outputs, options.output, around);
+    : swept.flatMap((one) => outputsOf(one, stemOf(one, swept), format, options['two-port'] === true));
+  deliver(apart(outputs), options.output, around);
   return failed ? 1 : 0;
 }
 
@@ -54,23 +54,41 @@ interface Output {
   readonly text: string;
 }
 
-const stem = (path: string) => basename(path).replace(/\.match\.ya?ml$/i, '');
+const withoutEnding = (path: string) => path.replace(/\.match\.ya?ml$/i, '');
 
-function outputsOf({ file, problem, evaluation }: Swept, format: 'text' | 'csv' | 'touchstone', twoPort: boolean): Output[] {
-  if (format === 'text') return [{ name: `${stem(file.path)}.txt`, text: sweepText(file.shown, evaluation) }];
-  if (format === 'csv') return [{ name: `${stem(file.path)}.csv`, text: sweepCsv(evaluation) }];
-  const title = problem.title ?? stem(file.path);
+/** The description's own name; with its folders where another one is called the same. */
+function stemOf({ file }: Swept, all: readonly Swept[]): string {
+  const stem = withoutEnding(basename(file.path));
+  const alone = all.every((other) => other.file === file || withoutEnding(basename(other.file.path)).toLowerCase() !== stem.toLowerCase());
+  return alone ? stem : withoutEnding(file.shown).replace(/^(\.\.\/)+/, '').replace(/[/:]+/g, '-');
+}
+
+/** No output may overwrite another one: names that are still alike (upper and lower case aside) are numbered. */
+function apart(outputs: readonly Output[]): Output[] {
+  const taken = new Set<string>();
+  return outputs.map(({ name, text }) => {
+    let free = name;
+    for (let n = 2; taken.has(free.toLowerCase()); n++) free = name.replace(/(?=\.[^.]*$)/, `-${n}`);
+    taken.add(free.toLowerCase());
+    return { name: free, text };
+  });
+}
+
+function outputsOf({ file, problem, evaluation }: Swept, stem: string, format: 'text' | 'csv' | 'touchstone', twoPort: boolean): Output[] {
+  if (format === 'text') return [{ name: `${stem}.txt`, text: sweepText(file.shown, evaluation) }];
+  if (format === 'csv') return [{ name: `${stem}.csv`, text: sweepCsv(evaluation) }];
+  const title = problem.title ?? stem;
   if (twoPort) {
     const network = networkOfAbcd(cascade(studiedLadder(problem), problem.sweepHz), problem.z0Ohm, problem.z0Ohm);
     if (!network) throw new CallError(`${file.shown}: the ladder is not known at any point of the sweep`);
-    return [{ name: `${stem(file.path)}.s2p`, text: writeTouchstone(network, { comments: [title, 'The ladder: port 1 at the source, port 2 at the load'] }) }];
+    return [{ name: `${stem}.s2p`, text: writeTouchstone(network, { comments: [title, 'The ladder: port 1 at the source, port 2 at the load'] }) }];
   }
   return evaluation.traces.map((trace) => {
     const network = traceNetwork(trace, evaluation.frequencyHz, problem.z0Ohm);
     const label = trace.caseName === null ? '' : `.${trace.caseName.replace(/[^\w-]+/g, '-')}`;
     if (!network) throw new CallError(`${file.shown}: nothing is known${trace.caseName === null ? '' : ` of case ${trace.caseName}`}: ${trace.reason ?? 'no points'}`);
     const comments = [title, ...(trace.caseName === null ? [] : [`Load case: ${trace.caseName}`]), 'Impedance that the source sees'];
-    return { name: `${stem(file.path)}${label}.s1p`, text: writeTouchstone(network, { comments }) };
+    return { name: `${stem}${label}.s1p`, text: writeTouchstone(network, { comments }) };
   });
 }
 
@@ -90,7 +108,6 @@ function deliver(outputs: readonly Output[], target: string | undefined, around:
     }
   })();
   if (!isFolder && outputs.length > 1) throw new CallError(`${target} is one file, and this makes ${outputs.length}`);
-  if (isFolder) mkdirSync(target, { recursive: true });
   for (const output of outputs) {
     const path = isFolder ? join(target, output.name) : target;
     writeWhole(path, output.text);

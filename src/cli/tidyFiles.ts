@@ -1,8 +1,7 @@
 import { tidy } from '../description/tidy';
 import { readDescription } from '../description/readDescription';
-import { readText } from './assessFile';
-import { shownPath } from './assessFiles';
-import { findDescriptions } from './findDescriptions';
+import { readTextFile } from './assessFile';
+import { findDescriptions, shownPath } from './findDescriptions';
 import type { CallOptions, Surroundings } from './runCommandLine';
 import { lineMap } from '../base/lineMap';
 import { writeWhole } from './writeWhole';
@@ -10,8 +9,13 @@ import { writeWhole } from './writeWhole';
 /** Lays descriptions out in place, or with `--verify` only says which ones would change. */
 export function tidyFiles(paths: readonly string[], options: CallOptions, around: Surroundings): number {
   let failed = false;
-  for (const path of findDescriptions(paths)) {
-    const before = readText(path);
+  for (const path of findDescriptions(paths, around.error)) {
+    const { text: before, isUtf8 } = readTextFile(path);
+    if (!isUtf8) {
+      around.error(`${shownPath(path)}: is not UTF-8; save it as UTF-8 first, so that nothing is lost\n`);
+      failed = true;
+      continue;
+    }
     const faulty = readDescription(before, { expressions: true }).diagnostics.find((diagnostic) => diagnostic.severity === 'error');
     const after = tidy(before).text;
     if (after === before) {

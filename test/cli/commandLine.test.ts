@@ -1,7 +1,7 @@
 import assert from 'node:assert/strict';
-import { cpSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
+import { cpSync, lstatSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
-import { join } from 'node:path';
+import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { runCommandLine } from '../../src/cli/runCommandLine';
 import { readTouchstone } from '../../src/network/touchstone/readTouchstone';
@@ -136,6 +136,88 @@ describe('command line', () => {
       }
       const { out } = await run('check', '--format', 'json', '.');
       assert.deepEqual(JSON.parse(out).files.map((file: { path: string }) => file.path), ['crate-reader/loop.match.yaml', 'deep/er/loop.match.yaml', 'orchard/frost.match.yaml']);
+    });
+  });
+
+  describe('files and folders', () => {
+    const copyLoop = (path: string) => {
+      mkdirSync(dirname(path), { recursive: true });
+      cpSync('crate-reader/loop.match.yaml', path);
+      cpSync('crate-reader/loop.s1p', join(dirname(path), 'loop.s1p'));
+    };
+    const pathsOf = (out: string) => JSON.parse(out).files.map((file: { path: string }) => file.path);
+
+    it('counts a link to a file, follows none to a folder, and lists nothing twice', async () => {
+      mkdirSync('deep');
+      cpSync('crate-reader/loop.s1p', 'deep/loop.s1p');
+      symlinkSync('../crate-reader/loop.match.yaml', 'deep/linked.match.yaml');
+      symlinkSync('../deep', 'deep/round');
+      symlinkSync('nowhere', 'deep/broken.match.yaml');
+      const { code, out } = await run('check', '--format', 'json', 'deep', 'deep/linked.match.yaml');
+      assert.equal(code, 0);
+      assert.deepEqual(pathsOf(out), ['deep/linked.match.yaml']);
+    });
+
+    it('reports paths relative to the folder it is called from', async () => {
+      process.chdir('orchard');
+      const { out } = await run('check', '--format', 'json', '../crate-reader', '.');
+      assert.deepEqual(pathsOf(out), ['../crate-reader/loop.match.yaml', 'frost.match.yaml']);
+    });
+
+    it('says so where a folder holds no description', async () => {
+      mkdirSync('deep');
+      const { out, error } = await run('check', '--format', 'json', 'deep');
+      assert.deepEqual(pathsOf(out), []);
+      assert.match(error, /no description/);
+    });
+
+    it('reads UTF-16 by its byte order mark, and lays out only UTF-8', async () => {
+      const text = readFileSync('crate-reader/loop.match.yaml', 'utf8');
+      const bytes = Buffer.concat([Buffer.from([0xff, 0xfe]), Buffer.from(`# °\n${text.replace('  - ', '  -  ')}`, 'utf16le')]);
+      writeFileSync('crate-reader/loop.match.yaml', bytes);
+      const { code, error } = await run('check', 'crate-reader');
+      assert.deepEqual([code, error], [0, '']);
+      const tidied = await run('tidy', 'crate-reader');
+      assert.equal(tidied.code, 1);
+      assert.match(tidied.error, /is not UTF-8/);
+      assert.deepEqual(readFileSync('crate-reader/loop.match.yaml'), bytes);
+    });
+
+    it('reports bytes that are no text at their place, and lays out nothing that it would lose', async () => {
+      const text = readFileSync('crate-reader/loop.match.yaml', 'utf8');
+      const bytes = Buffer.concat([Buffer.from('# 45 '), Buffer.from([0xb0]), Buffer.from(`\n${text.replace('  - ', '  -  ')}`)]);
+      writeFileSync('crate-reader/loop.match.yaml', bytes);
+      const { code, error } = await run('check', 'crate-reader');
+      assert.equal(code, 1);
+      assert.match(error, /^crate-reader\/loop\.match\.yaml:1:6: error: .*UTF-8.*\(not-utf8\)$/m);
+      assert.equal((await run('tidy', 'crate-reader')).code, 1);
+      assert.deepEqual(readFileSync('crate-reader/loop.match.yaml'), bytes);
+    });
+
+    it('lays out what a link leads to, and leaves the link', async () => {
+      const text = readFileSync('crate-reader/loop.match.yaml', 'utf8');
+      writeFileSync('crate-reader/loop.match.yaml', text.replace('  - ', '  -  '));
+      symlinkSync('crate-reader/loop.match.yaml', 'linked.match.yaml');
+      assert.equal((await run('tidy', 'linked.match.yaml')).code, 0);
+      assert.ok(lstatSync('linked.match.yaml').isSymbolicLink());
+      assert.equal(readFileSync('crate-reader/loop.match.yaml', 'utf8'), text);
+    });
+
+    it('gives every trace a file of its own where descriptions or cases are called alike', async () => {
+      copyLoop('deep/one/loop.match.yaml');
+      copyLoop('deep/two/loop.match.yaml');
+      const { code, out } = await run('sweep', 'deep', '--format', 'touchstone', '-o', 'traces/');
+      assert.equal(code, 0);
+      assert.deepEqual(out.trim().split('\n'), ['traces/deep-one-loop.s1p', 'traces/deep-two-loop.s1p']);
+      writeFileSync('cases.match.yaml', 'ohmward: 1\nbands:\n  b: 868 MHz\nload:\n  wet bark: 40 Ω\n  wet-bark: 60 Ω\nladder:\n  - series L1: 1 nH\n');
+      assert.equal((await run('sweep', 'cases.match.yaml', '--format', 'touchstone', '-o', 'traces/')).code, 0);
+      assert.notEqual(readFileSync('traces/cases.wet-bark.s1p', 'utf8'), readFileSync('traces/cases.wet-bark-2.s1p', 'utf8'));
+    });
+
+    it('the call is wrong where the output cannot be written', async () => {
+      const { code, error } = await run('report', 'crate-reader', '-o', 'orchard');
+      assert.equal(code, 2);
+      assert.match(error, /^ohmward: orchard: cannot be written \(\w+\)$/m);
     });
   });
 

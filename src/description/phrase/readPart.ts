@@ -128,7 +128,7 @@ function valueAt(s: Scanner, expects: PartKind | null): { value: PartValueSyntax
   const kind = kindOfQuantity(found.kind)!;
   const unit = kind === 'resistor' ? 'Ω' : kind === 'inductor' ? 'H' : 'F';
   if (found.value < 0 || (found.value === 0 && kind !== 'resistor')) {
-    complain(s, 'not-physical', found.value < 0 ? `A ${found.kind} is not negative.` : `${kind === 'inductor' ? 'An' : 'A'} ${kind} of 0 ${unit} is no part; write ${kind === 'inductor' ? '0 Ω for a bridge' : 'not fitted for empty pads'}.`, found.span);
+    complain(s, 'not-physical', found.value < 0 ? `${found.kind === 'inductance' ? 'An' : 'A'} ${found.kind} is not negative.` : `${kind === 'inductor' ? 'An' : 'A'} ${kind} of 0 ${unit} is no part; write ${kind === 'inductor' ? '0 Ω for a bridge' : 'not fitted for empty pads'}.`, found.span);
     return { ...faulty(), kind };
   }
   return { value: { form: 'known', value: found.value, unit, span: found.span }, kind };

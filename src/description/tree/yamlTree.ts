@@ -84,8 +84,12 @@ export function yamlTree(text: string): YamlTree {
 const error = (code: string, message: string, span: Span): Diagnostic => ({ code, severity: 'error', message, span });
 
 function controlCharactersIn(text: string): Diagnostic[] {
-  return [...text.matchAll(controlCharacters)].slice(0, yamlErrorsAtMost)
+  // What a reader of bytes puts where they are no UTF-8. One place is enough to tell: the rest of the file has the same cause.
+  const lost = text.indexOf('\ufffd');
+  const notUtf8 = lost < 0 ? [] : [error('not-utf8', 'What stands here is not UTF-8; save the file as UTF-8, then write the character again.', { start: lost, end: lost + 1 })];
+  const control = [...text.matchAll(controlCharacters)].slice(0, yamlErrorsAtMost)
     .map((found) => error('control-character', 'A control character does not belong in a match description; delete it.', { start: found.index, end: found.index + 1 }));
+  return [...notUtf8, ...control];
 }
 
 function read(clean: string, edits: readonly TextEdit[]): Reading {
