@@ -33,14 +33,25 @@ function fileJson({ path, assessment, earlier }: CheckedFile): object {
       const end = lines.positionAt(span.end);
       return { code, severity, message, line: start.line + 1, column: start.character + 1, endLine: end.line + 1, endColumn: end.character + 1 };
     }),
-    goals: (evaluation?.goals ?? []).map((result) => ({ ...goalJson(result), ...(earlier !== undefined && { before: beforeJson(result, earlier) }) })),
-    elements: (evaluation?.elements ?? []).map(elementJson),
+    goals: evaluation === null ? unjudged(assessment) : evaluation.goals.map((result) => ({ ...goalJson(result), ...(earlier !== undefined && { before: beforeJson(result, earlier) }) })),
+    elements: (description.syntax.ladder ? evaluation?.elements ?? [] : []).map(elementJson),
     bands: (evaluation?.bands ?? []).map(bandJson),
     spread: null,
   };
 }
 
-const pair = (value: Complex | null) => value && [finite(value.re), finite(value.im)];
+/** An open has no impedance that could be written as two numbers: it is infinite as a whole. */
+const pair = (value: Complex | null) => value && Number.isFinite(value.re) && Number.isFinite(value.im) ? [value.re, value.im] : null;
+/** The goals of a description of which nothing can be computed, so that none is lost. */
+function unjudged({ description: { syntax } }: Assessment): object[] {
+  const lines = lineMap(syntax.text);
+  const reason = 'nothing can be computed before the errors of the description are mended';
+  return syntax.goals.map(({ text, span, quantity, limit, unit }) => ({
+    text, line: lines.positionAt(span.start).line + 1, ok: false, quantity, value: null, limit: limit?.value ?? null, margin: null,
+    unit, frequency: null, case: null, reason,
+  }));
+}
+
 const finite = (value: number | null) => (value !== null && Number.isFinite(value) ? value : null);
 const because = (reason: string | null) => (reason === null ? {} : { reason });
 

@@ -117,6 +117,32 @@ describe('command line', () => {
       assert.match(goal.reason, /covers 700 MHz to 1 GHz/);
     });
 
+    for (const [what, from, to, reason] of [
+      ['no load', 'load: 60 Ω\n', '', /load: it could not be read/],
+      ['no band that can be read', 'b: 868 MHz', 'b: 868 mHz', /nothing can be computed/],
+    ] as const) {
+      it(`loses no goal where there is ${what}`, async () => {
+        const text = 'ohmward: 1\nbands:\n  b: 868 MHz\nload: 60 Ω\nladder:\n  - series L1: 1 nH\ngoals:\n  - return loss >= 10 dB\n';
+        writeFileSync('small.match.yaml', text.replace(from, to));
+        const { code, out } = await run('check', '--format', 'json', 'small.match.yaml');
+        const [file] = JSON.parse(out).files;
+        assert.deepEqual([code, file.diagnostics.filter((found: { severity: string }) => found.severity === 'error').length], [1, 1]);
+        const [{ text: goal, ok, value, limit, margin, unit, reason: told }] = file.goals;
+        assert.deepEqual([goal, ok, value, limit, margin, unit], ['return loss >= 10 dB', false, null, 10, null, 'dB']);
+        assert.match(told, reason);
+      });
+    }
+
+    it('lists only elements that are there, and an open as infinite', async () => {
+      const text = 'ohmward: 1\nbands:\n  b: 868 MHz\nload: open\nladder:\n  - series L1: 1 nH\n';
+      writeFileSync('open.match.yaml', text);
+      writeFileSync('none.match.yaml', text.replace(/ladder[^]*/, ''));
+      const { out } = await run('check', '--format', 'json', 'open.match.yaml', 'none.match.yaml');
+      const [open, none] = JSON.parse(out).files;
+      assert.deepEqual([open.elements[0].impedanceAfter, open.elements[0].reflectionAfter, open.elements[0].reason], [null, [1, 0], undefined]);
+      assert.deepEqual(none.elements, []);
+    });
+
     it('compares each goal with an earlier version', async () => {
       cpSync('orchard/frost.match.yaml', join(folder, 'earlier.yaml'));
       change('series L1: 10 nH', 'series L1: 11 nH');

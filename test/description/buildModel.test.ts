@@ -60,6 +60,13 @@ describe('the problem of a description', () => {
     assert.deepEqual(told(text, apart), ['no-common-span: a: a.s1p']);
   });
 
+  it('tells a band that cannot be read once, and judges no goal over the span of the files instead', () => {
+    const faulty = 'ohmward: 1\nbands: {up: 870 .. 863 MHz}\nload: a.s1p\nladder: []\n';
+    assert.deepEqual(told(faulty.replace('a.s1p', '50 Ω')), ['range-upside-down: 870 .. 863 MHz']);
+    const { problem } = model(faulty, files({ 'a.s1p': flat }));
+    assert.deepEqual(problem?.bands.map(({ name, watch }) => [name, watch]), [['all', true]]);
+  });
+
   it('waits in silence for files that have not been read', () => {
     const text = 'ohmward: 1\nload: a.s1p\nladder: []\n';
     assert.deepEqual(told(text, new Map()), []);

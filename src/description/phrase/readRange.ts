@@ -52,6 +52,10 @@ export function rangeAt(s: Scanner, kinds: readonly QuantityKind[], extent: 'who
     complain(s, 'range-step-and-points', 'A range has either a step or a number of points, not both.', span);
     points = null;
   }
+  if (points && points.value < 2 && min.value < last.value) {
+    complain(s, 'too-few-points', 'Both ends are points of the range, so that there are 2 at least.', points.span);
+    points = null;
+  }
   if (step && step.value > 0) {
     const count = (last.value - min.value) / step.value;
     if (count > pointsAtMost) {

@@ -16,7 +16,10 @@ export function resolveBands(syntax: DescriptionSyntax, resolution: Pick<Resolut
     const frequencyHz = band.range ? rangePoints(band.range, bandPoints) : band.frequencyHz ? Float64Array.of(band.frequencyHz.value) : null;
     return frequencyHz && frequencyHz[0] > 0 ? [{ name: band.name.value, frequencyHz, watch: band.watch }] : [];
   });
-  return bands.length > 0 ? bands : commonSpan(syntax, resolution);
+  if (bands.length > 0) return bands;
+  if (syntax.bands.length === 0) return commonSpan(syntax, resolution);
+  // Bands are stated and none can be read, which is reported. What the files cover may be looked at, but no goal is judged over it.
+  return commonSpan(syntax, { ...resolution, report: () => undefined }).map((band) => ({ ...band, watch: true }));
 }
 
 function commonSpan(syntax: DescriptionSyntax, { files, report }: Pick<Resolution, 'files' | 'report'>): Band[] {

@@ -13,7 +13,9 @@ const overshootSlack = 1e-4;
 /** The cases of the load, each with the fixture that is removed from it: its own, else the common one; only from files. */
 export function resolveCases(syntax: DescriptionSyntax, resolution: Resolution): LoadCase[] {
   const common = syntax.fixture.map((element) => resolveElement(element, 'fixture', resolution).element);
-  const cases = syntax.load?.cases ?? [];
+  // Without a load, which is reported, what does not depend on it can still be told.
+  if (!syntax.load) return [{ name: null, load: { form: 'unknown', reason: 'it could not be read' }, fixture: [] }];
+  const { cases } = syntax.load;
   reportTwice(cases.flatMap((each) => each.name ?? []), 'case', resolution.report);
   const seen = new Set<string | null>();
   return cases.flatMap((each): LoadCase[] => {

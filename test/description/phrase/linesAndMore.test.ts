@@ -105,6 +105,7 @@ describe('bands and channels', () => {
     checkCarets(band, '863 .. 870 MHz step 2 MHz', '                    ^^^^^ step-misses-end');
     checkCarets(band, '863 .. 870 MHz step 0 MHz', '                    ^^^^^ step-not-positive');
     checkCarets(band, '863 .. 870 MHz step 1 Hz', '                    ^^^^ too-many-points');
+    checkCarets(band, '863 .. 870 MHz, 1 point', '                ^ too-few-points');
     checkCarets(band, '863 .. 870 MHz step 1 MHz, 8 points', `${'^'.repeat(35)} range-step-and-points`);
     checkCarets(band, '863 .. 870 MHz, 0 points', '                ^ points-not-positive');
     checkCarets(band, '863 .. 870 MHz, 1.5 points', '                ^^^ integer-expected');
