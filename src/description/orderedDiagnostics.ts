@@ -1,12 +1,18 @@
 import type { Diagnostic } from '../base/diagnostic';
 import { diagnosticsAtMost } from './limits';
 
-/** In the order of the text, each one once, the first so many; the last one says that more were left out. */
+/**
+ * In the order of the text, each one once, and only so many: the first errors, and what comes first of the others as far
+ * as there is room, so that no crowd of warnings hides an error.
+ */
 export function orderedDiagnostics(found: readonly Diagnostic[]): Diagnostic[] {
   const seen = new Set<string>();
   const unique = found.filter(({ code, span, message }) => {
     const mark = `${span.start} ${span.end} ${code} ${message}`;
     return !seen.has(mark) && seen.add(mark);
   });
-  return unique.sort((a, b) => a.span.start - b.span.start || a.span.end - b.span.end).slice(0, diagnosticsAtMost);
+  const inOrder = (some: readonly Diagnostic[]) => [...some].sort((a, b) => a.span.start - b.span.start || a.span.end - b.span.end);
+  const isError = ({ severity }: Diagnostic) => severity === 'error';
+  const byWeight = [...inOrder(unique.filter(isError)), ...inOrder(unique.filter((each) => !isError(each)))];
+  return inOrder(byWeight.slice(0, diagnosticsAtMost));
 }

@@ -60,6 +60,13 @@ describe('the problem of a description', () => {
     assert.deepEqual(told(text, apart), ['no-common-span: a: a.s1p']);
   });
 
+  it('hides no error behind a crowd of warnings', () => {
+    const doubtful = Array.from({ length: 150 }, (_, i) => `  - shunt L${i}: 4.7 GH\n`).join('');
+    const { diagnostics } = model(`ohmward: 1\n${bands}load: 50 Ω\nladder:\n${doubtful}  - series C1: 1 pf\n`);
+    assert.equal(diagnostics.length, 100);
+    assert.deepEqual(diagnostics.filter(({ severity }) => severity === 'error').map(({ code }) => code), ['unit-unknown']);
+  });
+
   it('tells a band that cannot be read once, and judges no goal over the span of the files instead', () => {
     const faulty = 'ohmward: 1\nbands: {up: 870 .. 863 MHz}\nload: a.s1p\nladder: []\n';
     assert.deepEqual(told(faulty.replace('a.s1p', '50 Ω')), ['range-upside-down: 870 .. 863 MHz']);

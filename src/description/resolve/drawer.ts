@@ -3,7 +3,7 @@ import type { Diagnostic } from '../../base/diagnostic';
 import type { Located } from '../../base/span';
 import type { NetworkData } from '../../network/networkData';
 import type { PartKind } from '../../network/part';
-import { familyMembersAtMost } from '../limits';
+import { diagnosticsAtMost, familyMembersAtMost } from '../limits';
 import { plainPhrase } from '../phrase/phrase';
 import { readPartPhrase } from '../phrase/readPart';
 import type { FiguresSyntax } from '../syntax';
@@ -23,7 +23,7 @@ const kindWords: Readonly<Record<string, PartKind>> = {
 };
 
 /** Mistakes of one file that are told one by one. */
-const mistakesAtMost = 5;
+const mistakesAtMost = diagnosticsAtMost;
 
 type Base = Pick<Resolution, 'files' | 'report' | 'missing'>;
 

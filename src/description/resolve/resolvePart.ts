@@ -12,6 +12,9 @@ export function resolvePart(syntax: PartSyntax, resolution: Resolution): Part | 
   const kind = partKind(syntax, named, resolution);
   const family = named && (named.family.kind === kind || named.family.kind === 'mixed') ? named : null;
   const { value } = syntax;
+  if (syntax.label && !syntax.from) {
+    resolution.report(problemAt('part-without-family', `«part ${syntax.label.value}» picks a part out of a drawer, which «from FAMILY» has to name.`, syntax.label.span));
+  }
   if (!kind || value.form === 'faulty') return null;
   if (value.form === 'solve' || value.form === 'tunable') {
     const word = value.form === 'solve' ? 'solve' : 'tunable';
