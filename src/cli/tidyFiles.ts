@@ -18,14 +18,12 @@ export function tidyFiles(paths: readonly string[], options: CallOptions, around
     }
     const faulty = readDescription(before, { expressions: true }).diagnostics.find((diagnostic) => diagnostic.severity === 'error');
     const after = tidy(before).text;
-    if (after === before) {
-      if (faulty) {
-        const { line, character } = lineMap(before).positionAt(faulty.span.start);
-        around.error(`${shownPath(path)}:${line + 1}:${character + 1}: error: ${faulty.message} (${faulty.code})\n`);
-        failed = true;
-      }
-      continue;
+    if (faulty) {
+      const { line, character } = lineMap(before).positionAt(faulty.span.start);
+      around.error(`${shownPath(path)}:${line + 1}:${character + 1}: error: ${faulty.message} (${faulty.code})\n`);
+      failed = true;
     }
+    if (after === before) continue;
     if (options.verify) {
       around.error(`${shownPath(path)}: would be laid out differently\n`);
       failed = true;

@@ -18,7 +18,7 @@ export interface Literal {
 }
 
 const number = /[+\-−]?(?:\d+(?:\.(?!\.)\d*)?|\.\d+)(?:[eE][+\-−]?\d+)?/y;
-const unitWord = /[ \u00a0]?(dB\/m(?![\p{L}\d])|[\p{L}\u2126]+|°|%)/uy;
+const unitWord = /\s*(dB\/m(?![\p{L}\d])|[\p{L}\u2126]+|°|%)/uy;
 const codeInside = /[+\-−]?(\d*)([RKkMGLpnuµμmf])(\d+)(?![\p{L}\d.])/uy;
 const barePrefix = /[pnuµμmkKMGRf](?![\p{L}\d\u2126])/uy;
 
@@ -64,7 +64,7 @@ export function literalAt(text: string, at: number, expected: readonly Dimension
   const word = match(unitWord, text, numberEnd);
   const spelled = word?.[1] ?? '';
   const isFollower = followers.has(spelled) && !(spelled === 'in' && expected.includes('length')) && dimensionOf(spelled) === (spelled === 'in' ? 'length' : null);
-  if (!word || isFollower || (spelled !== '' && unitOf(spelled) === null && /^[ \u00a0]/.test(word[0]) && !looksLikeUnit(spelled))) {
+  if (!word || isFollower || (spelled !== '' && unitOf(spelled) === null && /^\s/.test(word[0]) && !looksLikeUnit(spelled))) {
     return { start: at, end: numberEnd, digits, prefixExponent: 0, form: 'bare', letter: '', unit: '', unitStart: numberEnd };
   }
   return { start: at, end: numberEnd + word[0].length, digits, prefixExponent: 0, form: 'unit', letter: '', unit: spelled, unitStart: numberEnd + word[0].length - spelled.length };

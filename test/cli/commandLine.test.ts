@@ -322,6 +322,15 @@ describe('command line', () => {
     });
   });
 
+  it('fails where a file to be laid out has errors, whether it changes or not', async () => {
+    change('series L1: 10 nH', 'series   L1:    10 nh');
+    for (const what of ['changed', 'left as it is']) {
+      const { code, error } = await run('tidy', 'orchard');
+      assert.equal(code, 1, what);
+      assert.match(error, /frost\.match\.yaml:20:\d+: error: .*nH/);
+    }
+  });
+
   it('writes a report that needs nothing from elsewhere', async () => {
     const { code } = await run('report', '.', '-o', 'deep/report.html');
     assert.equal(code, 0);

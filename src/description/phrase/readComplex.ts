@@ -4,11 +4,11 @@ import { quantityAt } from './readQuantity';
 import { complain, peek, replaceBy, skipBlanks, spanOf, take, takeWord, type Scanner } from './scanner';
 
 const number = '(?:\\d+(?:\\.\\d*)?|\\.\\d+)(?:[eE][+\\-−]?\\d+)?';
-const unit = '(?:[ \\u00a0]?[\\p{L}\\u2126]+)?';
+const unit = '(?:\\s*[\\p{L}\\u2126]+)?';
 /** `18 - j37`, `-j37`, `j40`, with or without the unit. */
 const rectangular = new RegExp(`(?:([+\\-−]?${number})(${unit})\\s*([+\\-−])\\s*|([+\\-−]?))[jJ]\\s?(${number})`, 'uy');
 /** `18-37j`, `18 + 37i`, `37j`: the imaginary unit behind. */
-const behind = new RegExp(`(?:([+\\-−]?${number})\\s*([+\\-−])\\s*|([+\\-−]?))(${number})\\s?[ijIJ](?![\\p{L}\\d])(?:[ \\u00a0]?(ohm|[kmM]?[Ω\\u2126])(?![\\p{L}]))?`, 'uy');
+const behind = new RegExp(`(?:([+\\-−]?${number})\\s*([+\\-−])\\s*|([+\\-−]?))(${number})\\s?[ijIJ](?![\\p{L}\\d])(?:\\s*(ohm|[kmM]?[Ω\\u2126])(?![\\p{L}]))?`, 'uy');
 
 export const complexFollows = (s: Scanner): boolean => peek(s, rectangular) || peek(s, behind);
 

@@ -58,7 +58,7 @@ function branchAt(s: Scanner, keyword: 'series' | 'shunt', name: string): Elemen
   skipBlanks(s);
   const start = s.at;
   // A bridge stands in any position, whatever its designator promises.
-  if (take(s, /0+(?:\.0*)?(?:R|[ \u00a0]?[kmM]?(?:Ω|\u2126|ohm))(?![\p{L}\d])(?=\s*$)/uy)) return bridge(s, keyword, spanOf(s, start, s.at));
+  if (take(s, /0+(?:\.0*)?(?:R|\s*[kmM]?(?:Ω|\u2126|ohm))(?![\p{L}\d])(?=\s*$)/uy)) return bridge(s, keyword, spanOf(s, start, s.at));
   const pair = takeWord(s, 'pair');
   const branch = impedanceAt(s, severalFollow(s) ? null : kindOfDesignator(name), 'parts');
   if (branch.form === 'faulty') return { form: 'faulty' };

@@ -74,7 +74,7 @@ export function quantityAt(s: Scanner, kinds: readonly QuantityKind[], unitless:
 }
 
 function decimalComma(text: string, literal: Literal): { comma: number; end: number } | null {
-  const pattern = /[+\-−]?\d+(,)\d+(?:[ \u00a0]?[\p{L}\u2126%°]+)?/uy;
+  const pattern = /[+\-−]?\d+(,)\d+(?:\s?[\p{L}\u2126%°]+)?/uy;
   pattern.lastIndex = literal.start;
   const found = pattern.exec(text);
   return found ? { comma: literal.start + found[0].indexOf(','), end: literal.start + found[0].length } : null;

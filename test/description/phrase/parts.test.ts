@@ -17,7 +17,7 @@ const figuresOf = (reader: Reader<unknown>, text: string) => (clean(reader, text
 describe('values of parts', () => {
   for (const [text, value] of [
     ['4.7 nH', 4.7e-9], ['4.7nH', 4.7e-9], ['4700 pH', 4.7e-9], ['4n7', 4.7e-9], ['5.6n', 5.6e-9], ['10p', 10e-12], ['n47', 0.47e-9], ['5.6 µH', 5.6e-6], ['5.6 μH', 5.6e-6], ['5.6 uH', 5.6e-6], ['1µ0', 1e-6], ['.5 nH', 0.5e-9], ['5. nH', 5e-9],
-    ['1e-9 H', 1e-9], ['1.2e1 nH', 12e-9], ['4.7\u00a0nH', 4.7e-9],
+    ['1e-9 H', 1e-9], ['1.2e1 nH', 12e-9], ['4.7\u00a0nH', 4.7e-9], ['4.7   nH', 4.7e-9], ['4.7\u202fnH', 4.7e-9],
   ] as const) it(`an inductor of ${text}`, () => assert.equal(valueOf(inductor, text), value));
 
   // IEC 60062: the letter stands in the place of the point (rows E8 and E9 of the checks; table in a public encyclopedia).
