@@ -1,7 +1,7 @@
 import { decibels, returnLossDb } from '../network/figures';
 import type { BandCaseResult, BandResult } from './evaluation';
 import { placeOfBand } from './place';
-import { aboveTotal, vswrOf } from './reflectionFigures';
+import { aboveTotal, settledReflection, vswrOf } from './reflectionFigures';
 import type { Sampler, Trace } from './sampler';
 
 /** The worst of each band in each case, watched bands included. */
@@ -24,7 +24,7 @@ function bandCase(trace: Trace): BandCaseResult {
   let at = 0;
   let least = Infinity;
   for (let k = 0; k < gain.length; k++) {
-    const size = Math.hypot(reflection.re[k], reflection.im[k]);
+    const size = settledReflection(Math.hypot(reflection.re[k], reflection.im[k]));
     if (size > worst) {
       worst = size;
       at = k;

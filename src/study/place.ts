@@ -45,5 +45,6 @@ export function placesOf(goal: Goal, problem: Pick<Problem, 'bands'>): readonly 
   const band = problem.bands.find((each) => each.name === place.band);
   if (!band) return `there is no band called ${place.band}`;
   if (place.form === 'band') return [placeOfBand(band)];
-  return [{ key: `${place.order} x ${band.name}`, frequencyHz: band.frequencyHz.map((each) => each * place.order), band: null }];
+  // A multiple of a band arises while the source works in that band, so that its source counts and not that of what lies nearby.
+  return [{ key: `${place.order} x ${band.name}`, frequencyHz: band.frequencyHz.map((each) => each * place.order), band: band.name }];
 }

@@ -1,7 +1,7 @@
 import { decibels, returnLossDb } from '../network/figures';
 import { impedanceOf } from '../network/immittance';
 import type { Goal, GoalQuantity } from './goal';
-import { aboveTotal, mismatchLossOf, vswrOf } from './reflectionFigures';
+import { aboveTotal, mismatchLossOf, settledReflection, vswrOf } from './reflectionFigures';
 import type { Stress } from './ladderStress';
 import type { Trace } from './sampler';
 import { wantsLarge } from './verdict';
@@ -37,7 +37,7 @@ const gainUnknown = 'the gain has no value there';
 
 function reflectionLike(trace: Trace, figure: (magnitude: number) => number): PointValues {
   const { re, im } = trace.reflection();
-  return { values: re.map((value, k) => figure(Math.hypot(value, im[k]))), reasonOfNaN: aboveTotal };
+  return { values: re.map((value, k) => figure(settledReflection(Math.hypot(value, im[k])))), reasonOfNaN: aboveTotal };
 }
 
 /** A share (0 … 1) as %, dB or itself. */

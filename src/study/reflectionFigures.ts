@@ -10,6 +10,9 @@ export const vswrOf = (magnitude: number): number => totalOr(magnitude, vswr);
 /** Mismatch loss of |Γ| in dB: infinite at total reflection (within rounding), NaN above it. */
 export const mismatchLossOf = (magnitude: number): number => totalOr(magnitude, mismatchLossDb);
 
+/** |Γ| as it is given out: 1 where only rounding puts total reflection above it. */
+export const settledReflection = (magnitude: number): number => (magnitude > 1 && magnitude <= 1 + totalReflectionSlack ? 1 : magnitude);
+
 function totalOr(magnitude: number, figure: (magnitude: number) => number): number {
   if (magnitude < 1 - totalReflectionSlack) return figure(magnitude);
   return magnitude <= 1 + totalReflectionSlack ? Infinity : NaN;

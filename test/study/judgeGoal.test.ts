@@ -213,6 +213,14 @@ describe('what is not known', () => {
     assert.deepEqual(unsolvedElements(lossless), []);
     assert.equal(evaluate(lossless).ok, true);
   });
+  it('total reflection is not more than total by rounding', () => {
+    for (let nanohenry = 1; nanohenry <= 60; nanohenry++) {
+      const problem = problemOf({ load: { form: 'short' }, bands: [band('b', points(868e6))], ladder: [series('L1', inductor(nanohenry * 1e-9))] });
+      assert.deepEqual([judge(problem, goalOf('reflection', '<=', 1)).ok, judge(problem, goalOf('return loss', '>=', 0)).ok], [true, true]);
+      const [worst] = evaluate({ ...problem, goals: [] }).bands[0].cases;
+      assert.ok(worst.worstReflection! <= 1 && worst.worstReturnLossDb! >= 0);
+    }
+  });
   it('a source that cannot be read', () => {
     const result = judge({ ...lossless, source: { impedance: { form: 'unknown', reason: 'radio.s1p is missing' }, byBand: new Map() } }, goalOf('gain', '>=', -1));
     assert.equal(result.reason, 'source: radio.s1p is missing');

@@ -19,6 +19,11 @@ describe('rejection', () => {
     near(result.value, lossDb(1e9, 100) - lossDb(1e9, 100), 1e-9, 'the worst point is at twice the lowest edge');
     assert.equal(result.frequencyHz, 1e9);
   });
+  it('is that of the band that is multiplied, with its own source', () => {
+    const source = { impedance: ohms(50), byBand: new Map([['high', ohms(20)]]) };
+    const place = { form: 'harmonic', order: 2.1, band: 'low' } as const; // up to 2.1 GHz, next to the other band
+    near(judge({ ...problem, source }, goalOf('insertion loss', '<=', 3, { place })).value, lossDb(2.1e9, 100), 1e-9);
+  });
   it('against another band, else the first', () => {
     const at = { form: 'frequency', frequencyHz: 4e9 } as const;
     near(judge(problem, goalOf('rejection', '>=', 3, { place: at, against: 'high' })).value, lossDb(4e9, 100) - lossDb(2e9, 100), 1e-9);
