@@ -1,14 +1,23 @@
 import type { Diagnostic } from '../base/diagnostic';
-import { lineMap } from '../base/lineMap';
+import { lineMap, type LineMap } from '../base/lineMap';
 import type { Description, Model } from '../description/description';
 import type { GoalSyntax } from '../description/syntax';
 import type { Evaluation } from '../study/evaluation';
 import type { Goal } from '../study/goal';
 import { goalDetail, goalValueText } from './goalText';
 
+const known = new WeakMap<Description, LineMap>();
+
+/** Goals are looked up one by one on every keystroke; the lines of one text are counted once. */
+function linesOf(description: Description): LineMap {
+  const lines = known.get(description) ?? lineMap(description.syntax.text);
+  known.set(description, lines);
+  return lines;
+}
+
 /** The place in the description that a goal of the model was read from. */
 export function goalSyntaxOf(description: Description, goal: Goal): GoalSyntax | null {
-  const lines = lineMap(description.syntax.text);
+  const lines = linesOf(description);
   return description.syntax.goals.find((syntax) => syntax.text === goal.text && lines.positionAt(syntax.span.start).line + 1 === goal.line) ?? null;
 }
 

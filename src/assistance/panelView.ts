@@ -15,14 +15,17 @@ export interface PanelContext {
   readonly markerHz: number | null;
 }
 
-/** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study, or to draw for mistakes. */
+/** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
+export function isDrawable({ evaluation, diagnostics }: Assessment): boolean {
+  if (!evaluation) return false;
+  return !diagnostics.some(({ severity }) => severity === 'error') || evaluation.traces.some(({ known }) => known.includes(1));
+}
+
+/** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study. */
 export function panelView(assessment: Assessment, context: PanelContext): PanelView | null {
   const { description, model, evaluation } = assessment;
   const { problem } = model;
   if (!problem || !evaluation) return null;
-  // With mistakes and not one point of any trace, the last good picture says more than an empty chart.
-  const faulty = assessment.diagnostics.some(({ severity }) => severity === 'error');
-  if (faulty && !evaluation.traces.some(({ known }) => known.includes(1))) return null;
   const markerHz = context.markerHz ?? defaultMarkerHz(problem);
   return {
     title: problem.title ?? description.syntax.title?.value ?? context.fileName,

@@ -19,5 +19,3 @@ export const bandwidthPrecision = 1e-9;
 /** |Γ| this near to 1 is a rounded 1: total reflection. */
 export const totalReflectionSlack = 1e-12;
 
-/** |Γ| after a fixture is removed may be above 1 by this much: what rounding in a file of six digits makes of a lossless load. */
-export const fixtureOvershootSlack = 1e-5;

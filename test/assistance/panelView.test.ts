@@ -1,13 +1,16 @@
 import assert from 'node:assert/strict';
-import { panelView } from '../../src/assistance/panelView';
+import { isDrawable, panelView } from '../../src/assistance/panelView';
 import { sampleAssessment, sampleView } from '../page/sampleView';
 
 const view = (change: (text: string) => string) => panelView(sampleAssessment(change), { fileName: 'frost.match.yaml', pinned: false, markerHz: null });
 
 describe('the panel’s view', () => {
-  it('is none where mistakes leave nothing to draw, so that the last good picture stays', () => {
-    assert.equal(view((text) => text.replace('\nload:', '\nlode:')), null);
-    assert.equal(view((text) => text.replace('10 nH', '10 nh')), null);
+  it('is no picture to draw where mistakes leave no trace, though all that is known is in it', () => {
+    for (const slip of [(text: string) => text.replace('\nload:', '\nlode:'), (text: string) => text.replace('10 nH', '10 nh')]) {
+      assert.equal(isDrawable(sampleAssessment(slip)), false);
+      assert.ok((view(slip)?.problems.length ?? 0) > 0);
+    }
+    assert.equal(isDrawable(sampleAssessment()), true);
   });
 
   it('shows what can still be computed beside a mistake', () => {

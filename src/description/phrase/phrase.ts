@@ -1,5 +1,4 @@
 import type { Report } from '../../base/diagnostic';
-import type { Span } from '../../base/span';
 
 /**
  * One scalar of a description: its text without quotes or block-style indentation, and the way back from an offset in it
@@ -9,8 +8,6 @@ export interface Phrase {
   readonly text: string;
   at(offset: number): number;
 }
-
-export const phraseSpan = (phrase: Phrase, start: number, end: number): Span => ({ start: phrase.at(start), end: phrase.at(end) });
 
 /** The whole of `text` as a phrase that starts at `offset` of the document. */
 export const plainPhrase = (text: string, offset = 0): Phrase => ({ text, at: (i) => offset + i });

@@ -1,7 +1,7 @@
 import type { FiguresSyntax, Quantity, ToleranceSyntax } from '../syntax';
 import type { PartKind } from '../../network/part';
 import { quantityAt, usualUnit, type QuantityKind } from './readQuantity';
-import { complain, nextWord, peek, replaceBy, spanOf, skipBlanks, take, takeWord, type Scanner } from './scanner';
+import { complain, peek, replaceBy, spanOf, skipBlanks, take, takeWord, type Scanner } from './scanner';
 
 export const noFigures: FiguresSyntax = {
   tolerance: null, q: null, qAtHz: null, esrOhm: null, eslH: null, srfHz: null, ratedVoltageV: null, ratedCurrentA: null, ratedPowerW: null,
@@ -89,7 +89,7 @@ function checked(s: Scanner, figures: Draft, kind: PartKind | null): FiguresSynt
 
 const signed = /±|\+\/-|\+-/y;
 
-export const toleranceFollows = (s: Scanner): boolean => peek(s, /(?:±|\+\/-|\+-)|[+\-−]\d[\d.]*\s*%/y);
+const toleranceFollows = (s: Scanner): boolean => peek(s, /(?:±|\+\/-|\+-)|[+\-−]\d[\d.]*\s*%/y);
 
 function toleranceAt(s: Scanner, kind: PartKind | null): ToleranceSyntax | null {
   skipBlanks(s);
@@ -121,5 +121,3 @@ function bounded(s: Scanner, tolerance: ToleranceSyntax): ToleranceSyntax | null
   if (wrong) complain(s, 'not-physical', wrong, tolerance.span);
   return wrong ? null : tolerance;
 }
-
-export const nextIsFigure = (s: Scanner): boolean => toleranceFollows(s) || ['Q', 'ESR', 'ESL', 'SRF', 'rated'].includes(nextWord(s)?.value ?? '');

@@ -1,7 +1,7 @@
 import * as vscode from 'vscode';
 import { elementAt } from '../../assistance/elementAt';
 import { markerView } from '../../assistance/markerView';
-import { panelView, problemViews } from '../../assistance/panelView';
+import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
 import { readMarkerText } from '../../assistance/readMarkerText';
 import { setValue, steppedValue } from '../../assistance/steppedValue';
 import { decodeToHost } from '../../messages/decodePanel';
@@ -69,6 +69,8 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   let staleTimer: ReturnType<typeof setTimeout> | undefined;
   // A document that is closed and opened again counts its versions from 1, and the page drops what looks older.
   let versionsBefore = 0;
+  /** The description whose good picture the page holds. */
+  let pictured: string | null = null;
   let lastVersion = 0;
   const versionOf = (documentVersion: number) => (lastVersion = Math.max(lastVersion, versionsBefore + documentVersion));
 
@@ -79,8 +81,13 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
     const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz });
-    if (view !== null) send({ type: 'view', document: idOf(document), version: versionOf(version), view });
-    else send({ type: 'stale', document: idOf(document), version: versionOf(version), reason: 'The text cannot be evaluated as it is.', problems: problemViews(assessment) });
+    // What can still be computed is shown, unless a better picture of the same description stands there.
+    if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
+      if (isDrawable(assessment)) pictured = idOf(document);
+      send({ type: 'view', document: idOf(document), version: versionOf(version), view });
+    } else {
+      send({ type: 'stale', document: idOf(document), version: versionOf(version), reason: 'The text cannot be evaluated as it is.', problems: problemViews(assessment) });
+    }
   };
   const sendAll = () => {
     if (shown === null) {
@@ -94,6 +101,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const show = (document: vscode.TextDocument | null) => {
     if (document === shown) return;
     shown = document;
+    pictured = null;
     versionsBefore = lastVersion;
     highlight.clear();
     panel.title = document === null ? 'Ohmward' : `Ohmward: ${fileNameOf(document)}`;
@@ -130,6 +138,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
 
   const handle = async (message: ToHost): Promise<void> => {
     if (message.type === 'ready') {
+      pictured = null;
       sendAll();
       return;
     }
