@@ -46,6 +46,8 @@ export interface TwoElementAnswer {
 
 /** Reactances below this share of the resistance beside them are none: what they change is far below |Γ| = 1e-9. */
 const nothing = 1e-11;
+/** Of a difference of two equal numbers. */
+const roundings = 8 * Number.EPSILON;
 /** Above 1 by this much is still 1: the border of what a form reaches, after rounding. */
 const borderSlack = 1e-13;
 
@@ -67,8 +69,8 @@ export function twoElementMatches(load: Complex, source: Complex, frequencyHz: n
       const roots = rootsOf(near.re, far.re);
       for (const root of roots) {
         const size = near.re * near.re + root * root;
-        const firstImmittance = tidied(root - near.im, near.re + Math.abs(near.im));
-        const secondImmittance = tidied(far.im + root / size, far.re + Math.abs(far.im));
+        const firstImmittance = tidied(root - near.im, near);
+        const secondImmittance = tidied(far.im + root / size, far);
         found.push([
           ...partOf(first, firstImmittance, frequencyHz),
           ...partOf(first === 'series' ? 'shunt' : 'series', secondImmittance, frequencyHz),
@@ -102,7 +104,9 @@ function rootsOf(near: number, far: number): number[] {
   return root <= nothing * near ? [0] : [root, -root];
 }
 
-const tidied = (value: number, scale: number): number => (Math.abs(value) <= nothing * scale ? 0 : value);
+/** The reactance beside it counts by its rounding alone: a share of a large one may well matter. */
+const tidied = (value: number, beside: Complex): number =>
+  (Math.abs(value) <= nothing * beside.re + roundings * Math.abs(beside.im) ? 0 : value);
 
 function partOf(orientation: 'series' | 'shunt', immittance: number, frequencyHz: number): ReactivePart[] {
   if (immittance === 0) return [];
