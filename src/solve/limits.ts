@@ -2,3 +2,15 @@
 export const limitReactances = 4;
 /** Above this mismatch between load and first-order model there is no limit: what follows from the model says little. */
 export const poorFit = 0.1;
+/** Up to so many ladders all are tried: a search would not be faster. */
+export const tryAllUpTo = 300_000;
+/** Points that decide early about a ladder. */
+export const decisivePoints = 4;
+/** Load's sides of a ladder that are tabulated at once. */
+export const prefixesAtOnce = 500_000;
+/** Work of one search, in boxes, points and ladders looked at; what is found by then is given as not proved. */
+export const searchNodes = 600_000_000;
+/** A condition that needs a whole evaluation counts as so many nodes. */
+export const nodesOfEvaluation = 2_000;
+/** Values of each kind in a slot of the thinned catalogue that is searched first, by the number of slots. */
+export const thinnedTo: readonly number[] = [18, 18, 18, 18, 18, 10, 7];
