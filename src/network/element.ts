@@ -26,6 +26,8 @@ export type Element =
       readonly form: 'unsolved'; readonly name: string; readonly orientation: Orientation; readonly kind: PartKind | 'line' | 'stub' | null;
       /** True where two equal parts are asked for, one in each leg; what is chosen then makes a branch with `pair`. */
       readonly pair?: boolean;
+      /** Of a stub whose length is asked for. */
+      readonly end?: 'open' | 'short';
     }
   /** Could not be read; reported elsewhere. Everything beyond it is not known, for this reason. */
   | { readonly form: 'faulty'; readonly name: string; readonly orientation: Orientation; readonly reason: string };

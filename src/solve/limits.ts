@@ -14,3 +14,6 @@ export const searchNodes = 600_000_000;
 export const nodesOfEvaluation = 2_000;
 /** Values of each kind in a slot of the thinned catalogue that is searched first, by the number of slots. */
 export const thinnedTo: readonly number[] = [18, 18, 18, 18, 18, 10, 7];
+/** A value that may be anything is first looked for on a grid of so many a decade; a length at so many places of its range. */
+export const gridPerDecade = 24;
+export const lengthsTried = 72;

@@ -10,7 +10,12 @@ export interface ValueRange {
 export type Choice =
   | { readonly form: 'continuous'; readonly kind: PartKind | 'line' | 'stub'; readonly range: ValueRange; readonly template: import('../network/part').Part | import('../network/line').Line }
   /** One member of the problem's family of that name, or of a series that the entry itself names (then `family` is null). */
-  | { readonly form: 'catalogue'; readonly kind: PartKind; readonly family: string | null; readonly parts: readonly import('../network/part').Part[] };
+  | {
+      readonly form: 'catalogue'; readonly kind: PartKind; readonly family: string | null; readonly parts: readonly import('../network/part').Part[];
+      /** By part: the drawer's designation where the value alone means another part, and how many are at hand; null where unlimited. */
+      readonly labels: readonly (string | null)[];
+      readonly counts: readonly (number | null)[];
+    };
 
 /** One element of the ladder that is `solve`, or that solving again may reconsider. */
 export interface Unknown {

@@ -78,7 +78,9 @@ function resolveLineElement(name: string, keyword: ElementSyntax['keyword'], lin
     const middle = range ? Math.sqrt(Math.max(range.min.value, 1e-6) * range.max.value) : 0.01;
     const template = resolveLine(line, resolution, middle);
     if (!template) return null;
-    const element: Element = { form: 'unsolved', name, orientation: kind === 'line' ? 'through' : 'shunt', kind };
+    const element: Element = kind === 'line'
+      ? { form: 'unsolved', name, orientation: 'through', kind }
+      : { form: 'unsolved', name, orientation: 'shunt', kind, end: keyword === 'stub open' ? 'open' : 'short' };
     return { element, choices: lineChoices(kind, range, template, resolution), mayOmit: false, known: false };
   }
   const made = resolveLine(line, resolution);

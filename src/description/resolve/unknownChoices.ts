@@ -33,21 +33,31 @@ export function partChoices(
     if (solve.series) {
       const values = isSeriesName(solve.series.value) ? seriesBetween(solve.series.value, reach.min, reach.max) : [];
       const parts = values.map((value) => makePart(each, value, figures));
-      return parts.length > 0 ? [{ form: 'catalogue', kind: each, family: null, parts }] : [];
+      return parts.length > 0 ? [{ form: 'catalogue', kind: each, family: null, parts, labels: parts.map(() => null), counts: parts.map(() => null) }] : [];
     }
     return [{ form: 'continuous', kind: each, range: reach, template: makePart(each, Math.sqrt(reach.min * reach.max), figures) }];
   });
 }
 
-/** The members of one kind, inside a range where one is stated, each value once: of several parts with one value the first. */
+/**
+ * The members of one kind, inside a range where one is stated, as long as there are any left. A value means the first part of
+ * that value; the others are to be had by their label, and without one not at all.
+ */
 export function familyChoices(family: ResolvedFamily, kind: PartKind, range: ValueRange | null, own: FiguresSyntax = noFigures): Choice[] {
   const slack = 1e-9;
   const seen = new Set<number>();
-  const parts = family.members
-    .filter((member) => member.kind === kind && !seen.has(member.value) && seen.add(member.value))
-    .filter((member) => !range || (member.value >= range.min * (1 - slack) && member.value <= range.max * (1 + slack)))
-    .map((member) => makePart(kind, member.value, mergeFigures(own, member.figures), member.data));
-  return parts.length > 0 ? [{ form: 'catalogue', kind, family: family.family.name, parts }] : [];
+  const members = family.members
+    .filter((member) => member.kind === kind)
+    .map((member) => ({ member, first: !seen.has(member.value) && seen.add(member.value) !== null }))
+    .filter(({ member, first }) => member.count !== 0 && (first || member.label !== null))
+    .filter(({ member }) => !range || (member.value >= range.min * (1 - slack) && member.value <= range.max * (1 + slack)));
+  if (members.length === 0) return [];
+  return [{
+    form: 'catalogue', kind, family: family.family.name,
+    parts: members.map(({ member }) => makePart(kind, member.value, mergeFigures(own, member.figures), member.data)),
+    labels: members.map(({ member, first }) => (first ? null : member.label)),
+    counts: members.map(({ member }) => member.count),
+  }];
 }
 
 function reportNothing(name: { value: string; span: { start: number; end: number } }, kind: PartKind | null, family: ResolvedFamily, range: ValueRange | null, { report }: Resolution): void {

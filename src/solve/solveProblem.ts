@@ -1,0 +1,73 @@
+import { decibels } from '../network/figures';
+import type { Goal } from '../study/goal';
+import type { Problem } from '../study/problem';
+import { studiedLadder } from '../study/studiedLadder';
+import { aimOf, isLossless, type Aim } from './aim';
+import { catalogueCandidates, type Candidate } from './catalogueCandidates';
+import { conditionsOf } from './conditions';
+import { fillForm, itemsAt } from './fillForm';
+import { formsOf, positionsOf } from './forms';
+import { searchNodes } from './limits';
+import { compareRanked } from './ranking';
+import { defaultTop, type Solution, type SolveOptions, type SolveResult } from './solution';
+import { solutionOf } from './solutionOf';
+
+/**
+ * Fills in what a problem leaves unknown: the best ladders first (`compareRanked`), and the best for each number of parts.
+ * From catalogues the answer is the best that exists, and `proved` says whether that is proved. The same problem has the same
+ * answer on every machine. Never throws but for what `onProgress` throws.
+ */
+export function solveProblem(problem: Problem, options: SolveOptions = {}): SolveResult {
+  const nothing = (reason: string): SolveResult => ({ solutions: [], byParts: [], reason, hints: [], outOfReach: [] });
+  const whole = problem.ladderTask !== null && problem.ladder.length === 0;
+  if (!whole && problem.unknowns.length === 0) return nothing('nothing is left to solve');
+  const faulty = whole ? undefined : problem.ladder.find(({ form }) => form === 'faulty');
+  if (faulty) return nothing(`${faulty.name} could not be read`);
+  const forms = formsOf(problem);
+  if (forms.length === 0) return nothing('there is nothing to choose from');
+  const lossless = !studiedLadder(problem).some((element) => !isLossless(element))
+    && forms.every((form) => positionsOf(form).every(({ items }) => items.every(({ element }) => isLossless(element))));
+  const aim = aimOf(problem, lossless);
+  if (aim.points.count === 0) return nothing(aim.notKnown[0]?.reason ?? 'the load is not known in any band');
+  const top = options.top ?? defaultTop;
+  const candidates = catalogueCandidates({
+    forms, points: aim.points, conditions: conditionsOf(problem), size: top, nodeLimit: searchNodes,
+    onProgress: (share, excess) => options.onProgress?.(share, excess === null ? null : -decibels(excess)),
+  });
+  if (candidates.length === 0) return nothing('no ladder can be built from what is left of the parts');
+  return { ...ranked(problem, candidates, aim, top), reason: null, hints: hintsOf(problem, aim, lossless), outOfReach: [] };
+}
+
+function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, top: number): Pick<SolveResult, 'solutions' | 'byParts'> {
+  const order = [...candidates].sort((a, b) => compareRanked(a, b, aim.byDefault));
+  const made = new Map<Candidate, Solution>();
+  const make = (candidate: Candidate): Solution => {
+    const found = made.get(candidate);
+    if (found) return found;
+    const { solved, ladder } = fillForm(candidate.form, itemsAt(candidate.form, candidate.choice));
+    const equals = order.filter(({ parts, missed }) => parts === candidate.parts && missed === candidate.missed);
+    const best = equals.reduce((least, each) => (each.excess < least.excess ? each : least), candidate);
+    const { proved, nodes } = candidate;
+    const own = solutionOf(problem, solved, ladder, { proved, nodes, boundDb: null });
+    const boundDb = !proved ? null : best === candidate ? own.marginDb : make(best).marginDb;
+    const solution = { ...own, boundDb };
+    made.set(candidate, solution);
+    return solution;
+  };
+  const counts = [...new Set(order.map(({ parts }) => parts))].sort((a, b) => a - b);
+  return {
+    solutions: order.slice(0, top).map(make),
+    byParts: counts.map((count) => make(order.find(({ parts }) => parts === count) as Candidate)),
+  };
+}
+
+function hintsOf(problem: Problem, aim: Aim, lossless: boolean): string[] {
+  const hints = aim.notKnown.map(({ goal, reason }) => `«${goal.text}» cannot be told and was left aside: ${reason}.`);
+  if (!lossless && problem.goals.some(asksReflection) && !problem.goals.some(asksGain)) {
+    hints.push('The parts have loss, and a lossy match reflects little and passes little: a goal on gain, such as «gain >= -1 dB», would tell the two apart.');
+  }
+  return hints;
+}
+
+const asksReflection = ({ quantity }: Goal): boolean => quantity === 'return loss' || quantity === 'VSWR' || quantity === 'reflection' || quantity === 'mismatch loss';
+const asksGain = ({ quantity }: Goal): boolean => quantity === 'gain' || quantity === 'insertion loss' || quantity === 'efficiency';
