@@ -17,7 +17,9 @@ const leafSize = 12;
 export function boxTree(coordinates: Float64Array, count: number, dimensions: number): BoxTree {
   const order = new Int32Array(count);
   for (let i = 0; i < count; i++) order[i] = i;
-  split(coordinates, dimensions, order, 0, count, 0);
+  // Where each node is cut, by the position of the cut: no two nodes are cut at the same one.
+  const cuts = new Float64Array(count);
+  split(coordinates, dimensions, order, cuts, 0, count, 0);
   const sorted = new Float64Array(count * dimensions);
   for (let i = 0; i < count; i++) {
     for (let d = 0; d < dimensions; d++) sorted[i * dimensions + d] = coordinates[order[i] * dimensions + d];
@@ -50,7 +52,7 @@ export function boxTree(coordinates: Float64Array, count: number, dimensions: nu
       } else {
         const d = depth % dimensions;
         const middle = (start + end) >> 1;
-        const value = sorted[middle * dimensions + d];
+        const value = cuts[middle];
         depth++;
         if (lower[d] <= value) {
           if (upper[d] >= value) {
@@ -76,12 +78,13 @@ export function boxTree(coordinates: Float64Array, count: number, dimensions: nu
 }
 
 /** Orders start … end so that the middle one is where sorting by the depth's dimension would put it, and so on in both halves. */
-function split(coordinates: Float64Array, dimensions: number, order: Int32Array, start: number, end: number, depth: number): void {
+function split(coordinates: Float64Array, dimensions: number, order: Int32Array, cuts: Float64Array, start: number, end: number, depth: number): void {
   if (end - start <= leafSize) return;
   const middle = (start + end) >> 1;
   select(coordinates, dimensions, depth % dimensions, order, start, end - 1, middle);
-  split(coordinates, dimensions, order, start, middle, depth + 1);
-  split(coordinates, dimensions, order, middle, end, depth + 1);
+  cuts[middle] = coordinates[order[middle] * dimensions + (depth % dimensions)];
+  split(coordinates, dimensions, order, cuts, start, middle, depth + 1);
+  split(coordinates, dimensions, order, cuts, middle, end, depth + 1);
 }
 
 /** Hoare's selection, with the middle of three as pivot. */

@@ -21,6 +21,8 @@ export interface SearchTask {
   readonly onProgress?: (share: number, best: Found | null) => void;
   /** Nodes that may still be looked at. */
   readonly nodeLimit?: number;
+  /** Up to so many ladders all are tried. */
+  readonly tryAllUpTo?: number;
 }
 
 export interface SearchOutcome {
@@ -55,7 +57,7 @@ export function catalogueSearch(task: SearchTask): SearchOutcome {
   const total = shapes.reduce((sum, { size }) => sum + size, 0);
   const plainOrder = Int32Array.from({ length: points.count }, (_, k) => k);
   const outer = outerPoints(points);
-  if (total <= Math.max(tryAllUpTo, task.size) || outer.length === 0) {
+  if (total <= Math.max(task.tryAllUpTo ?? tryAllUpTo, task.size) || outer.length === 0) {
     return tryAll(task, shapes.map((shape) => trialOf(shape, points, trialOrder(points, outer, []))));
   }
   const firstTrials = shapes.map((shape) => trialOf(shape, points, trialOrder(points, outer, [])));

@@ -12,7 +12,8 @@ export interface FreeElement {
   readonly value: number;
   /** Parts are searched by the logarithm of their value, lengths as they are. */
   readonly logarithmic: boolean;
-  write(value: number): void;
+  /** Rewrites the table for a value, at the first `count` of `points`. */
+  write(value: number, points: Int32Array, count: number): void;
   /** The element with a value. */
   at(value: number): Element;
 }
@@ -42,15 +43,20 @@ function freePart(slot: KernelSlot, legs: number, frequencyHz: Float64Array): Pi
   if (part === null || (operation !== SERIES && operation !== SHUNT)) throw new TypeError(`${slot.element.name} has no value to set`);
   return {
     table,
-    write(value) {
-      if (proportional) {
-        const factor = factorAt(slot, value);
-        for (let i = 0; i < table.length; i++) table[i] = finite(factor * slot.table[i]);
-        return;
-      }
+    write(value, points, count) {
+      const factor = factorAt(slot, value);
       const model = partModel(part, value);
-      for (let k = 0; k < frequencyHz.length; k++) lawAt(model, legs, operation === SHUNT, frequencyHz[k], table, 2 * k);
-      for (let i = 0; i < table.length; i++) table[i] = finite(table[i]);
+      for (let o = 0; o < count; o++) {
+        const at = 2 * points[o];
+        if (proportional) {
+          table[at] = factor * slot.table[at];
+          table[at + 1] = factor * slot.table[at + 1];
+        } else {
+          lawAt(model, legs, operation === SHUNT, frequencyHz[points[o]], table, at);
+        }
+        table[at] = finite(table[at]);
+        table[at + 1] = finite(table[at + 1]);
+      }
     },
   };
 }
@@ -69,9 +75,10 @@ function freeLength(element: Extract<Element, { form: 'line' | 'stub' }>, freque
   return {
     orientation: through ? 'through' : 'shunt', table, value: line.lengthM, logarithmic: false,
     at: (value) => ({ ...element, line: lineOfLength(line, value) }),
-    write(value) {
+    write(value, points, count) {
       const share = line.lengthM > 0 ? value / line.lengthM : 1;
-      for (let k = 0; k < frequencyHz.length; k++) {
+      for (let o = 0; o < count; o++) {
+        const k = points[o];
         const cosine = Math.cos(phasePerM[k] * value);
         const sine = Math.sin(phasePerM[k] * value);
         const loss = lossless ? 0 : Math.min(attenuation[k] * share, 300);
@@ -80,13 +87,13 @@ function freeLength(element: Extract<Element, { form: 'line' | 'stub' }>, freque
         // cosh γl and sinh γl.
         const [cRe, cIm, sRe, sIm] = [growth * cosine, rise * sine, rise * cosine, growth * sine];
         if (through) {
-          const o = 8 * k;
-          table[o] = table[o + 6] = cRe;
-          table[o + 1] = table[o + 7] = cIm;
-          table[o + 2] = sRe * line.impedanceOhm;
-          table[o + 3] = sIm * line.impedanceOhm;
-          table[o + 4] = sRe / line.impedanceOhm;
-          table[o + 5] = sIm / line.impedanceOhm;
+          const m = 8 * k;
+          table[m] = table[m + 6] = cRe;
+          table[m + 1] = table[m + 7] = cIm;
+          table[m + 2] = sRe * line.impedanceOhm;
+          table[m + 3] = sIm * line.impedanceOhm;
+          table[m + 4] = sRe / line.impedanceOhm;
+          table[m + 5] = sIm / line.impedanceOhm;
         } else if (element.end === 'open') divide(k, sRe, sIm, cRe, cIm);
         else divide(k, cRe, cIm, sRe, sIm);
       }

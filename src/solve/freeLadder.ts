@@ -8,8 +8,8 @@ export interface FreeLadder {
   readonly free: readonly FreeElement[];
   /** One for each thing asked at a point. */
   readonly functionCount: number;
-  /** How much each misses its limit, in dB (below 0: holds), with these values; Infinity where it cannot be told. */
-  excessDb(values: Float64Array, into: Float64Array): void;
+  /** How much each misses its limit, in dB (below 0: holds), with these values; NaN where it cannot be told. `wanted` as in `Functions`. */
+  excessDb(values: Float64Array, into: Float64Array, wanted: Int32Array | null): void;
 }
 
 /** Ratios of powers are told apart from 0 down to here, so that a perfect match at one frequency is an ordinary least. */
@@ -45,9 +45,14 @@ export function freeLadder(ladder: readonly Element[], free: readonly number[], 
     }
     from = index + 1;
   }
+  const kinds = Uint8Array.from(operations);
   const written = new Float64Array(elements.length).fill(NaN);
-  const reflectionAt = indicesWhere(count, (k) => reflectionWeight[k] > 0);
-  const gainAt = indicesWhere(count, (k) => gainFloor[k] > 0);
+  const everywhere = Int32Array.from({ length: count }, (_, k) => k);
+  const reflectionAt = everywhere.filter((k) => reflectionWeight[k] > 0);
+  const gainAt = everywhere.filter((k) => gainFloor[k] > 0);
+  // Functions that stand at one point each: what is reflected there, then what arrives.
+  const pointOf = Int32Array.of(...reflectionAt, ...gainAt);
+  const some = new Int32Array(count);
   const top = new Float64Array(count);
   const bottom = new Float64Array(count);
   const taken = new Float64Array(count);
@@ -74,24 +79,26 @@ export function freeLadder(ladder: readonly Element[], free: readonly number[], 
     }
   }
 
-  function run(): void {
-    const length = operations.length;
-    for (let k = 0; k < count; k++) {
+  /** At the first `many` of `which`. */
+  function run(which: Int32Array, many: number): void {
+    const length = kinds.length;
+    for (let o = 0; o < many; o++) {
+      const k = which[o];
       let vRe = voltageRe[k];
       let vIm = voltageIm[k];
       let iRe = currentRe[k];
       let iIm = currentIm[k];
       for (let s = 0; s < length; s++) {
-        const operation = operations[s];
+        const operation = kinds[s];
         const m = tables[s];
         if (operation === THROUGH) {
-          const o = 8 * k;
+          const a = 8 * k;
           const oldRe = vRe;
           const oldIm = vIm;
-          vRe = m[o] * oldRe - m[o + 1] * oldIm + m[o + 2] * iRe - m[o + 3] * iIm;
-          vIm = m[o] * oldIm + m[o + 1] * oldRe + m[o + 2] * iIm + m[o + 3] * iRe;
-          const nextRe = m[o + 4] * oldRe - m[o + 5] * oldIm + m[o + 6] * iRe - m[o + 7] * iIm;
-          iIm = m[o + 4] * oldIm + m[o + 5] * oldRe + m[o + 6] * iIm + m[o + 7] * iRe;
+          vRe = m[a] * oldRe - m[a + 1] * oldIm + m[a + 2] * iRe - m[a + 3] * iIm;
+          vIm = m[a] * oldIm + m[a + 1] * oldRe + m[a + 2] * iIm + m[a + 3] * iRe;
+          const nextRe = m[a + 4] * oldRe - m[a + 5] * oldIm + m[a + 6] * iRe - m[a + 7] * iIm;
+          iIm = m[a + 4] * oldIm + m[a + 5] * oldRe + m[a + 6] * iIm + m[a + 7] * iRe;
           iRe = nextRe;
         } else if (operation === SERIES) {
           vRe += m[2 * k] * iRe - m[2 * k + 1] * iIm;
@@ -128,19 +135,44 @@ export function freeLadder(ladder: readonly Element[], free: readonly number[], 
     }
   }
 
+  function pointExcessDb(j: number): number {
+    const k = pointOf[j];
+    return inDb(j < reflectionAt.length ? (top[k] / bottom[k]) * reflectionWeight[k] : (gainFloor[k] * bottom[k]) / power[k]);
+  }
+
+  /** Which points the wanted functions need: how many, listed in `some`; −1 where more than their own are needed. */
+  function listPoints(wanted: Int32Array): number {
+    let many = 0;
+    for (let o = 0; o < wanted.length; o++) {
+      if (wanted[o] >= pointOf.length) return -1;
+      some[many++] = pointOf[wanted[o]];
+    }
+    return many;
+  }
+
+  function writeTables(values: Float64Array, which: Int32Array, many: number): void {
+    for (let i = 0; i < elements.length; i++) {
+      if (values[i] === written[i]) continue;
+      elements[i].write(values[i], which, many);
+      written[i] = which === everywhere ? values[i] : NaN;
+    }
+  }
+
   return {
     free: elements,
-    functionCount: reflectionAt.length + gainAt.length + points.rest.reduce((sum, check) => sum + check.points.length, 0),
-    excessDb(values, into) {
-      elements.forEach((element, i) => {
-        if (values[i] === written[i]) return;
-        element.write(values[i]);
-        written[i] = values[i];
-      });
-      run();
+    functionCount: pointOf.length + points.rest.reduce((sum, check) => sum + check.points.length, 0),
+    excessDb(values, into, wanted) {
+      const many = wanted === null || wanted.length > count ? -1 : listPoints(wanted);
+      if (wanted !== null && many >= 0) {
+        writeTables(values, some, many);
+        run(some, many);
+        for (let o = 0; o < wanted.length; o++) into[wanted[o]] = pointExcessDb(wanted[o]);
+        return;
+      }
+      writeTables(values, everywhere, count);
+      run(everywhere, count);
       let j = 0;
-      for (const k of reflectionAt) into[j++] = inDb((top[k] / bottom[k]) * reflectionWeight[k]);
-      for (const k of gainAt) into[j++] = inDb((gainFloor[k] * bottom[k]) / power[k]);
+      for (; j < pointOf.length; j++) into[j] = pointExcessDb(j);
       for (const check of points.rest) {
         let least = Infinity;
         if ('reference' in check) for (const k of check.reference) least = Math.min(least, gain(k));
@@ -162,6 +194,3 @@ function passed(m: Float64Array, o: number, vRe: number, vIm: number, iRe: numbe
 
 const decibelsPerNeper = 10 / Math.LN10;
 const inDb = (ratio: number): number => decibelsPerNeper * Math.log(ratio + leastRatio);
-
-const indicesWhere = (count: number, holds: (k: number) => boolean): Int32Array =>
-  Int32Array.from({ length: count }, (_, k) => k).filter(holds);

@@ -1,6 +1,6 @@
 import type { Slot } from './ladderShape';
 
-/** Items of the middle slot whose immittances lie nearly on a line: z ≈ start + x·step, x from 0 to 1, at every point asked for. */
+/** Items of the middle slot whose immittances lie nearly on a line: z ≈ start + x·step at every point asked for, x mostly from 0 to 1. */
 export interface Chunk {
   /** Items by increasing x. */
   readonly items: Int32Array;

@@ -86,7 +86,11 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
   function placeBox(group: ChunkedGroup, chunk: Chunk): void {
     lower.fill(-Infinity);
     upper.fill(Infinity);
-    // Range of Re over x in 0 … 1 is linear in x: [at 0, at 1], for the first two points.
+    const first = chunk.x[0];
+    const last = chunk.x[chunk.x.length - 1];
+    /** Ends of slope·x over the chunk. */
+    const least = (slope: number): number => Math.min(slope * first, slope * last);
+    const most = (slope: number): number => Math.max(slope * first, slope * last);
     let slope0 = 0;
     let offset0 = 0;
     let reach0 = Infinity;
@@ -104,20 +108,20 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
       const reach = (radius[d] + chunk.deviation[d]) / Math.sqrt(u2) + 1e-12 * (Math.abs(offsetRe) + Math.abs(offsetIm));
       const e = coordinateOf(d);
       if (e >= 0) {
-        lower[e] = offsetIm + Math.min(0, slopeIm) - reach;
-        upper[e] = offsetIm + Math.max(0, slopeIm) + reach;
+        lower[e] = offsetIm + least(slopeIm) - reach;
+        upper[e] = offsetIm + most(slopeIm) + reach;
       }
       if (d === 0) {
-        lower[0] = offsetRe + Math.min(0, slopeRe) - reach;
-        upper[0] = offsetRe + Math.max(0, slopeRe) + reach;
+        lower[0] = offsetRe + least(slopeRe) - reach;
+        upper[0] = offsetRe + most(slopeRe) + reach;
         slope0 = slopeRe;
         offset0 = offsetRe;
         reach0 = reach;
       } else if (d === 1) {
         const slope = slopeRe - slope0;
         const offset = offsetRe - offset0;
-        lower[1] = offset + Math.min(0, slope) - reach - reach0;
-        upper[1] = offset + Math.max(0, slope) + reach + reach0;
+        lower[1] = offset + least(slope) - reach - reach0;
+        upper[1] = offset + most(slope) + reach + reach0;
       }
     }
   }
@@ -126,8 +130,8 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
   const stretch = { first: 0, last: 0 };
   function placeStretch(prefix: number, chunk: Chunk): boolean {
     const { startRe, startIm, stepRe, stepIm, deviation, x } = chunk;
-    let low = -1;
-    let high = 2;
+    let low = x[0];
+    let high = x[x.length - 1];
     for (let d = 0; d < size; d++) {
       if (radius[d] === Infinity) continue;
       const p = 2 * (prefix * size + d);

@@ -23,13 +23,13 @@ export interface MinimaxResult {
 /** Each level is so much sharper than the one before. */
 const sharpening = 4;
 const levelsAtMost = 40;
-const stepsPerLevel = 25;
+const stepsPerLevel = 100;
 /** The first level tells functions apart that differ by this share of their spread at the start. */
-const firstLevel = 0.25;
+const firstLevel = 0.1;
 const firstRadius = 0.1;
 const largestRadius = 0.5;
 /** A level is left when its model promises less than this, over its sharpness. */
-const levelDone = 0.02;
+const levelDone = 0.1;
 const defaultEvaluations = 20_000;
 
 /**
@@ -93,6 +93,7 @@ export function minimax(functions: Functions, problem: MinimaxProblem): MinimaxR
         high[i] = upper[i] > lower[i] ? 1 - y[i] : 0;
       }
       const here = smooth.value(sharpness);
+      let inside = false;
       for (;;) {
         promised = trustStep({ gradient: smooth.gradient, hessian: smooth.hessian, low, high }, radius, step);
         if (promised <= Math.max(1e-3 * accuracy, 4 * Number.EPSILON * Math.abs(here))) return promised;
@@ -101,12 +102,14 @@ export function minimax(functions: Functions, problem: MinimaxProblem): MinimaxR
         look();
         const kept = (here - smooth.triedValue(sharpness)) / promised;
         const length = Math.hypot(...step);
+        inside = length < 0.9 * radius;
         if (!(kept > 0.25)) radius = 0.25 * length;
         else if (kept > 0.75) radius = Math.min(largestRadius, Math.max(radius, 2.5 * length));
         if (kept > 1e-4) break;
       }
       smooth.accept();
-      if (promised < levelDone / sharpness) return promised;
+      // Where the radius holds the step back, a small promise says nothing.
+      if (inside && promised < levelDone / sharpness) return promised;
     }
     return promised;
   }

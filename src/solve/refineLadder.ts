@@ -19,8 +19,8 @@ export interface RefinedLadder {
   readonly evaluations: number;
 }
 
-/** In dB: a millionth of a power ratio is 4e-6 dB. */
-const accuracyDb = 1e-5;
+/** A hundred-thousandth of |Γ|. */
+const accuracyDb = 1e-4;
 /** Of a range that reaches down to 0 the logarithm begins here, as a share of its end. */
 const leastShare = 1e-6;
 
@@ -38,9 +38,9 @@ export function refineLadder(ladder: readonly Element[], free: readonly FreeValu
   const upper = Float64Array.from(ordered, ({ range }, i) => into[i](range.max));
   const start = Float64Array.from(made.free, ({ value }, i) => into[i](Math.max(value, Number.MIN_VALUE)));
   const values = new Float64Array(ordered.length);
-  const { x, worst, evaluations } = minimax((at, excesses) => {
+  const { x, worst, evaluations } = minimax((at, excesses, wanted) => {
     for (let i = 0; i < values.length; i++) values[i] = outOf[i](at[i]);
-    made.excessDb(values, excesses);
+    made.excessDb(values, excesses, wanted);
   }, { start, lower, upper, functionCount: made.functionCount, accuracy: accuracyDb });
   const result = [...ladder];
   const found = new Map<FreeValue, number>();

@@ -1,5 +1,5 @@
-/** Values of all functions at x, into `into`. */
-export type Functions = (x: Float64Array, into: Float64Array) => void;
+/** Values of the functions at x, into `into`. Where `wanted` names some, only those are looked at afterwards. */
+export type Functions = (x: Float64Array, into: Float64Array, wanted: Int32Array | null) => void;
 
 /**
  * The smoothed maximum of functions f_j and its quadratic model, in variables y of which each goes from 0 to 1 over the box:
@@ -40,8 +40,11 @@ export interface SmoothMaximum {
 /** Step of the differences, as a share of the box: rounding (1e-16/h²) and the cut-off (h²) both stay near 1e-6 of the curvature. */
 const differenceStep = 1e-5;
 
+/** e to this is nothing beside 1, a thousand times over. */
+const negligible = -45;
+
 /** Functions of less weight change neither slope nor curvature in any digit that matters. */
-const leastWeight = 1e-9;
+const leastWeight = 1e-6;
 
 export interface Box {
   /** Inside the bounds. */
@@ -81,9 +84,9 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     }
   }
 
-  function evaluate(y: Float64Array, into: Float64Array): void {
+  function evaluate(y: Float64Array, into: Float64Array, wanted: Int32Array | null = null): void {
     put(y);
-    functions(x, into);
+    functions(x, into, wanted);
     evaluations++;
     for (let j = 0; j < count; j++) if (Number.isNaN(into[j])) into[j] = Infinity;
   }
@@ -92,7 +95,10 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     const worst = largest(values);
     if (!Number.isFinite(worst)) return worst;
     let sum = 0;
-    for (let j = 0; j < count; j++) sum += Math.exp(sharpness * (values[j] - worst));
+    for (let j = 0; j < count; j++) {
+      const below = sharpness * (values[j] - worst);
+      if (below > negligible) sum += Math.exp(below);
+    }
     return worst + Math.log(sum) / sharpness;
   }
 
@@ -102,7 +108,8 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     activeCount = 0;
     let sum = 0;
     for (let j = 0; j < count; j++) {
-      const weight = Math.exp(sharpness * (f[j] - top));
+      const below = sharpness * (f[j] - top);
+      const weight = below > negligible ? Math.exp(below) : 0;
       if (!(weight > leastWeight)) continue;
       weights[activeCount] = weight;
       active[activeCount++] = j;
@@ -118,13 +125,13 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     return Number.isFinite(sum) ? sum : 0;
   }
 
-  function differentiate(i: number): void {
+  function differentiate(i: number, wanted: Int32Array): void {
     const h = differenceStep;
     const at = shifted[i];
     shifted[i] = at + h;
-    evaluate(shifted, forward[i]);
+    evaluate(shifted, forward[i], wanted);
     shifted[i] = at - h;
-    evaluate(shifted, backward);
+    evaluate(shifted, backward, wanted);
     shifted[i] = at;
     for (let a = 0; a < activeCount; a++) {
       const j = active[a];
@@ -136,12 +143,12 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     hessian[i * n + i] = (weighted[i] + weightedDifference(backward, centre)) / (h * h);
   }
 
-  function differentiateTwice(i: number, k: number): void {
+  function differentiateTwice(i: number, k: number, wanted: Int32Array): void {
     const h = differenceStep;
     const [atI, atK] = [shifted[i], shifted[k]];
     shifted[i] = atI + h;
     shifted[k] = atK + h;
-    evaluate(shifted, corner);
+    evaluate(shifted, corner, wanted);
     shifted[i] = atI;
     shifted[k] = atK;
     hessian[i * n + k] = (weightedDifference(corner, centre) - weighted[i] - weighted[k]) / (h * h);
@@ -187,20 +194,21 @@ export function smoothMaximum(functions: Functions, count: number, { start, lowe
     },
     model(sharpness) {
       weigh(sharpness);
+      const wanted = active.subarray(0, activeCount);
       // At a bound the differences are taken around a point one step inside.
       let moved = false;
       for (let i = 0; i < n; i++) {
         shifted[i] = upper[i] > lower[i] ? Math.min(Math.max(current[i], differenceStep), 1 - differenceStep) : current[i];
         moved ||= shifted[i] !== current[i];
       }
-      if (moved) evaluate(shifted, centre);
+      if (moved) evaluate(shifted, centre, wanted);
       else centre.set(f);
       gradient.fill(0);
       hessian.fill(0);
       slopes.fill(0, 0, activeCount * n);
-      for (let i = 0; i < n; i++) if (upper[i] > lower[i]) differentiate(i);
+      for (let i = 0; i < n; i++) if (upper[i] > lower[i]) differentiate(i, wanted);
       for (let i = 0; i < n; i++) {
-        for (let k = 0; k < i; k++) if (upper[i] > lower[i] && upper[k] > lower[k]) differentiateTwice(i, k);
+        for (let k = 0; k < i; k++) if (upper[i] > lower[i] && upper[k] > lower[k]) differentiateTwice(i, k, wanted);
       }
       for (let i = 0; i < n; i++) {
         for (let k = 0; k <= i; k++) {

@@ -1,4 +1,5 @@
 import type { LadderShape } from './ladderShape';
+import { decisivePoints } from './limits';
 import type { RestCheck, TrialPoints } from './trialPoints';
 
 /** Tries one ladder of a shape after the other. */
@@ -33,6 +34,10 @@ export function trialOf(shape: LadderShape, points: TrialPoints, order: Int32Arr
   const tablesRe = steps.map((step, s) => (step.form === 'fixed' ? step.abcd : operations[s] === THROUGH ? slots[step.slot].abcd : slots[step.slot].re));
   const tablesIm = steps.map((step) => (step.form === 'slot' ? slots[step.slot].im : step.abcd));
   const asked = askedOrder(points, order);
+  // What is passed elsewhere is at most 1 of what is sent, so that a rejection can be missed at one point already.
+  const early = shape.passive
+    ? points.rest.flatMap((check) => (check.form === 'rejection at least' ? [...new Set([check.points[0], check.points[check.points.length - 1]])].map((k) => ({ k, limit: check.limit })) : []))
+    : [];
   const bases = new Int32Array(length);
   const at = new Float64Array(4);
 
@@ -113,6 +118,9 @@ export function trialOf(shape: LadderShape, points: TrialPoints, order: Int32Arr
       place(choice);
       let worst = 0;
       for (let o = 0; o < asked.length; o++) {
+        if (o === decisivePoints) {
+          for (const { k, limit } of early) if (limit * gainAt(k) > most * (1 + 1e-9)) return Infinity;
+        }
         const k = asked[o];
         run(k);
         const reflection = (at[0] / at[1]) * reflectionWeight[k];
