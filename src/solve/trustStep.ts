@@ -83,20 +83,17 @@ function freeStep(free: readonly number[], gradient: Float64Array, hessian: Floa
   symmetricEigen(n, matrix, values, vectors);
   const along = values.map((_, k) => free.reduce((sum, _i, a) => sum + vectors[a * n + k] * slope[a], 0));
   const shift = shiftFor(values, along, radius);
-  const result = new Float64Array(n);
-  let squared = 0;
-  for (let k = 0; k < n; k++) {
-    const size = divided(along[k], values[k] + shift);
-    squared += size * size;
-    for (let a = 0; a < n; a++) result[a] -= vectors[a * n + k] * size;
-  }
+  const sizes = values.map((value, k) => -divided(along[k], value + shift));
+  const squared = sizes.reduce((sum, size) => sum + size * size, 0);
   // Nothing pulls along the lowest curvature: go there as far as the radius lets.
   const lowest = values.indexOf(Math.min(...values));
   if (values[lowest] < 0 && squared < radius * radius * (1 - 1e-6)) {
-    const size = Math.sqrt(radius * radius - squared);
-    for (let a = 0; a < n; a++) result[a] += vectors[a * n + lowest] * size;
+    const others = squared - sizes[lowest] ** 2;
+    sizes[lowest] = (sizes[lowest] < 0 ? -1 : 1) * Math.sqrt(Math.max(0, radius * radius - others));
   }
-  return result;
+  // The shift is found to a thousandth, or to its own rounding.
+  const scale = Math.min(1, radius / Math.hypot(...sizes));
+  return Float64Array.from(free, (_, a) => scale * sizes.reduce((sum, size, k) => sum + vectors[a * n + k] * size, 0));
 }
 
 const divided = (slope: number, curvature: number): number => (slope === 0 || curvature <= 0 ? 0 : slope / curvature);
@@ -128,15 +125,16 @@ function shiftFor(values: Float64Array, along: Float64Array, radius: number): nu
 
 /** Best step along the negative gradient, variables held by a bound left out. */
 function downhill(gradient: Float64Array, hessian: Float64Array, low: Float64Array, high: Float64Array, radius: number): Float64Array {
-  const way = gradient.map((g, i) => ((g > 0 && low[i] >= 0) || (g < 0 && high[i] <= 0) ? 0 : -g));
-  const size = Math.hypot(...way);
-  if (size === 0) return way;
-  let room = radius / size;
+  const pull = gradient.map((g, i) => ((g > 0 && low[i] >= 0) || (g < 0 && high[i] <= 0) ? 0 : -g));
+  const slope = Math.hypot(...pull);
+  if (slope === 0) return pull;
+  const way = pull.map((each) => each / slope);
+  let room = radius;
   way.forEach((w, i) => {
     if (w < 0) room = Math.min(room, low[i] / w);
     else if (w > 0) room = Math.min(room, high[i] / w);
   });
-  const bend = 2 * (modelAt(gradient, hessian, way) + size * size);
-  const length = bend > 0 ? Math.min(room, (size * size) / bend) : room;
+  const bend = 2 * (modelAt(gradient, hessian, way) + slope);
+  const length = bend > 0 ? Math.min(room, slope / bend) : room;
   return way.map((w) => w * length);
 }
