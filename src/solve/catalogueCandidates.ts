@@ -3,15 +3,15 @@ import type { Conditions } from './conditions';
 import { fillForm, itemsAt } from './fillForm';
 import { isPosition, positionsOf, type Form } from './forms';
 import { reducedShape, shapeOf, slotOf, type LadderShape, type Slot } from './ladderShape';
-import type { Position } from './positions';
+import type { Item, Position } from './positions';
 import type { Ranked } from './ranking';
 import type { TrialPoints } from './trialPoints';
 
 /** A ladder that was found and how. */
 export interface Candidate extends Ranked {
   readonly form: Form;
-  /** Item of each position. */
-  readonly choice: ArrayLike<number>;
+  /** What stands in each position. */
+  readonly items: readonly Item[];
   readonly proved: boolean;
   readonly nodes: number;
 }
@@ -55,7 +55,8 @@ export function catalogueCandidates(task: CatalogueTask): Candidate[] {
       found.push(...outcome.found.map((each): Candidate => {
         const { form, order, keep } = own[each.shape];
         const choice = each.choice.map((item, s) => keep[s][item]);
-        return { ...each, form, parts, choice, order: [order, ...choice], proved: outcome.proved, nodes: outcome.nodes };
+        const { excess, worstGain, missed: reached } = each;
+        return { excess, worstGain, missed: reached, form, parts, items: itemsAt(form, choice), order: [order, ...choice], proved: outcome.proved, nodes: outcome.nodes };
       }));
       if (found.filter((each) => each.missed <= missed).length >= size) break;
     }

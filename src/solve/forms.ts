@@ -3,7 +3,7 @@ import type { PartKind } from '../network/part';
 import { countParts } from '../study/countParts';
 import type { Problem } from '../study/problem';
 import { studiedLadder } from '../study/studiedLadder';
-import type { Choice, LadderTask, Unknown } from '../study/unknown';
+import type { LadderTask, Unknown } from '../study/unknown';
 import { positionOf, type Position } from './positions';
 import type { SolvedElement } from './solution';
 
@@ -87,9 +87,4 @@ function wholeLadders(task: LadderTask): readonly Form[] {
   });
   if (task.form !== 'up to') return [ladderOf(3, task.form === 'pi' ? 'shunt' : 'series')];
   return Array.from({ length: task.elements }, (_, i) => i + 1).flatMap((count) => [ladderOf(count, 'series'), ladderOf(count, 'shunt')]);
-}
-
-/** Choices over all unknowns of a problem. */
-export function choicesOf(problem: Problem): readonly Choice[] {
-  return problem.ladderTask && problem.ladder.length === 0 ? problem.ladderTask.choices : problem.unknowns.flatMap(({ choices }) => choices);
 }

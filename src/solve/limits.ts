@@ -17,3 +17,11 @@ export const thinnedTo: readonly number[] = [18, 18, 18, 18, 18, 10, 7];
 /** A value that may be anything is first looked for on a grid of so many a decade; a length at so many places of its range. */
 export const gridPerDecade = 24;
 export const lengthsTried = 72;
+/** Seeds of each form and kinds, how many of them are refined for each number of parts, and in all. */
+export const seedsPerForm = 3;
+export const refinedPerCount = 12;
+export const refinedAtMost = 60;
+/** Work for the seeds of one form and kinds. */
+export const seedNodes = 20_000_000;
+/** Parts of a catalogue that are tried around a value that follows from a chosen Q. */
+export const nearestOfEach = 4;

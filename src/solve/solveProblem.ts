@@ -3,12 +3,15 @@ import type { Goal } from '../study/goal';
 import type { Problem } from '../study/problem';
 import { studiedLadder } from '../study/studiedLadder';
 import { aimOf, isLossless, type Aim } from './aim';
-import { catalogueCandidates, type Candidate } from './catalogueCandidates';
+import { catalogueCandidates, type Candidate, type CatalogueTask } from './catalogueCandidates';
+import { formsOfChosenQ } from './chosenQ';
 import { conditionsOf } from './conditions';
-import { fillForm, itemsAt } from './fillForm';
+import { fillForm } from './fillForm';
 import { formsOf, positionsOf } from './forms';
+import { freeCandidates, hasFreeValue } from './freeCandidates';
 import { searchNodes } from './limits';
-import { compareRanked } from './ranking';
+import { twoElementFormsOutOfReach } from './outOfReach';
+import { compareRanked, exactExcess } from './ranking';
 import { defaultTop, type Solution, type SolveOptions, type SolveResult } from './solution';
 import { solutionOf } from './solutionOf';
 
@@ -23,19 +26,27 @@ export function solveProblem(problem: Problem, options: SolveOptions = {}): Solv
   if (!whole && problem.unknowns.length === 0) return nothing('nothing is left to solve');
   const faulty = whole ? undefined : problem.ladder.find(({ form }) => form === 'faulty');
   if (faulty) return nothing(`${faulty.name} could not be read`);
-  const forms = formsOf(problem);
-  if (forms.length === 0) return nothing('there is nothing to choose from');
+  const given = formsOf(problem);
+  if (given.length === 0) return nothing('there is nothing to choose from');
+  const task = whole ? problem.ladderTask : null;
+  const chosen = task && task.form !== 'up to' && (task.q !== null || task.bandwidthHz !== null) ? formsOfChosenQ(problem, task, given[0]) : null;
+  const forms = chosen?.forms ?? given;
+  const outOfReach = chosen?.outOfReach ?? (task?.form === 'up to' && task.elements >= 2 ? twoElementFormsOutOfReach(problem) : []);
+  if (forms.length === 0) return { ...nothing('no form reaches this'), outOfReach };
   const lossless = !studiedLadder(problem).some((element) => !isLossless(element))
     && forms.every((form) => positionsOf(form).every(({ items }) => items.every(({ element }) => isLossless(element))));
   const aim = aimOf(problem, lossless);
   if (aim.points.count === 0) return nothing(aim.notKnown[0]?.reason ?? 'the load is not known in any band');
   const top = options.top ?? defaultTop;
-  const candidates = catalogueCandidates({
+  const search: CatalogueTask = {
     forms, points: aim.points, conditions: conditionsOf(problem), size: top, nodeLimit: searchNodes,
     onProgress: (share, excess) => options.onProgress?.(share, excess === null ? null : -decibels(excess)),
-  });
-  if (candidates.length === 0) return nothing('no ladder can be built from what is left of the parts');
-  return { ...ranked(problem, candidates, aim, top), reason: null, hints: hintsOf(problem, aim, lossless), outOfReach: [] };
+  };
+  const found = hasFreeValue(forms) ? freeCandidates(search, aim.byDefault) : catalogueCandidates(search);
+  // What follows from a chosen Q is not the best of all ladders, unless it matches exactly.
+  const candidates = chosen ? found.map((each) => ({ ...each, proved: each.excess <= exactExcess })) : found;
+  if (candidates.length === 0) return { ...nothing('no ladder can be built from what is left of the parts'), outOfReach };
+  return { ...ranked(problem, candidates, aim, top), reason: null, hints: hintsOf(problem, aim, lossless), outOfReach };
 }
 
 function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, top: number): Pick<SolveResult, 'solutions' | 'byParts'> {
@@ -44,12 +55,12 @@ function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, to
   const make = (candidate: Candidate): Solution => {
     const found = made.get(candidate);
     if (found) return found;
-    const { solved, ladder } = fillForm(candidate.form, itemsAt(candidate.form, candidate.choice));
+    const { solved, ladder } = fillForm(candidate.form, candidate.items);
     const equals = order.filter(({ parts, missed }) => parts === candidate.parts && missed === candidate.missed);
     const best = equals.reduce((least, each) => (each.excess < least.excess ? each : least), candidate);
     const { proved, nodes } = candidate;
     const own = solutionOf(problem, solved, ladder, { proved, nodes, boundDb: null });
-    const boundDb = !proved ? null : best === candidate ? own.marginDb : make(best).marginDb;
+    const boundDb = !proved ? null : candidate.excess <= exactExcess ? Infinity : best === candidate ? own.marginDb : make(best).marginDb;
     const solution = { ...own, boundDb };
     made.set(candidate, solution);
     return solution;
