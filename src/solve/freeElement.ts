@@ -7,13 +7,13 @@ import { lineOfLength, partOfValue } from './positions';
 /** An element whose one value may be anything: Ω, H or F of a part, the length in m of a line or stub. */
 export interface FreeElement {
   readonly orientation: 'series' | 'shunt' | 'through';
-  /** Z (series) or Y (shunt) at each point: re, im; or A, B, C, D (through): eight numbers. Always finite. Of the value written last. */
-  readonly table: Float64Array;
+  /** Two numbers a point, Z (series) or Y (shunt), or eight: A, B, C, D (through). */
+  readonly width: 2 | 8;
   readonly value: number;
   /** Parts are searched by the logarithm of their value, lengths as they are. */
   readonly logarithmic: boolean;
-  /** Rewrites the table for a value, at the first `count` of `points`. */
-  write(value: number, points: Int32Array, count: number): void;
+  /** Writes the numbers of a value, always finite, at the first `count` of `points`: those of point k from k·stride + offset on. */
+  write(value: number, points: Int32Array, count: number, table: Float64Array, stride: number, offset: number): void;
   /** The element with a value. */
   at(value: number): Element;
 }
@@ -37,22 +37,22 @@ export function freeElement(element: Element, frequencyHz: Float64Array): FreeEl
   };
 }
 
-function freePart(slot: KernelSlot, legs: number, frequencyHz: Float64Array): Pick<FreeElement, 'table' | 'write'> {
+function freePart(slot: KernelSlot, legs: number, frequencyHz: Float64Array): Pick<FreeElement, 'width' | 'write'> {
   const { part, proportional, operation } = slot;
-  const table = new Float64Array(2 * frequencyHz.length);
   if (part === null || (operation !== SERIES && operation !== SHUNT)) throw new TypeError(`${slot.element.name} has no value to set`);
   return {
-    table,
-    write(value, points, count) {
+    width: 2,
+    write(value, points, count, table, stride, offset) {
       const factor = factorAt(slot, value);
       const model = partModel(part, value);
       for (let o = 0; o < count; o++) {
-        const at = 2 * points[o];
+        const k = points[o];
+        const at = k * stride + offset;
         if (proportional) {
-          table[at] = factor * slot.table[at];
-          table[at + 1] = factor * slot.table[at + 1];
+          table[at] = factor * slot.table[2 * k];
+          table[at + 1] = factor * slot.table[2 * k + 1];
         } else {
-          lawAt(model, legs, operation === SHUNT, frequencyHz[points[o]], table, at);
+          lawAt(model, legs, operation === SHUNT, frequencyHz[k], table, at);
         }
         table[at] = finite(table[at]);
         table[at + 1] = finite(table[at + 1]);
@@ -65,7 +65,6 @@ function freePart(slot: KernelSlot, legs: number, frequencyHz: Float64Array): Pi
 function freeLength(element: Extract<Element, { form: 'line' | 'stub' }>, frequencyHz: Float64Array): FreeElement {
   const { line } = element;
   const through = element.form === 'line';
-  const table = new Float64Array((through ? 8 : 2) * frequencyHz.length);
   const phasePerM = frequencyHz.map((f) => (2 * Math.PI * f) / (line.velocityFactor * speedOfLight));
   const attenuation = frequencyHz.map((f) => {
     const ratio = f / line.lossAtHz;
@@ -73,12 +72,13 @@ function freeLength(element: Extract<Element, { form: 'line' | 'stub' }>, freque
   });
   const lossless = attenuation.every((value) => value === 0);
   return {
-    orientation: through ? 'through' : 'shunt', table, value: line.lengthM, logarithmic: false,
+    orientation: through ? 'through' : 'shunt', width: through ? 8 : 2, value: line.lengthM, logarithmic: false,
     at: (value) => ({ ...element, line: lineOfLength(line, value) }),
-    write(value, points, count) {
+    write(value, points, count, table, stride, offset) {
       const share = line.lengthM > 0 ? value / line.lengthM : 1;
       for (let o = 0; o < count; o++) {
         const k = points[o];
+        const m = k * stride + offset;
         const cosine = Math.cos(phasePerM[k] * value);
         const sine = Math.sin(phasePerM[k] * value);
         const loss = lossless ? 0 : Math.min(attenuation[k] * share, 300);
@@ -87,23 +87,22 @@ function freeLength(element: Extract<Element, { form: 'line' | 'stub' }>, freque
         // cosh γl and sinh γl.
         const [cRe, cIm, sRe, sIm] = [growth * cosine, rise * sine, rise * cosine, growth * sine];
         if (through) {
-          const m = 8 * k;
           table[m] = table[m + 6] = cRe;
           table[m + 1] = table[m + 7] = cIm;
           table[m + 2] = sRe * line.impedanceOhm;
           table[m + 3] = sIm * line.impedanceOhm;
           table[m + 4] = sRe / line.impedanceOhm;
           table[m + 5] = sIm / line.impedanceOhm;
-        } else if (element.end === 'open') divide(k, sRe, sIm, cRe, cIm);
-        else divide(k, cRe, cIm, sRe, sIm);
+        } else if (element.end === 'open') divide(table, m, sRe, sIm, cRe, cIm);
+        else divide(table, m, cRe, cIm, sRe, sIm);
       }
     },
   };
 
-  /** Y of a stub at point k: top / bottom / Z0. */
-  function divide(k: number, topRe: number, topIm: number, bottomRe: number, bottomIm: number): void {
+  /** Y of a stub: top / bottom / Z0. */
+  function divide(table: Float64Array, at: number, topRe: number, topIm: number, bottomRe: number, bottomIm: number): void {
     const size = (bottomRe * bottomRe + bottomIm * bottomIm) * line.impedanceOhm;
-    table[2 * k] = finite((topRe * bottomRe + topIm * bottomIm) / size);
-    table[2 * k + 1] = finite((topIm * bottomRe - topRe * bottomIm) / size);
+    table[at] = finite((topRe * bottomRe + topIm * bottomIm) / size);
+    table[at + 1] = finite((topIm * bottomRe - topRe * bottomIm) / size);
   }
 }
