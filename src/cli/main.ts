@@ -7,6 +7,7 @@ const around = {
   out: (text: string) => void process.stdout.write(text),
   error: (text: string) => void process.stderr.write(text),
   colour: process.stdout.isTTY === true && !process.env.NO_COLOR,
+  progress: process.stderr.isTTY === true ? (line: string) => void process.stderr.write(`\r\u001b[K${line}`) : null,
 };
 
 process.stdout.on('error', (error: NodeJS.ErrnoException) => {

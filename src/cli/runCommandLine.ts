@@ -2,6 +2,7 @@ import { parseArgs } from 'node:util';
 import { CallError } from './callError';
 import { check } from './check';
 import { report } from './report';
+import { solve } from './solve';
 import { sweep } from './sweep';
 import { tidyFiles } from './tidyFiles';
 import { usage } from './usage';
@@ -12,11 +13,13 @@ export interface Surroundings {
   readonly error: (text: string) => void;
   /** Colours only on a terminal. */
   readonly colour: boolean;
+  /** Writes a line over the one before it, on a terminal; an empty one takes it away. Null where nobody looks. */
+  readonly progress?: ((line: string) => void) | null;
 }
 
 const options = {
   format: { type: 'string' }, since: { type: 'string' }, output: { type: 'string', short: 'o' }, case: { type: 'string' },
-  verify: { type: 'boolean' }, 'two-port': { type: 'boolean' }, help: { type: 'boolean', short: 'h' }, version: { type: 'boolean' },
+  verify: { type: 'boolean' }, top: { type: 'string' }, again: { type: 'boolean' }, write: { type: 'boolean' }, 'two-port': { type: 'boolean' }, help: { type: 'boolean', short: 'h' }, version: { type: 'boolean' },
 } as const;
 
 export type CallOptions = { readonly [K in keyof typeof options]?: (typeof options)[K]['type'] extends 'string' ? string : boolean };
@@ -28,6 +31,7 @@ interface Command {
 
 const commands: Readonly<Record<string, Command>> = {
   check: { options: ['format', 'since'], run: check },
+  solve: { options: ['format', 'top', 'again', 'write'], run: solve },
   sweep: { options: ['format', 'output', 'case', 'two-port'], run: sweep },
   report: { options: ['output'], run: report },
   tidy: { options: ['verify'], run: tidyFiles },

@@ -3,6 +3,11 @@ export const usage = `ohmward COMMAND [options] FILE or FOLDER …
   check   reads and evaluates; says for each goal whether it holds and by how much
             --format text|json       text for people (default), or JSON for programs
             --since FILE             compares each goal with an earlier version of the description
+  solve   finds the values that are still unknown, the best first
+            --format text|json
+            --top N                  how many solutions (10)
+            --again                  reconsiders every value that says «from» and is not «fixed»
+            --write                  puts the best into the file; comments and layout stay
   sweep   the traces over frequency
             --format text|json|csv|touchstone
             --case NAME              only this load case

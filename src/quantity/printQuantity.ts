@@ -22,6 +22,8 @@ function stepFor(value: number, unit: string): { prefix: string; exponent: numbe
   if (!prefixed.has(unit) || value === 0 || !Number.isFinite(value)) return { prefix: '', exponent: 0 };
   const magnitude = Math.abs(value) * (1 + 1e-12);
   const found = steps.find(({ exponent }) => magnitude >= Number(`1e${exponent}`));
+  // 0.82 pF: so small capacitors are written, and femtofarads only for what is no part any more.
+  if (!found && unit === 'F' && magnitude >= 1e-14) return steps[steps.length - 1];
   return found ?? (unit === 'F' ? femto : steps[steps.length - 1]);
 }
 

@@ -2,7 +2,8 @@ import { elementAbcd, throughElements, type Cascade } from '../network/cascade';
 import type { Complex, ComplexArray } from '../network/complex';
 import type { Element, Orientation } from '../network/element';
 import { impedanceOf, reflectionOf, type Immittance } from '../network/immittance';
-import type { ElementKind, ElementResult } from './evaluation';
+import { identityOf } from './elementIdentity';
+import type { ElementResult } from './evaluation';
 import { orientationOf } from './orientation';
 import { firstMiddle, placeOfBand, stressedBands } from './place';
 import { sampleLoad } from './sampleCase';
@@ -31,7 +32,7 @@ export function elementTable(sampler: Sampler): readonly ElementResult[] {
     return {
       name: element.name,
       orientation: orientationOf(element),
-      ...identity(element),
+      ...identityOf(element),
       frequencyHz,
       ...own,
       impedanceAfterOhm: after ? first(impedanceOf(seen)) : null,
@@ -42,29 +43,6 @@ export function elementTable(sampler: Sampler): readonly ElementResult[] {
       reason: reason ?? stress.reason,
     };
   });
-}
-
-type Identity = Pick<ElementResult, 'kind' | 'value' | 'unit' | 'fitted'>;
-
-const units = { resistor: 'Ω', inductor: 'H', capacitor: 'F' } as const;
-
-function identity(element: Element): Identity {
-  const unvalued = (kind: ElementKind, fitted: boolean): Identity => ({ kind, value: null, unit: null, fitted });
-  switch (element.form) {
-    case 'branch': {
-      if (element.branch.form !== 'part') return unvalued('branch', true);
-      const { kind, value } = element.branch.part;
-      return { kind, value, unit: units[kind], fitted: true };
-    }
-    case 'bridge': return { kind: 'bridge', value: 0, unit: 'Ω', fitted: false };
-    case 'not fitted': return unvalued(element.kind ?? 'branch', false);
-    case 'line':
-    case 'stub': return { kind: element.form, value: element.line.lengthM, unit: 'm', fitted: true };
-    case 'transformer':
-    case 'block': return unvalued(element.form, true);
-    case 'unsolved': return unvalued(element.kind ?? 'branch', false);
-    case 'faulty': return unvalued(element.orientation === 'through' ? 'block' : 'branch', false);
-  }
 }
 
 /** Reactance and susceptance of what stands alone in series or across; infinite ones, and those of two-ports, are null. */

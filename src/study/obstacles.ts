@@ -9,6 +9,9 @@ export function unsolvedElements(problem: Pick<Problem, 'ladder' | 'ladderTask'>
   return problem.ladderTask && problem.ladder.length === 0 ? [wholeLadder] : unsolvedNames(problem.ladder);
 }
 
+/** True where nothing is unknown, neither left to solve nor reopened. */
+export const isSettled = (problem: Pick<Problem, 'ladder' | 'ladderTask' | 'unknowns'>): boolean => unsolvedElements(problem).length === 0 && problem.unknowns.length === 0;
+
 const unsolvedNames = (ladder: readonly Element[]): readonly string[] =>
   ladder.filter((element) => element.form === 'unsolved').map((element) => element.name);
 
