@@ -13,10 +13,19 @@ export interface BoxTree {
 
 const leafSize = 12;
 
-/** `coordinates`: point·dimensions + d, finite. */
-export function boxTree(coordinates: Float64Array, count: number, dimensions: number): BoxTree {
-  const order = new Int32Array(count);
-  for (let i = 0; i < count; i++) order[i] = i;
+/** `coordinates`: point·dimensions + d, finite. Points outside of `within` are left out, if it is given. */
+export function boxTree(coordinates: Float64Array, given: number, dimensions: number, within?: { readonly least: Float64Array; readonly largest: Float64Array }): BoxTree {
+  const kept = new Int32Array(given);
+  let count = 0;
+  for (let i = 0; i < given; i++) {
+    let inside = true;
+    for (let d = 0; within !== undefined && inside && d < dimensions; d++) {
+      const value = coordinates[i * dimensions + d];
+      inside = value >= within.least[d] && value <= within.largest[d];
+    }
+    if (inside) kept[count++] = i;
+  }
+  const order = kept.subarray(0, count);
   // Where each node is cut, by the position of the cut: no two nodes are cut at the same one.
   const cuts = new Float64Array(count);
   split(coordinates, dimensions, order, cuts, 0, count, 0);

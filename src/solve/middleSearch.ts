@@ -18,6 +18,8 @@ export interface MiddleSearch {
 /** Disks are widened by this share, which covers rounding. */
 const slack = 1e-9;
 const far = 1e14;
+/** Fewer prefixes are not worth sorting out. */
+const plantWhole = 3_000;
 
 /**
  * The ladder is cut at a middle slot. What is fixed on the source's side and a threshold on |Γ|² leave a disk for the
@@ -36,14 +38,20 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
   const prefixes = prefixesOf(shape, at, points, decisive);
   const suffixes = suffixesOf(shape, at, points, decisive);
   const planes = planeOf(prefixes.state, prefixes.count * size, series);
-  const groups = chunksOf(slot, points.count, decisive).map((group) => ({ ...group, tree: treeOf(group, planes, prefixes.count, size) }));
-  const largest = groups.reduce((most, { tree }) => Math.max(most, tree.count), 0);
-  const hits = new Int32Array(largest);
+  const groups = chunksOf(slot, points.count, decisive);
+  let trees: readonly BoxTree[] = [];
+  let treesFor = -1;
+  const hits = new Int32Array(prefixes.count);
   const limits = limitsOf(shape, points, decisive);
+  const gains = gainsOf(shape, points, decisive, prefixes.state, prefixes.count, series);
 
   const centreRe = new Float64Array(size);
   const centreIm = new Float64Array(size);
   const radius = new Float64Array(size);
+  const gainCentreRe = new Float64Array(size);
+  const gainCentreIm = new Float64Array(size);
+  /** Radius² of the gain's disk times |I|² (series) or |V|² of the prefix; Infinity where no gain is asked. */
+  const gainSquare = new Float64Array(size);
   const dimensions = dimensionsOf(size);
   const lower = new Float64Array(dimensions);
   const upper = new Float64Array(dimensions);
@@ -67,8 +75,14 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
       const cIm = rows[o + 4 + p + 1];
       const dRe = rows[o + 4 + q];
       const dIm = rows[o + 4 + q + 1];
-      const bottom = cRe * cRe + cIm * cIm - limit * (aRe * aRe + aIm * aIm);
+      const aa = aRe * aRe + aIm * aIm;
+      const bottom = cRe * cRe + cIm * cIm - limit * aa;
       if (!(limit >= 0)) return false;
+      if (gains !== null) {
+        gainSquare[d] = gains.largest[d] === Infinity || !(aa > 0) ? Infinity : ((gains.largest[d] * most) / aa) * (1 + slack);
+        gainCentreRe[d] = -(bRe * aRe + bIm * aIm) / aa;
+        gainCentreIm[d] = -(bIm * aRe - bRe * aIm) / aa;
+      }
       if (!(bottom > 0) || limit >= 1) {
         radius[d] = Infinity;
         continue;
@@ -133,21 +147,38 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
     let low = x[0];
     let high = x[x.length - 1];
     for (let d = 0; d < size; d++) {
-      if (radius[d] === Infinity) continue;
       const p = 2 * (prefix * size + d);
-      const zRe = centreRe[d] - planes[p] - startRe[d];
-      const zIm = centreIm[d] - planes[p + 1] - startIm[d];
+      const pRe = planes[p] + startRe[d];
+      const pIm = planes[p + 1] + startIm[d];
       const step2 = stepRe[d] * stepRe[d] + stepIm[d] * stepIm[d];
-      const wIm = (zIm * stepRe[d] - zRe * stepIm[d]) / step2;
-      const reach = radius[d] + deviation[d];
-      const square = (reach * reach) / step2 - wIm * wIm;
-      if (!(square >= 0)) return false;
-      const w = (zRe * stepRe[d] + zIm * stepIm[d]) / step2;
-      const root = Math.sqrt(square);
-      const rounding = 1e-12 * (1 + Math.abs(w));
-      if (w - root - rounding > low) low = w - root - rounding;
-      if (w + root + rounding < high) high = w + root + rounding;
-      if (!(low <= high)) return false;
+      if (radius[d] !== Infinity) {
+        const zRe = centreRe[d] - pRe;
+        const zIm = centreIm[d] - pIm;
+        const wIm = (zIm * stepRe[d] - zRe * stepIm[d]) / step2;
+        const reach = radius[d] + deviation[d];
+        const square = (reach * reach) / step2 - wIm * wIm;
+        if (!(square >= 0)) return false;
+        const w = (zRe * stepRe[d] + zIm * stepIm[d]) / step2;
+        const root = Math.sqrt(square);
+        const rounding = 1e-12 * (1 + Math.abs(w));
+        if (w - root - rounding > low) low = w - root - rounding;
+        if (w + root + rounding < high) high = w + root + rounding;
+        if (!(low <= high)) return false;
+      }
+      if (gains !== null && gainSquare[d] !== Infinity) {
+        const zRe = gainCentreRe[d] - pRe;
+        const zIm = gainCentreIm[d] - pIm;
+        const wIm = (zIm * stepRe[d] - zRe * stepIm[d]) / step2;
+        const reach = Math.sqrt(gainSquare[d] * gains.inverse[prefix * size + d]) + deviation[d] + 1e-12 * (Math.abs(gainCentreRe[d]) + Math.abs(gainCentreIm[d]));
+        const square = (reach * reach) / step2 - wIm * wIm;
+        if (!(square >= 0)) return false;
+        const w = (zRe * stepRe[d] + zIm * stepIm[d]) / step2;
+        const root = Math.sqrt(square);
+        const rounding = 1e-12 * (1 + Math.abs(w));
+        if (w - root - rounding > low) low = w - root - rounding;
+        if (w + root + rounding < high) high = w + root + rounding;
+        if (!(low <= high)) return false;
+      }
     }
     let first = 0;
     let end = x.length;
@@ -171,18 +202,49 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
     }
   }
 
+  /** Trees over those prefixes that are in some suffix's box at all. */
+  function plant(most: number): void {
+    const filtered = prefixes.count > plantWhole;
+    trees = groups.map((group) => {
+      const coordinates = coordinatesOf(group, planes, prefixes.count, size);
+      if (!filtered) return boxTree(coordinates, prefixes.count, dimensions);
+      const least = new Float64Array(dimensions).fill(Infinity);
+      const largest = new Float64Array(dimensions).fill(-Infinity);
+      for (let suffix = 0; suffix < suffixes.count; suffix++) {
+        if (!placeDisks(suffix, most)) break;
+        for (const chunk of group.chunks) {
+          placeBox(group, chunk);
+          for (let e = 0; e < dimensions; e++) {
+            if (lower[e] < least[e]) least[e] = lower[e];
+            if (upper[e] > largest[e]) largest[e] = upper[e];
+          }
+        }
+      }
+      return boxTree(coordinates, prefixes.count, dimensions, { least, largest });
+    });
+    treesFor = filtered ? most : Infinity;
+  }
+
   return {
     run(most, found) {
       for (let suffix = 0; suffix < suffixes.count; suffix++) {
-        if (!placeDisks(suffix, most())) return;
+        const threshold = most();
+        // No ladder has a negative excess: that is how one is told to stop.
+        if (threshold < 0) return;
+        if (!(threshold <= treesFor)) plant(threshold);
+        if (!placeDisks(suffix, threshold)) return;
         fill(suffix, suffixCounts, middle + 1);
-        for (const group of groups) {
+        for (let g = 0; g < groups.length; g++) {
+          const group = groups[g];
+          const tree = trees[g];
           for (const chunk of group.chunks) {
             placeBox(group, chunk);
-            const count = group.tree.find(lower, upper, hits);
+            const before = tree.visited();
+            const count = tree.find(lower, upper, hits);
+            looked += tree.visited() - before;
             looked += count;
             for (let h = 0; h < count; h++) {
-              const prefix = group.tree.order[hits[h]];
+              const prefix = tree.order[hits[h]];
               if (!placeStretch(prefix, chunk)) continue;
               fill(prefix, prefixCounts, 0);
               const { first, last } = stretch;
@@ -196,7 +258,7 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
         }
       }
     },
-    visited: () => looked + groups.reduce((sum, { tree }) => sum + tree.visited(), 0),
+    visited: () => looked,
   };
 }
 
@@ -207,7 +269,7 @@ export function middleSearch(shape: LadderShape, middle: number, points: TrialPo
 const dimensionsOf = (decisive: number): number => 2 + Math.min(3, decisive);
 const coordinateOf = (d: number): number => (d < 3 ? 2 + d : -1);
 
-function treeOf({ directionRe, directionIm }: ChunkedGroup, planes: Float64Array, count: number, size: number): BoxTree {
+function coordinatesOf({ directionRe, directionIm }: ChunkedGroup, planes: Float64Array, count: number, size: number): Float64Array {
   const dimensions = dimensionsOf(size);
   const coordinates = new Float64Array(count * dimensions);
   for (let p = 0; p < count; p++) {
@@ -221,7 +283,7 @@ function treeOf({ directionRe, directionIm }: ChunkedGroup, planes: Float64Array
       coordinates[p * dimensions + coordinateOf(d)] = (im * directionRe[d] - re * directionIm[d]) / square;
     }
   }
-  return boxTree(coordinates, count, dimensions);
+  return coordinates;
 }
 
 /** V/I (series) or I/V (shunt) of each state; what has none is far away, outside of every disk. */
@@ -248,4 +310,21 @@ function limitsOf(shape: LadderShape, points: TrialPoints, decisive: Int32Array)
     const byGain = gainFloor[k] > 0 && shape.passive ? 1 - gainFloor[k] / most : Infinity;
     return Math.min(byReflection, byGain) + 1e-15;
   };
+}
+
+interface Gains {
+  /** Power over the gain asked for, at a threshold of 1; Infinity where none is asked. By decisive point. */
+  readonly largest: Float64Array;
+  /** 1/|I|² (series) or 1/|V|² of each prefix at each decisive point. */
+  readonly inverse: Float64Array;
+}
+
+/** A gain of at least g is a disk too: |W + b/a|² ≤ 4 Rs PL/(g |a|² |I|²), with the prefix's own current. Null where none is asked. */
+function gainsOf(shape: LadderShape, { gainFloor }: TrialPoints, decisive: Int32Array, state: Float64Array, count: number, series: boolean): Gains | null {
+  const largest = Float64Array.from(decisive, (k) => (gainFloor[k] > 0 && shape.power[k] > 0 ? shape.power[k] / gainFloor[k] : Infinity));
+  if (largest.every((value) => value === Infinity)) return null;
+  const inverse = new Float64Array(count * decisive.length);
+  const at = series ? 2 : 0;
+  for (let i = 0; i < inverse.length; i++) inverse[i] = 1 / (state[4 * i + at] ** 2 + state[4 * i + at + 1] ** 2);
+  return { largest, inverse };
 }
