@@ -91,11 +91,12 @@ export function chartSection(controls: Controls, actions: Actions) {
   };
 }
 
-function legendOf({ traces, bands, discs, marker }: PanelView): { className: string; text: string }[] {
+function legendOf({ traces, bands, discs, limits, marker }: PanelView): { className: string; text: string }[] {
   return [
     ...traces.map(({ caseName, reason }, i) => ({ className: `trace ${caseClass(i)}`, text: `${caseName}${reason === null ? '' : ` (${reason})`}` })),
     ...(bands.length > 0 ? [{ className: '', text: 'thick: in band' }] : []),
     ...discs.map(({ label }) => ({ className: '', text: `disc: ${label}` })),
+    ...limits.map(({ label }) => ({ className: 'limit', text: label })),
     ...(marker && marker.cases.length > 1 && marker.cases[0].steps.length > 0 ? [{ className: '', text: `arcs: ${marker.cases[0].caseName}` }] : []),
   ];
 }

@@ -12,8 +12,8 @@ export function verdictSection(actions: Actions) {
     const button = element('button', { type: 'button', class: 'row-button goal', click: () => actions.revealLine(Number(button.dataset.line)) },
       element('span', { class: 'mark' }, element('span', { class: 'sign', 'aria-hidden': 'true' }), element('span', { class: 'hidden-text' })),
       element('span', { class: 'what' }, element('span', { class: 'title' }), element('span', { class: 'place' })),
-      element('span', { class: 'value' }, element('span', { class: 'number' }), element('span', { class: 'detail' })));
-    button.insertBefore(picture(`0 0 ${barSize.width} ${barSize.height}`, { class: 'bar', 'aria-hidden': 'true', preserveAspectRatio: 'none' }) as unknown as HTMLElement, button.lastElementChild);
+      element('span', { class: 'value' }, element('span', { class: 'number' }), element('span', { class: 'detail' })), element('span', { class: 'note' }));
+    button.insertBefore(picture(`0 0 ${barSize.width} ${barSize.height}`, { class: 'bar', 'aria-hidden': 'true', preserveAspectRatio: 'none' }) as unknown as HTMLElement, button.querySelector('.value'));
     return element('li', {}, button);
   };
   const updateGoal = (item: HTMLElement, goal: GoalView) => {
@@ -28,6 +28,7 @@ export function verdictSection(actions: Actions) {
     setText(find('place'), goal.place);
     setText(find('number'), goal.valueText);
     setText(find('detail'), goal.detail);
+    setText(find('note'), goal.note);
     setMarkup(find('bar') as SVGElement, goalBar(goal.bar));
     button.title = goal.marginText;
   };

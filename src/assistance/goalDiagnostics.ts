@@ -5,6 +5,7 @@ import type { GoalSyntax } from '../description/syntax';
 import type { Evaluation } from '../study/evaluation';
 import type { Goal } from '../study/goal';
 import { goalDetail, goalValueText } from './goalText';
+import { outOfReachNote } from './limitText';
 
 const known = new WeakMap<Description, LineMap>();
 
@@ -29,7 +30,7 @@ export function goalDiagnostics(description: Description, model: Model, evaluati
   for (const result of evaluation?.goals ?? []) {
     const syntax = goalSyntaxOf(description, result.goal);
     if (result.ok || !syntax) continue;
-    const detail = goalDetail(result);
+    const detail = [goalDetail(result), model.problem ? outOfReachNote(model.problem, result) : ''].filter((text) => text !== '').join('; ');
     found.push({
       code: result.reason !== null && result.value === null ? 'goal-not-known' : 'goal-missed',
       severity: 'warning',

@@ -5,9 +5,10 @@ import type { Assessment } from './assess';
 import { goalSyntaxOf } from './goalDiagnostics';
 import { goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText } from './goalText';
 import type { Hover } from './hover';
+import { limitLines, outOfReachNote } from './limitText';
 import { plainText, rowsTable } from './markdown';
 
-export function goalHover({ description, evaluation }: Assessment, syntax: GoalSyntax): Hover {
+export function goalHover({ description, model, evaluation }: Assessment, syntax: GoalSyntax): Hover {
   const result = evaluation?.goals.find((candidate) => goalSyntaxOf(description, candidate.goal) === syntax);
   if (!result) return { span: syntax.span, markdown: 'Nothing is known of this goal yet.' };
   const place = goalPlace(result.goal);
@@ -16,6 +17,8 @@ export function goalHover({ description, evaluation }: Assessment, syntax: GoalS
     '',
     [`worst value ${goalValueText(result)}`, goalMarginText(result), plainText(goalDetail(result))].filter((text) => text !== '').join(', '),
   ];
+  const note = model.problem ? outOfReachNote(model.problem, result) : '';
+  if (note !== '') lines.push('', plainText(`${note}.`));
   return { span: syntax.span, markdown: lines.join('\n') };
 }
 
@@ -31,5 +34,5 @@ export function bandHover({ model: { problem }, evaluation }: Assessment, name: 
     result.worstReturnLossDb === null && result.reason !== null ? plainText(result.reason)
       : `worst return loss ${result.worstReturnLossDb === null ? '∞' : `${printNumber(result.worstReturnLossDb, 3)} dB`}, worst gain ${result.worstGainDb === null ? '−∞' : `${printNumber(result.worstGainDb, 3)} dB`}`,
   ]);
-  return { span, markdown: [`**${plainText(name)}**: ${extent}${band.watch ? '; watched only' : ''}`, '', rowsTable(rows)].join('\n') };
+  return { span, markdown: [`**${plainText(name)}**: ${extent}${band.watch ? '; watched only' : ''}`, '', rowsTable(rows), ...(problem ? limitLines(problem, name) : []).flatMap((line) => ['', plainText(line)])].join('\n') };
 }

@@ -1,11 +1,14 @@
 import { lineMap } from '../base/lineMap';
 import type { GoalView, PanelView, ProblemView } from '../messages/panel';
 import type { GoalResult } from '../study/goal';
+import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
 import { cautions } from './cautions';
 import { goalBar, goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
 import { ladderRows } from './ladderRows';
 import { defaultMarkerHz, markerView } from './markerView';
+import { outOfReachNote } from './limitText';
+import { limitViews } from './limitViews';
 import { bandViews, discViews, maskViews, sweepList, traceView } from './traceViews';
 
 export interface PanelContext {
@@ -32,7 +35,7 @@ export function panelView(assessment: Assessment, context: PanelContext): PanelV
     fileName: context.fileName,
     pinned: context.pinned,
     verdict: verdictText(evaluation.goals),
-    goals: evaluation.goals.map(goalView),
+    goals: evaluation.goals.map((result, id) => goalView(result, id, problem)),
     problems: problemViews(assessment),
     cautions: cautions(problem, evaluation),
     z0Ohm: problem.z0Ohm,
@@ -40,13 +43,14 @@ export function panelView(assessment: Assessment, context: PanelContext): PanelV
     bands: bandViews(problem),
     traces: evaluation.traces.map(traceView),
     discs: discViews(problem),
+    limits: limitViews(problem),
     masks: maskViews(problem, evaluation.goals),
     marker: markerHz === null ? null : markerView(problem, markerHz),
     ladder: ladderRows(assessment, problem),
   };
 }
 
-function goalView(result: GoalResult, id: number): GoalView {
+function goalView(result: GoalResult, id: number, problem: Problem): GoalView {
   return {
     id,
     title: goalTitle(result.goal),
@@ -55,6 +59,7 @@ function goalView(result: GoalResult, id: number): GoalView {
     valueText: goalValueText(result),
     detail: goalDetail(result),
     marginText: goalMarginText(result),
+    note: outOfReachNote(problem, result),
     bar: goalBar(result),
     line: result.goal.line - 1,
   };

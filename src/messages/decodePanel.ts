@@ -5,7 +5,7 @@ const maybeNumbers = listOf(orNull(number));
 const point = shape<{ re: number; im: number }>({ re: number, im: number });
 const points: Decoder<PointList> = shape<PointList>({ re: maybeNumbers, im: maybeNumbers });
 
-const goal = shape<GoalView>({ id: whole, title: text, place: text, ok: flag, valueText: text, detail: text, marginText: text, bar: orNull(number), line: whole });
+const goal = shape<GoalView>({ id: whole, title: text, place: text, ok: flag, valueText: text, detail: text, marginText: text, note: text, bar: orNull(number), line: whole });
 const problem = shape<ProblemView>({ severity: oneOf('error', 'warning', 'info'), message: text, line: whole });
 const band = shape<BandView>({ name: text, startHz: number, stopHz: number, watch: flag });
 const trace = shape<TraceView>({ caseName: text, reflection: points, reflectionDb: maybeNumbers, gainDb: maybeNumbers, reason: orNull(text) });
@@ -22,7 +22,7 @@ const row = shape<LadderRowView>({
 });
 const view = shape<PanelView>({
   title: text, fileName: text, pinned: flag, verdict: text, goals: listOf(goal), problems: listOf(problem), cautions: listOf(text), z0Ohm: number,
-  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row),
+  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row),
 });
 
 /** A message from the host; null where it is none. */

@@ -24,6 +24,8 @@ export interface GoalView {
   readonly detail: string;
   /** `8.7 dB to spare`, `2.6 dB short`. */
   readonly marginText: string;
+  /** Why no lossless ladder can meet it; empty where one could. */
+  readonly note: string;
   /** −1 … 1 for the bar, 0 at the limit; null where not known. */
   readonly bar: number | null;
   /** Line in the document, from 0. */
@@ -131,6 +133,8 @@ export interface PanelView {
   readonly bands: readonly BandView[];
   readonly traces: readonly TraceView[];
   readonly discs: readonly DiscView[];
+  /** What no lossless ladder gets inside of, by band. */
+  readonly limits: readonly DiscView[];
   readonly masks: readonly MaskView[];
   readonly marker: MarkerView | null;
   readonly ladder: readonly LadderRowView[];

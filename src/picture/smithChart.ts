@@ -8,6 +8,7 @@ export interface ChartData {
   readonly traces: readonly TraceView[];
   readonly bands: readonly BandView[];
   readonly discs: readonly DiscView[];
+  readonly limits: readonly DiscView[];
   readonly marker: MarkerView | null;
   /** Tells which way each element turns. */
   readonly ladder: readonly LadderRowView[];
@@ -30,7 +31,7 @@ export function smithChart(data: ChartData): string {
   const first = data.marker?.cases[0] ?? null;
   return [
     chartGrid(),
-    tag('g', { class: 'discs' }, data.discs.map(discMarkup).join('') || ' '),
+    tag('g', { class: 'discs' }, [...data.discs.map((disc) => discMarkup('disc', disc)), ...data.limits.map((limit) => discMarkup('limit', limit))].join('') || ' '),
     tag('g', { class: 'guides', 'aria-hidden': 'true' }, first ? guides(first, data.ladder) : ' '),
     tag('g', { class: 'traces' }, data.traces.map((trace, i) => traceMarkup(trace, i, data)).join('') || ' '),
     tag('g', { class: 'path' }, first ? pathMarkup(first, data) : ' '),
@@ -38,8 +39,8 @@ export function smithChart(data: ChartData): string {
   ].join('');
 }
 
-function discMarkup({ centreRe, centreIm, radius, label }: DiscView): string {
-  return tag('circle', { class: 'disc', cx: chartX(centreRe), cy: chartY(centreIm), r: radius * chartRadius }, tag('title', {}, escapeText(label)));
+function discMarkup(name: 'disc' | 'limit', { centreRe, centreIm, radius, label }: DiscView): string {
+  return tag('circle', { class: name, cx: chartX(centreRe), cy: chartY(centreIm), r: radius * chartRadius }, tag('title', {}, escapeText(label)));
 }
 
 function traceMarkup({ caseName, reflection }: TraceView, index: number, { frequencyHz, bands }: ChartData): string {

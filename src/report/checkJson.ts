@@ -2,6 +2,7 @@ import type { Assessment } from '../assistance/assess';
 import { isOk } from '../assistance/assess';
 import { lineMap } from '../base/lineMap';
 import type { Complex } from '../network/complex';
+import { bandLimits, type BandLimit } from '../solve/bandLimits';
 import type { BandResult, ElementResult } from '../study/evaluation';
 import type { GoalResult } from '../study/goal';
 
@@ -24,6 +25,7 @@ export function checkJson(files: readonly CheckedFile[]): object {
 function fileJson({ path, assessment, earlier }: CheckedFile): object {
   const { description, evaluation } = assessment;
   const lines = lineMap(description.syntax.text);
+  const limits = assessment.model.problem ? bandLimits(assessment.model.problem) : [];
   return {
     path,
     title: description.syntax.title?.value ?? null,
@@ -35,7 +37,7 @@ function fileJson({ path, assessment, earlier }: CheckedFile): object {
     }),
     goals: evaluation === null ? unjudged(assessment) : evaluation.goals.map((result) => ({ ...goalJson(result), ...(earlier !== undefined && { before: beforeJson(result, earlier) }) })),
     elements: (description.syntax.ladder ? evaluation?.elements ?? [] : []).map(elementJson),
-    bands: (evaluation?.bands ?? []).map(bandJson),
+    bands: (evaluation?.bands ?? []).map((band, at) => bandJson(band, limits[at] ?? null)),
     spread: null,
   };
 }
@@ -88,13 +90,13 @@ function elementJson(element: ElementResult): object {
   };
 }
 
-function bandJson(band: BandResult): object {
+function bandJson(band: BandResult, found: BandLimit | null): object {
   return {
     name: band.name, start: band.startHz, stop: band.stopHz,
     cases: band.cases.map((result) => ({
       case: result.caseName, worstReflection: finite(result.worstReflection), worstReturnLoss: finite(result.worstReturnLossDb),
       worstVswr: finite(result.worstVswr), worstGain: finite(result.worstGainDb), at: finite(result.atHz), ...because(result.reason),
     })),
-    limit: null,
+    limit: found && { reflection: found.limit.reflection, model: found.limit.model?.form ?? null, fitError: found.limit.model?.fitError ?? null, ...because(found.limit.reason) },
   };
 }

@@ -1,6 +1,7 @@
 import { isOk } from '../assistance/assess';
 import { cautions } from '../assistance/cautions';
 import { goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from '../assistance/goalText';
+import { outOfReachNote } from '../assistance/limitText';
 import { goalBefore, type CheckedFile } from './checkJson';
 
 const paint = (colour: boolean, code: number, text: string) => (colour ? `\u001b[${code}m${text}\u001b[0m` : text);
@@ -15,7 +16,7 @@ export function checkText({ path, assessment, earlier }: CheckedFile, colour: bo
   const rows = results.map((result) => [
     `${goalTitle(result.goal)}${goalPlace(result.goal) && `, ${goalPlace(result.goal)}`}`,
     goalValueText(result),
-    [goalMarginText(result), earlier === undefined ? '' : beforeText(goalBefore(result, earlier)), goalDetail(result)].filter((text) => text !== '').join('; '),
+    [goalMarginText(result), earlier === undefined ? '' : beforeText(goalBefore(result, earlier)), goalDetail(result), model.problem ? outOfReachNote(model.problem, result) : ''].filter((text) => text !== '').join('; '),
   ]);
   const widths = [0, 1].map((column) => Math.max(0, ...rows.map((row) => row[column].length)));
   const lines = rows.map(([title, value, rest], i) => {

@@ -73,7 +73,7 @@ describe('unknown values', () => {
 
   it('may be the length of a line', () => {
     const { ladder, unknowns } = problemOf('line T1: 50 Ω, solve 2 mm .. 40 mm, vf 0.55', 'stub open S1: 70 Ω, solve');
-    assert.deepEqual(ladder, [{ form: 'unsolved', name: 'T1', orientation: 'through', kind: 'line' }, { form: 'unsolved', name: 'S1', orientation: 'shunt', kind: 'stub' }]);
+    assert.deepEqual(ladder, [{ form: 'unsolved', name: 'T1', orientation: 'through', kind: 'line' }, { form: 'unsolved', name: 'S1', orientation: 'shunt', kind: 'stub', end: 'open' }]);
     const [line] = unknowns[0].choices;
     assert.ok(line.form === 'continuous' && line.kind === 'line' && 'impedanceOhm' in line.template);
     assert.deepEqual(line.range, { min: 0.002, max: 0.04 });

@@ -6,10 +6,10 @@ import type { PanelView, ToHost, ToPage } from '../../src/messages/panel';
 
 const view: PanelView = {
   title: 'Orchard frost sensor', fileName: 'frost.match.yaml', pinned: false, verdict: '3 of 4 goals hold',
-  goals: [{ id: 0, title: 'return loss ≥ 12 dB', place: 'uplink', ok: true, valueText: '20.7 dB', detail: 'worst: wet bark, 868.2 MHz', marginText: '8.7 dB to spare', bar: 0.4, line: 12 }],
+  goals: [{ id: 0, title: 'return loss ≥ 12 dB', place: 'uplink', ok: true, valueText: '20.7 dB', detail: 'worst: wet bark, 868.2 MHz', marginText: '8.7 dB to spare', note: '', bar: 0.4, line: 12 }],
   problems: [{ severity: 'warning', message: 'an invented problem', line: 3 }], cautions: ['an invented caution'], z0Ohm: 50, frequencyHz: [863e6, 870e6], bands: [{ name: 'uplink', startHz: 863e6, stopHz: 870e6, watch: false }],
   traces: [{ caseName: 'load', reflection: { re: [0.1, null], im: [0.2, null] }, reflectionDb: [-13, null], gainDb: [-0.2, null], reason: null }],
-  discs: [{ centreRe: 0, centreIm: 0, radius: 0.25, label: '12 dB' }], masks: [{ plot: 'reflection', side: 'at most', levelDb: -12, startHz: 863e6, stopHz: 870e6, ok: true, goalId: 0 }],
+  discs: [{ centreRe: 0, centreIm: 0, radius: 0.25, label: '12 dB' }], limits: [{ centreRe: 0, centreIm: 0, radius: 0.1, label: 'Bode–Fano' }], masks: [{ plot: 'reflection', side: 'at most', levelDb: -12, startHz: 863e6, stopHz: 870e6, ok: true, goalId: 0 }],
   marker: { frequencyHz: 866.5e6, text: '866.5 MHz', cases: [{ caseName: 'load', text: 'Γ 0.1', loadReflection: { re: 0.1, im: 0 }, steps: [{ name: 'L1', arc: { re: [0.1], im: [0.2] } }], inputReflection: null }] },
   ladder: [{ id: 'L1', name: 'L1', orientation: 'series', symbol: 'inductor', value: '13 nH', reactance: '+j70.8 Ω', impedanceAfter: '18.0 + j2.0 Ω', voltage: '1 V', current: '20 mA', heat: '1 mW', note: '', line: 20, editable: true }],
 };
