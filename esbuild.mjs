@@ -28,6 +28,8 @@ const outputs = [
   // One bundle for both extension hosts, with Node and without. The worker host of editors that live in a browser takes an
   // entry for CommonJS only if its name ends in .cjs.
   { entry: 'src/editor/extension.ts', options: { ...browser, format: 'cjs', outfile: 'dist/extension.cjs', external: ['vscode'] } },
+  // The solver's worker, for both hosts too; its text is handed to whatever starts it.
+  { entry: 'src/worker/solverWorker.ts', options: { ...browser, format: 'iife', outfile: 'dist/solver.js' } },
   { entry: 'src/cli/main.ts', options: { ...node, outfile: 'dist/ohmward.cjs', banner: { js: '#!/usr/bin/env node' } }, executable: true },
   { entry: 'webview/main.ts', options: { ...browser, format: 'iife', outfile: 'dist/webview.js' } },
   { entry: 'webview/panel.css', options: { ...browser, outfile: 'dist/webview.css' } },

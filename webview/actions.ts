@@ -6,6 +6,9 @@ export interface Actions {
   typeMarker(text: string): void;
   stepValue(elementId: string, direction: 'up' | 'down'): void;
   setValue(elementId: string, text: string): void;
+  /** Null: no candidate any more. */
+  previewCandidate(candidate: number | null): void;
+  insertCandidate(candidate: number): void;
   copy(what: 'chart svg' | 'ladder csv' | 'ladder markdown', text: string): void;
   save(what: 'chart svg' | 'chart png', base64: string): void;
   pin(pinned: boolean): void;

@@ -1,4 +1,4 @@
-import type { PanelView } from '../src/messages/panel';
+import type { PanelView, TraceView } from '../src/messages/panel';
 import { caseClass, chartBox, chartSummary, chartViewBox, nearestTracePoint, smithChart } from '../src/picture/smithChart';
 import type { Actions } from './actions';
 import type { Controls } from './controls';
@@ -11,6 +11,7 @@ const reach = 14;
 /** The chart, what its lines mean, and the marker with its reading for every case. */
 export function chartSection(controls: Controls, actions: Actions) {
   let view: PanelView | null = null;
+  let previews: readonly TraceView[] = [];
   const chart = picture(chartViewBox, { class: 'chart', role: 'img', tabindex: '0' });
   const legend = element('ul', { class: 'legend' });
   const field = controls.textField({
@@ -69,7 +70,7 @@ export function chartSection(controls: Controls, actions: Actions) {
     root, chart,
     update(next: PanelView) {
       view = next;
-      setMarkup(chart, smithChart(next));
+      setMarkup(chart, smithChart({ ...next, previews }));
       chart.setAttribute('aria-label', `${chartSummary(next)} Arrow keys move the marker.`);
       syncList(legend, legendOf(next), () => element('li', {}, picture('0 0 26 8', { class: 'sample', 'aria-hidden': 'true' }) as unknown as HTMLElement, element('span')), (item, { className, text }) => {
         const sample = item.firstElementChild as SVGElement;
@@ -83,6 +84,10 @@ export function chartSection(controls: Controls, actions: Actions) {
         setText(item.firstElementChild!, reading.caseName === 'load' && next.traces.length === 1 ? '' : `${reading.caseName}: `);
         setText(item.lastElementChild!, reading.text);
       });
+    },
+    preview(traces: readonly TraceView[] | null) {
+      previews = traces ?? [];
+      if (view) setMarkup(chart, smithChart({ ...view, previews }));
     },
     refuse: (text: string) => setText(refusal, text),
     highlight(elementId: string | null) {

@@ -1,6 +1,7 @@
 import { decodeToPage } from '../src/messages/decodePanel';
-import type { PanelView } from '../src/messages/panel';
+import type { PanelView, TraceView } from '../src/messages/panel';
 import type { Actions } from './actions';
+import { candidatesSection } from './candidatesSection';
 import { chartSection } from './chartSection';
 import { plainControls, toolkitControls } from './controls';
 import { element, setText } from './dom';
@@ -16,6 +17,10 @@ const host = connectHost();
 let shown: { document: string; version: number; view: PanelView | null } | null = null;
 let request = 0;
 let pointed: string | null = null;
+let previewed: number | null = null;
+let previewRequest = 0;
+/** Version of the view that is drawn: what a candidate's id counts in. */
+let viewVersion = 0;
 
 const send = {
   document: () => shown?.document ?? '',
@@ -33,6 +38,12 @@ const actions: Actions = {
   typeMarker: (text) => host.send({ type: 'type marker', document: send.document(), request: ++request, text }),
   stepValue: (elementId, direction) => host.send({ type: 'step value', document: send.document(), version: send.version(), elementId, direction }),
   setValue: (elementId, text) => host.send({ type: 'set value', document: send.document(), version: send.version(), elementId, text }),
+  previewCandidate(candidate) {
+    previewed = candidate;
+    if (candidate === null) showPreview(null);
+    else host.send({ type: 'preview candidate', document: send.document(), version: viewVersion, request: ++previewRequest, candidate });
+  },
+  insertCandidate: (candidate) => host.send({ type: 'insert candidate', document: send.document(), version: viewVersion, candidate }),
   copy: (what, text) => host.send({ type: 'copy', document: send.document(), what, text }),
   save: (what, base64) => host.send({ type: 'save', document: send.document(), what, base64 }),
   pin: (pinned) => host.send({ type: 'pin', document: send.document(), pinned }),
@@ -47,15 +58,22 @@ const verdict = verdictSection(actions);
 const chart = chartSection(controls, actions);
 const plots = plotsSection(actions);
 const ladder = ladderSection(controls, actions);
+const candidates = candidatesSection(controls, actions);
 const exports = exportSection(controls, actions);
 const nothing = element('p', { class: 'nothing' });
 const content = element('div', { class: 'content' },
   header.root, problems.root,
-  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, exports.root)));
+  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, candidates.root, exports.root)));
 const pictures = content.querySelector<HTMLElement>('.columns')!;
 content.hidden = true;
 setText(nothing, 'Waiting for the first picture …');
 main.append(nothing, content);
+
+/** The trace of a candidate, beside those that stand there. */
+function showPreview(traces: readonly TraceView[] | null): void {
+  chart.preview(traces);
+  plots.preview(traces);
+}
 
 function highlight(elementId: string | null): void {
   chart.highlight(elementId);
@@ -78,6 +96,7 @@ function draw(): void {
     verdict.update(view);
     chart.update(view);
     plots.update(view);
+    candidates.update(view);
     ladder.update(view);
     exports.update(view);
     highlight(pointed);
@@ -92,6 +111,8 @@ window.addEventListener('message', (event: MessageEvent<unknown>) => {
   switch (message.type) {
     case 'view':
       shown = { document: message.document, version: message.version, view: message.view };
+      viewVersion = message.version;
+      showPreview(null);
       host.remember({ document: message.document });
       problems.update(message.view.problems, message.view.cautions);
       header.setFreshness('up to date', false);
@@ -119,6 +140,9 @@ window.addEventListener('message', (event: MessageEvent<unknown>) => {
       } else {
         chart.refuse(message.refusal ?? '');
       }
+      break;
+    case 'preview':
+      if (message.document === shown?.document && message.request === previewRequest && previewed !== null) showPreview(message.traces);
       break;
     case 'cursor':
       if (message.document !== shown?.document) break;

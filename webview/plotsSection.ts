@@ -1,4 +1,4 @@
-import type { PanelView } from '../src/messages/panel';
+import type { PanelView, TraceView } from '../src/messages/panel';
 import { frequencyPlot, frequencyScale, frequencyUnit, plotSize } from '../src/picture/frequencyPlot';
 import type { Actions } from './actions';
 import { element, picture, setMarkup, setText } from './dom';
@@ -9,6 +9,9 @@ const plots = ['reflection', 'gain'] as const;
 /** Reflection and gain over frequency; the marker is dragged over either and stepped with the arrow keys. */
 export function plotsSection(actions: Actions) {
   let view: PanelView | null = null;
+  let previews: readonly TraceView[] = [];
+  const markupOf = (shown: PanelView, i: number) =>
+    frequencyPlot({ plot: plots[i], frequencyHz: shown.frequencyHz, traces: shown.traces, previews, bands: shown.bands, masks: shown.masks, markerHz: shown.marker?.frequencyHz ?? null });
   const heading = element('h2');
   const pictures = plots.map(() => picture(`0 0 ${plotSize.width} ${plotSize.height}`, { class: 'plot', role: 'slider', tabindex: '0', 'aria-orientation': 'horizontal' }));
   const root = element('section', { class: 'plots-section', 'aria-label': 'Over frequency' }, heading, ...pictures.map((made) => made as unknown as HTMLElement));
@@ -41,13 +44,18 @@ export function plotsSection(actions: Actions) {
       view = next;
       setText(heading, `Over frequency, ${frequencyUnit(next.frequencyHz).unit}`);
       pictures.forEach((made, i) => {
-        setMarkup(made, frequencyPlot({ plot: plots[i], frequencyHz: next.frequencyHz, traces: next.traces, bands: next.bands, masks: next.masks, markerHz: next.marker?.frequencyHz ?? null }));
+        setMarkup(made, markupOf(next, i));
         made.setAttribute('aria-label', `${plots[i] === 'reflection' ? 'Reflection' : 'Gain'} over frequency; marker`);
         made.setAttribute('aria-valuemin', String(next.frequencyHz[0] ?? 0));
         made.setAttribute('aria-valuemax', String(next.frequencyHz[next.frequencyHz.length - 1] ?? 0));
         made.setAttribute('aria-valuenow', String(next.marker?.frequencyHz ?? next.frequencyHz[0] ?? 0));
         made.setAttribute('aria-valuetext', next.marker?.text ?? 'not set');
       });
+    },
+    preview(traces: readonly TraceView[] | null) {
+      previews = traces ?? [];
+      const shown = view;
+      if (shown) pictures.forEach((made, i) => setMarkup(made, markupOf(shown, i)));
     },
   };
 }

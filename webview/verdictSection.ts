@@ -5,7 +5,9 @@ import { element, picture, setMarkup, setText, syncList } from './dom';
 
 /** Goal by goal: whether it holds, its margin as a bar, its worst value and where. Each leads to its line. */
 export function verdictSection(actions: Actions) {
-  const heading = element('h2');
+  const words = element('span');
+  const notInserted = element('span', { class: 'not-inserted' });
+  const heading = element('h2', {}, words, notInserted);
   const list = element('ul', { class: 'goals' });
   const root = element('section', { class: 'verdict', 'aria-label': 'Verdict' }, heading, list);
   const makeGoal = () => {
@@ -34,8 +36,10 @@ export function verdictSection(actions: Actions) {
   };
   return {
     root,
-    update({ verdict, goals }: Pick<PanelView, 'verdict' | 'goals'>) {
-      setText(heading, verdict === '' ? 'Verdict: no goals yet' : `Verdict: ${verdict}`);
+    update({ verdict, goals, notInserted: imagined }: Pick<PanelView, 'verdict' | 'goals' | 'notInserted'>) {
+      setText(words, `Verdict: ${verdict === '' ? 'no goals yet' : imagined ? `with the best candidate ${verdict}` : verdict}`);
+      notInserted.hidden = !imagined;
+      setText(notInserted, imagined ? 'not inserted' : '');
       syncList(list, goals, makeGoal, updateGoal);
     },
     highlight(goalId: number | null) {

@@ -1,14 +1,18 @@
 import { lineMap } from '../base/lineMap';
-import type { GoalView, PanelView, ProblemView } from '../messages/panel';
+import type { CandidatesView, GoalView, PanelView, ProblemView } from '../messages/panel';
 import type { GoalResult } from '../study/goal';
 import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
+import type { SolveResult } from '../solve/solution';
+import { unsolvedElements } from '../study/obstacles';
+import { candidatesView } from './candidates';
 import { cautions } from './cautions';
 import { goalBar, goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
 import { ladderRows } from './ladderRows';
 import { defaultMarkerHz, markerView } from './markerView';
 import { outOfReachNote } from './limitText';
 import { limitViews } from './limitViews';
+import { solvedAssessment } from './solvedAssessment';
 import { bandViews, discViews, maskViews, sweepList, traceView } from './traceViews';
 
 export interface PanelContext {
@@ -16,6 +20,8 @@ export interface PanelContext {
   readonly pinned: boolean;
   /** Null: the middle of the first band. */
   readonly markerHz: number | null;
+  /** What the unknowns came out as; null where nothing is unknown or it is not known yet. */
+  readonly solved?: { readonly result: SolveResult; readonly stale: boolean } | null;
 }
 
 /** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
@@ -25,7 +31,10 @@ export function isDrawable({ evaluation, diagnostics }: Assessment): boolean {
 }
 
 /** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study. */
-export function panelView(assessment: Assessment, context: PanelContext): PanelView | null {
+export function panelView(given: Assessment, context: PanelContext): PanelView | null {
+  const unsolved = given.model.problem !== null && unsolvedElements(given.model.problem).length > 0;
+  const best = unsolved && !context.solved?.stale ? context.solved?.result.solutions[0] : undefined;
+  const assessment = best ? solvedAssessment(given, best) : given;
   const { description, model, evaluation } = assessment;
   const { problem } = model;
   if (!problem || !evaluation) return null;
@@ -36,7 +45,7 @@ export function panelView(assessment: Assessment, context: PanelContext): PanelV
     pinned: context.pinned,
     verdict: verdictText(evaluation.goals),
     goals: evaluation.goals.map((result, id) => goalView(result, id, problem)),
-    problems: problemViews(assessment),
+    problems: problemViews(given).filter(({ code }) => !best || code !== 'unsolved').map(({ severity, message, line }) => ({ severity, message, line })),
     cautions: cautions(problem, evaluation),
     z0Ohm: problem.z0Ohm,
     frequencyHz: sweepList(evaluation),
@@ -47,8 +56,12 @@ export function panelView(assessment: Assessment, context: PanelContext): PanelV
     masks: maskViews(problem, evaluation.goals),
     marker: markerHz === null ? null : markerView(problem, markerHz),
     ladder: ladderRows(assessment, problem),
+    notInserted: best !== undefined,
+    candidates: !unsolved ? null : context.solved ? candidatesView(context.solved.result, { stale: context.solved.stale }) : solving,
   };
 }
+
+const solving: CandidatesView = { stale: true, message: 'The values are being worked out …', notes: [], candidates: [] };
 
 function goalView(result: GoalResult, id: number, problem: Problem): GoalView {
   return {
@@ -66,9 +79,9 @@ function goalView(result: GoalResult, id: number, problem: Problem): GoalView {
 }
 
 /** What is wrong with the text, without the goals that are merely missed: those stand in the verdict. */
-export function problemViews({ description, diagnostics }: Assessment): ProblemView[] {
+export function problemViews({ description, diagnostics }: Assessment): (ProblemView & { readonly code: string })[] {
   const lines = lineMap(description.syntax.text);
   return diagnostics
     .filter(({ code }) => code !== 'goal-missed' && code !== 'goal-not-known')
-    .map(({ severity, message, span }) => ({ severity, message, line: lines.positionAt(span.start).line }));
+    .map(({ code, severity, message, span }) => ({ code, severity, message, line: lines.positionAt(span.start).line }));
 }

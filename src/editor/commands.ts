@@ -6,11 +6,14 @@ import type { DocumentStudies } from './documentStudies';
 import type { Log } from './log';
 import type { PanelHost } from './panel/panelHost';
 import type { ValueEdits } from './panel/valueEdits';
+import { insertSolved, solveAgain } from './insertSolved';
 import { isDescription } from './ranges';
+import type { DocumentSolver } from './solver';
 
 interface Services {
   readonly extensionUri: vscode.Uri;
   readonly studies: DocumentStudies;
+  readonly solver: DocumentSolver;
   readonly panels: PanelHost;
   readonly edits: ValueEdits;
   readonly log: Log;
@@ -54,7 +57,7 @@ async function step(edits: ValueEdits, direction: 'up' | 'down'): Promise<void> 
 }
 
 /** The commands of package.json; each failure is logged and told. */
-export function registerCommands({ extensionUri, studies, panels, edits, log }: Services): vscode.Disposable {
+export function registerCommands({ extensionUri, studies, solver, panels, edits, log }: Services): vscode.Disposable {
   const command = (name: string, run: (argument: unknown) => unknown) =>
     vscode.commands.registerCommand(name, async (argument: unknown) => {
       try {
@@ -70,6 +73,14 @@ export function registerCommands({ extensionUri, studies, panels, edits, log }: 
     command('ohmward.unpinPanel', () => panels.setPinned(false)),
     command('ohmward.stepUp', () => step(edits, 'up')),
     command('ohmward.stepDown', () => step(edits, 'down')),
+    command('ohmward.insertSolution', async (argument) => {
+      const document = await describedBy(argument);
+      if (document) await insertSolved(document, solver);
+    }),
+    command('ohmward.solveAgain', async (argument) => {
+      const document = await describedBy(argument);
+      if (document) await solveAgain(document, solver);
+    }),
     command('ohmward.revealWorstGoal', () => revealWorstGoal(studies)),
     command('ohmward.openReference', () => vscode.commands.executeCommand('markdown.showPreview', vscode.Uri.joinPath(extensionUri, 'media', 'language-reference.md'))),
     command('ohmward.showLog', () => log.show()),

@@ -21,3 +21,15 @@ export const SMOOTH_STUDY_MS = 30;
 
 /** No evaluation waits longer than this for a pause in the typing. */
 export const MAX_STUDY_DELAY_MS = 400;
+
+/** A solver that works for a text which has changed since gets so long to finish before it is ended. */
+export const SUPERSEDED_GRACE_MS = 150;
+
+/** Solving that takes longer than this shows that it goes on. */
+export const PROGRESS_AFTER_MS = 500;
+
+/** A solver that gives no sign for so long is taken for dead. */
+export const HANGING_AFTER_MS = 60_000;
+
+/** Solutions that are asked for: what the panel lists. */
+export const CANDIDATES = 10;

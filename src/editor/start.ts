@@ -16,6 +16,9 @@ import { registerInlayHints } from './providers/inlayHints';
 import { registerLinks } from './providers/links';
 import { registerNames } from './providers/names';
 import { registerOutline } from './providers/outline';
+import { registerLenses } from './providers/lenses';
+import { registerSolutions } from './providers/solutions';
+import { createDocumentSolver } from './solver';
 import { createStatusItem } from './statusItem';
 
 /** Starts the extension; the same in both extension hosts, with Node and without. */
@@ -25,16 +28,19 @@ export function start(context: vscode.ExtensionContext): void {
   const studies = createDocumentStudies(store, log);
   const edits = createValueEdits(studies, log);
   const highlight = createElementHighlight();
-  const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, edits, highlight, log });
+  const solver = createDocumentSolver(context.extensionUri, studies, log);
+  const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, solver, edits, highlight, log });
   const assistance: Assistance = { studies, log };
   const register = [
     registerHover, registerInlayHints, registerLinks, registerOutline, registerNames, registerCompletion, registerFixes, registerFormatting,
   ];
   context.subscriptions.push(
-    log, store, studies, highlight, panels,
+    log, store, studies, solver, highlight, panels,
     publishDiagnostics(studies),
     createStatusItem(studies),
-    registerCommands({ extensionUri: context.extensionUri, studies, panels, edits, log }),
+    registerCommands({ extensionUri: context.extensionUri, studies, solver, panels, edits, log }),
+    registerLenses(assistance, solver),
+    registerSolutions(assistance, solver),
     ...register.map((feature) => feature(assistance)),
   );
 }

@@ -1,5 +1,5 @@
 import { byType, flag, listOf, number, oneOf, orNull, shape, text, whole, type Decoder } from './decode';
-import type { BandView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, ToHost, ToPage, TraceView } from './panel';
+import type { BandView, CandidateView, CandidatesView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, ToHost, ToPage, TraceView } from './panel';
 
 const maybeNumbers = listOf(orNull(number));
 const point = shape<{ re: number; im: number }>({ re: number, im: number });
@@ -20,9 +20,13 @@ const row = shape<LadderRowView>({
   symbol: oneOf('load', 'source', 'resistor', 'inductor', 'capacitor', 'branch', 'line', 'stub open', 'stub short', 'transformer', 'block', 'bridge', 'open', 'unsolved'),
   value: text, reactance: text, impedanceAfter: text, voltage: text, current: text, heat: text, note: text, line: orNull(whole), editable: flag,
 });
+const candidate = shape<CandidateView>({
+  id: whole, values: text, holds: flag, margin: text, returnLoss: text, gain: text, parts: text, response: text, directCurrent: text, proof: text, note: text,
+});
+const candidates = shape<CandidatesView>({ stale: flag, message: text, notes: listOf(text), candidates: listOf(candidate) });
 const view = shape<PanelView>({
   title: text, fileName: text, pinned: flag, verdict: text, goals: listOf(goal), problems: listOf(problem), cautions: listOf(text), z0Ohm: number,
-  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row),
+  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row), notInserted: flag, candidates: orNull(candidates),
 });
 
 /** A message from the host; null where it is none. */
@@ -32,6 +36,7 @@ const toPage: Decoder<ToPage> = byType<ToPage>({
   view: shape({ type: oneOf('view'), document: text, version: whole, view }),
   stale: shape({ type: oneOf('stale'), document: text, version: whole, reason: orNull(text), problems: listOf(problem) }),
   marker: shape({ type: oneOf('marker'), document: text, version: whole, request: whole, marker: orNull(marker), refusal: orNull(text) }),
+  preview: shape({ type: oneOf('preview'), document: text, version: whole, request: whole, traces: orNull(listOf(trace)) }),
   cursor: shape({ type: oneOf('cursor'), document: text, version: whole, elementId: orNull(text), goalId: orNull(whole) }),
   nothing: shape({ type: oneOf('nothing'), document: (data) => (data === '' ? '' : undefined), version: (data) => (data === 0 ? 0 : undefined), message: text }),
 });
@@ -47,6 +52,8 @@ const toHost: Decoder<ToHost> = byType<ToHost>({
   'point at element': shape({ type: oneOf('point at element'), document: text, elementId: orNull(text) }),
   'step value': shape({ type: oneOf('step value'), document: text, version: whole, elementId: text, direction: oneOf('up', 'down') }),
   'set value': shape({ type: oneOf('set value'), document: text, version: whole, elementId: text, text }),
+  'preview candidate': shape({ type: oneOf('preview candidate'), document: text, version: whole, request: whole, candidate: whole }),
+  'insert candidate': shape({ type: oneOf('insert candidate'), document: text, version: whole, candidate: whole }),
   copy: shape({ type: oneOf('copy'), document: text, what: oneOf('chart svg', 'ladder csv', 'ladder markdown'), text }),
   save: shape({ type: oneOf('save'), document: text, what: oneOf('chart svg', 'chart png'), base64: text }),
   pin: shape({ type: oneOf('pin'), document: text, pinned: flag }),

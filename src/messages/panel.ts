@@ -118,6 +118,34 @@ export interface ProblemView {
   readonly line: number;
 }
 
+/** One way to fill in what is unknown. */
+export interface CandidateView {
+  /** What the page sends back to mean it. */
+  readonly id: number;
+  /** `L1 6.8 nH, C1 3.3 pF` */
+  readonly values: string;
+  readonly holds: boolean;
+  readonly margin: string;
+  readonly returnLoss: string;
+  readonly gain: string;
+  readonly parts: string;
+  /** `low-pass` */
+  readonly response: string;
+  /** `passes`, `blocked` */
+  readonly directCurrent: string;
+  readonly proof: string;
+  readonly note: string;
+}
+
+export interface CandidatesView {
+  /** True where the text has changed since. */
+  readonly stale: boolean;
+  /** Why there is none, or that it is being solved; empty otherwise. */
+  readonly message: string;
+  readonly notes: readonly string[];
+  readonly candidates: readonly CandidateView[];
+}
+
 /** One whole picture. Everything that a person reads is text made by the host, so panel, hover and report agree. */
 export interface PanelView {
   readonly title: string;
@@ -138,6 +166,10 @@ export interface PanelView {
   readonly masks: readonly MaskView[];
   readonly marker: MarkerView | null;
   readonly ladder: readonly LadderRowView[];
+  /** True where traces and ladder are those of the best candidate, which is not in the text. */
+  readonly notInserted: boolean;
+  /** Null where nothing is left to solve. */
+  readonly candidates: CandidatesView | null;
 }
 
 export type ToPage =
@@ -145,6 +177,8 @@ export type ToPage =
   /** The numbers shown are older than the text; `reason` where they cannot be renewed. */
   | { readonly type: 'stale'; readonly document: string; readonly version: number; readonly reason: string | null; readonly problems: readonly ProblemView[] }
   | { readonly type: 'marker'; readonly document: string; readonly version: number; readonly request: number; readonly marker: MarkerView | null; readonly refusal: string | null }
+  /** What one candidate would look like; null where it is not known any more. */
+  | { readonly type: 'preview'; readonly document: string; readonly version: number; readonly request: number; readonly traces: readonly TraceView[] | null }
   /** The cursor in the editor is on this element or goal. */
   | { readonly type: 'cursor'; readonly document: string; readonly version: number; readonly elementId: string | null; readonly goalId: number | null }
   | { readonly type: 'nothing'; readonly document: ''; readonly version: 0; readonly message: string };
@@ -158,6 +192,8 @@ export type ToHost =
   | { readonly type: 'point at element'; readonly document: string; readonly elementId: string | null }
   | { readonly type: 'step value'; readonly document: string; readonly version: number; readonly elementId: string; readonly direction: 'up' | 'down' }
   | { readonly type: 'set value'; readonly document: string; readonly version: number; readonly elementId: string; readonly text: string }
+  | { readonly type: 'preview candidate'; readonly document: string; readonly version: number; readonly request: number; readonly candidate: number }
+  | { readonly type: 'insert candidate'; readonly document: string; readonly version: number; readonly candidate: number }
   | { readonly type: 'copy'; readonly document: string; readonly what: 'chart svg' | 'ladder csv' | 'ladder markdown'; readonly text: string }
   | { readonly type: 'save'; readonly document: string; readonly what: 'chart svg' | 'chart png'; readonly base64: string }
   | { readonly type: 'pin'; readonly document: string; readonly pinned: boolean }

@@ -8,6 +8,8 @@ export interface PlotData {
   readonly plot: 'reflection' | 'gain';
   readonly frequencyHz: readonly number[];
   readonly traces: readonly TraceView[];
+  /** What the traces would be with other values. */
+  readonly previews?: readonly TraceView[];
   readonly bands: readonly BandView[];
   readonly masks: readonly MaskView[];
   readonly markerHz: number | null;
@@ -54,8 +56,8 @@ export function frequencyPlot(data: PlotData): string {
   const key = data.plot === 'reflection' ? ('reflectionDb' as const) : ('gainDb' as const);
   const floor = y.domain()[0];
   const xs = data.frequencyHz.map((hz) => x(hz));
-  const lines = data.traces.map((trace, i) =>
-    tag('path', { class: `trace ${caseClass(i)}`, d: polyline(xs, trace[key].map((level) => (level === null ? null : y(Math.max(level, floor))))) }));
+  const lines = [...data.traces, ...(data.previews ?? [])].map((trace, i) =>
+    tag('path', { class: i < data.traces.length ? `trace ${caseClass(i)}` : 'preview', d: polyline(xs, trace[key].map((level) => (level === null ? null : y(Math.max(level, floor))))) }));
   const marker = data.markerHz === null || data.markerHz < low || data.markerHz > high ? ''
     : tag('line', { class: 'marker-line', x1: x(data.markerHz), y1: area.top, x2: x(data.markerHz), y2: bottom });
   return title + bands.join('') + levels.join('') + frequencies.join('') + lines.join('') + masksMarkup(data, x, y) + marker;

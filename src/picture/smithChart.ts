@@ -6,6 +6,8 @@ import { escapeText, polyline, tag, textTag } from './svg';
 export interface ChartData {
   readonly frequencyHz: readonly number[];
   readonly traces: readonly TraceView[];
+  /** What the traces would be with other values. */
+  readonly previews?: readonly TraceView[];
   readonly bands: readonly BandView[];
   readonly discs: readonly DiscView[];
   readonly limits: readonly DiscView[];
@@ -34,6 +36,7 @@ export function smithChart(data: ChartData): string {
     tag('g', { class: 'discs' }, [...data.discs.map((disc) => discMarkup('disc', disc)), ...data.limits.map((limit) => discMarkup('limit', limit))].join('') || ' '),
     tag('g', { class: 'guides', 'aria-hidden': 'true' }, first ? guides(first, data.ladder) : ' '),
     tag('g', { class: 'traces' }, data.traces.map((trace, i) => traceMarkup(trace, i, data)).join('') || ' '),
+    ...(data.previews ?? []).map(previewMarkup),
     tag('g', { class: 'path' }, first ? pathMarkup(first, data) : ' '),
     tag('g', { class: 'markers' }, (data.marker?.cases ?? []).map((reading, i) => inputDot(reading, i)).join('') || ' '),
   ].join('');
@@ -52,6 +55,10 @@ function traceMarkup({ caseName, reflection }: TraceView, index: number, { frequ
     return data === '' ? '' : tag('path', { class: `trace in-band${watch ? ' watched' : ''} ${caseClass(index)}`, d: data });
   });
   return tag('g', { 'data-case': index }, tag('path', { class: `trace ${caseClass(index)}`, d: polyline(xs, ys) }, tag('title', {}, escapeText(caseName))) + inBands.join(''));
+}
+
+function previewMarkup({ reflection }: TraceView): string {
+  return tag('path', { class: 'preview', d: polyline(reflection.re.map((re) => (re === null ? null : chartX(re))), reflection.im.map((im) => (im === null ? null : chartY(im)))) });
 }
 
 /** Dotted circles along which the elements move the point, so that the eye finds the arcs' law. */

@@ -3,7 +3,7 @@ import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import type { ToHost } from '../../src/messages/panel';
 import { openPage, startPages, stopPages, type ServedPage } from './servedPage';
-import { sampleView, viewMessage } from './sampleView';
+import { sampleView, unsolvedView, viewMessage } from './sampleView';
 import { bodyClass, type ThemeKind } from './themes';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
@@ -30,6 +30,33 @@ describe('the panel’s page', function () {
         assert.equal(await served.page.textContent('.verdict h2'), 'Verdict: all 5 hold');
         assert.equal(await served.page.locator('table.ladder tbody tr').count(), 5);
         assert.equal(await served.page.locator('svg.chart .arc').count(), 3);
+        assert.deepEqual(await served.violations(), []);
+        await served.page.close();
+      });
+
+      it('lists candidates, previews the one that is pointed at or has the focus, and inserts it', async () => {
+        const served = await openPage('dark', 580, controls);
+        const { view, previews } = unsolvedView();
+        await served.post(viewMessage(view, 3));
+        assert.equal(await served.page.textContent('.verdict h2'), `Verdict: with the best candidate ${view.verdict}not inserted`);
+        assert.equal(await served.page.locator('.candidates li').count(), view.candidates?.candidates.length);
+        await served.page.locator('.candidates li').nth(1).hover();
+        const asked = await last(served, 'preview candidate');
+        assert.ok(asked?.type === 'preview candidate' && asked.candidate === 1 && asked.version === 3);
+        await served.post({ type: 'preview', document, version: 3, request: asked.request, traces: previews });
+        assert.equal(await served.page.locator('svg.chart .preview').count(), previews.length);
+        assert.equal(await served.page.locator('svg.plot .preview').count(), 2 * previews.length);
+        // An answer to an older question changes nothing.
+        await served.post({ type: 'preview', document, version: 3, request: asked.request - 1, traces: null });
+        assert.equal(await served.page.locator('svg.chart .preview').count(), previews.length);
+        await served.page.hover('h1');
+        assert.equal(await served.page.locator('svg.chart .preview').count(), 0);
+        const button = served.page.locator('.candidates li').nth(2).locator(controls === 'toolkit' ? 'vscode-button' : 'button');
+        await button.focus();
+        const focused = await last(served, 'preview candidate');
+        assert.ok(focused?.type === 'preview candidate' && focused.candidate === 2);
+        await served.page.keyboard.press('Enter');
+        assert.deepEqual(await last(served, 'insert candidate'), { type: 'insert candidate', document, version: 3, candidate: 2 });
         assert.deepEqual(await served.violations(), []);
         await served.page.close();
       });
@@ -165,10 +192,13 @@ describe('the panel’s page', function () {
     await served.page.close();
   });
 
-  for (const theme of Object.keys(bodyClass) as ThemeKind[]) {
-    it(`has nothing that axe finds serious in ${theme}`, async () => {
+  for (const [theme, what, view] of (Object.keys(bodyClass) as ThemeKind[]).flatMap((theme) => [
+    [theme, 'a missed goal', sampleView((text) => text.replace('rejection >= 8 dB', 'rejection >= 12 dB'))] as const,
+    [theme, 'candidates', unsolvedView().view] as const,
+  ])) {
+    it(`has nothing that axe finds serious in ${theme}, with ${what}`, async () => {
       const served = await openPage(theme, 580);
-      await served.post(viewMessage(sampleView((text) => text.replace('rejection >= 8 dB', 'rejection >= 12 dB'))));
+      await served.post(viewMessage(view));
       await served.page.evaluate(axeSource);
       const found = await served.page.evaluate(() => (window as unknown as { axe: { run(): Promise<{ violations: { id: string; impact: string; nodes: { html: string }[] }[] }> } }).axe.run());
       const serious = found.violations.filter(({ impact }) => impact === 'serious' || impact === 'critical').map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 120)).join(' | ')}`);
@@ -180,8 +210,10 @@ describe('the panel’s page', function () {
   for (const width of [320, 580, 1000]) {
     it(`fits ${width} px without scrolling the page sideways`, async () => {
       const served = await openPage('dark', width);
-      await served.post(viewMessage(sampleView()));
-      assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
+      for (const [version, view] of [sampleView(), unsolvedView().view].entries()) {
+        await served.post(viewMessage(view, version + 1));
+        assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
+      }
       await served.page.close();
     });
   }

@@ -2,9 +2,12 @@ import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { assessDescription, type Assessment } from '../../src/assistance/assess';
 import { panelView } from '../../src/assistance/panelView';
+import { solvedAssessment } from '../../src/assistance/solvedAssessment';
+import { traceView } from '../../src/assistance/traceViews';
 import { loadFiles } from '../../src/cli/loadFiles';
 import { readDescription } from '../../src/description/readDescription';
-import type { PanelView, ToPage } from '../../src/messages/panel';
+import type { PanelView, ToPage, TraceView } from '../../src/messages/panel';
+import { solveProblem } from '../../src/solve/solveProblem';
 
 const folder = fileURLToPath(new URL('../../media/samples/orchard/', import.meta.url));
 
@@ -16,5 +19,13 @@ export function sampleAssessment(change: (text: string) => string = (text) => te
 
 export const sampleView = (change?: (text: string) => string): PanelView =>
   panelView(sampleAssessment(change), { fileName: 'frost.match.yaml', pinned: false, markerHz: null })!;
+
+/** The sample with two values left to solve, and what they came out as. */
+export function unsolvedView(stale = false): { readonly view: PanelView; readonly previews: readonly TraceView[] } {
+  const assessment = sampleAssessment((text) => text.replace('10 nH from coils', 'solve from coils').replace('18 pF from caps', 'solve from caps or none'));
+  const result = solveProblem(assessment.model.problem!, { top: 4 });
+  const view = panelView(assessment, { fileName: 'frost.match.yaml', pinned: false, markerHz: null, solved: { result, stale } })!;
+  return { view, previews: solvedAssessment(assessment, result.solutions[1]).evaluation!.traces.map(traceView) };
+}
 
 export const viewMessage = (view: PanelView, version = 1): ToPage => ({ type: 'view', document: 'file:///orchard/frost.match.yaml', version, view });

@@ -1,14 +1,20 @@
 import * as vscode from 'vscode';
+import { listedSolutions } from '../../assistance/candidates';
 import { elementAt } from '../../assistance/elementAt';
 import { markerView } from '../../assistance/markerView';
 import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
 import { readMarkerText } from '../../assistance/readMarkerText';
+import { solvedAssessment } from '../../assistance/solvedAssessment';
 import { setValue, steppedValue } from '../../assistance/steppedValue';
+import { traceView } from '../../assistance/traceViews';
 import { decodeToHost } from '../../messages/decodePanel';
 import { pageHtml } from '../../messages/pageHtml';
 import type { ToHost, ToPage } from '../../messages/panel';
 import type { DocumentStudies, Study } from '../documentStudies';
+import { insertSolved } from '../insertSolved';
 import type { Log } from '../log';
+import type { DocumentSolver } from '../solver';
+import { PROGRESS_AFTER_MS } from '../limits';
 import { copyText, savePicture } from './exports';
 import type { ElementHighlight } from './elementHighlight';
 import type { ValueEdits } from './valueEdits';
@@ -16,6 +22,7 @@ import type { ValueEdits } from './valueEdits';
 export interface PanelServices {
   readonly extensionUri: vscode.Uri;
   readonly studies: DocumentStudies;
+  readonly solver: DocumentSolver;
   readonly edits: ValueEdits;
   readonly highlight: ElementHighlight;
   readonly log: Log;
@@ -62,11 +69,12 @@ async function revealLine(document: vscode.TextDocument, line: number): Promise<
 }
 
 export function createPanelSession(panel: vscode.WebviewPanel, services: PanelServices, initial: PanelState): PanelSession {
-  const { studies, edits, highlight, log } = services;
+  const { studies, solver, edits, highlight, log } = services;
   const state: PanelState = { ...initial };
   const changed = new vscode.EventEmitter<void>();
   let shown: vscode.TextDocument | null = null;
   let staleTimer: ReturnType<typeof setTimeout> | undefined;
+  let solvingTimer: ReturnType<typeof setTimeout> | undefined;
   // A document that is closed and opened again counts its versions from 1, and the page drops what looks older.
   let versionsBefore = 0;
   /** The description whose good picture the page holds. */
@@ -80,7 +88,9 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const sendStudy = (study: Study) => {
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
-    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz });
+    const found = solver.latest(document);
+    const solved = found && { result: found.result, stale: found.study.version !== version };
+    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved });
     // What can still be computed is shown, unless a better picture of the same description stands there.
     if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
       if (isDrawable(assessment)) pictured = idOf(document);
@@ -169,6 +179,19 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       case 'set value':
         await edits.apply(document, (assessment) => setValue(assessment, message.elementId, message.text));
         break;
+      case 'preview candidate': {
+        const solved = solver.latest(document);
+        const study = studies.latest(document);
+        const solution = solved && study && solved.study.version === study.version ? listedSolutions(solved.result)[message.candidate] : undefined;
+        const traces = solution && study ? (solvedAssessment(study.assessment, solution).evaluation?.traces ?? []).map(traceView) : null;
+        send({ type: 'preview', document: idOf(document), version: versionOf(study?.version ?? document.version), request: message.request, traces });
+        break;
+      }
+      case 'insert candidate':
+        // What the person saw must be what is meant.
+        if (message.version !== versionOf(document.version)) break;
+        await insertSolved(document, solver, message.candidate);
+        break;
       case 'copy':
         await copyText(message.text);
         break;
@@ -196,7 +219,17 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       handle(message).catch((error: unknown) => log.failure(`the panel: ${message.type}`, error));
     }),
     studies.onDidFinish((study) => {
-      if (study.document === shown) sendStudy(study);
+      if (study.document !== shown) return;
+      clearTimeout(solvingTimer);
+      // While its values are worked out the last picture stays for a moment: mostly the answer is there before one sees it go.
+      if (solver.isSolving(study.document) && pictured === idOf(study.document)) solvingTimer = setTimeout(() => sendStudy(study), PROGRESS_AFTER_MS);
+      else sendStudy(study);
+    }),
+    solver.onDidSolve((document) => {
+      const study = document === shown ? studies.latest(document) : null;
+      if (!study || solver.isSolving(document)) return;
+      clearTimeout(solvingTimer);
+      sendStudy(study);
     }),
     studies.onDidFail(({ document, message }) => {
       if (document === shown) send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: message, problems: [] });
@@ -209,6 +242,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   );
   panel.onDidDispose(() => {
     clearTimeout(staleTimer);
+    clearTimeout(solvingTimer);
     highlight.clear();
     subscriptions.dispose();
   });

@@ -1,0 +1,54 @@
+import type { CandidateView, CandidatesView } from '../messages/panel';
+import { decibels, returnLossDb } from '../network/figures';
+import { printNumber } from '../quantity/printQuantity';
+import type { Solution, SolveResult } from '../solve/solution';
+import { solvedValue } from './insertSolution';
+
+const dB = (value: number): string => `${printNumber(value, 3)} dB`;
+
+/** `L1 6.8 nH, C1 3.3 pF`: without the families, which all candidates share. */
+export function valuesText({ solved }: Pick<Solution, 'solved'>): string {
+  return solved.map((each) => `${each.name} ${solvedValue({ ...each, family: null, label: null })}${each.label === null ? '' : ` (${each.label})`}`).join(', ');
+}
+
+const partsText = (count: number): string => `${count} part${count === 1 ? '' : 's'}`;
+const conditions = (missed: number): string => (missed === 0 ? '' : `misses ${missed === 1 ? 'a condition' : `${missed} conditions`}`);
+
+/** What is known of ladders that are not listed, in a few words. */
+export function proofWords({ proved, boundDb, parts }: Solution): string {
+  if (!proved) return 'best found; not proved';
+  if (boundDb === Infinity) return 'exact match';
+  return `proved: none of ${partsText(parts)} has more than ${dB(boundDb ?? 0)}`;
+}
+
+/** The solver's answer as the panel lists it; `stale` where the text has changed since. */
+export function candidatesView(result: SolveResult, options: { readonly stale: boolean }): CandidatesView {
+  const { solutions, byParts } = result;
+  const others = byParts.filter((each) => !solutions.includes(each));
+  return {
+    stale: options.stale,
+    message: result.reason === null ? '' : `No solution: ${result.reason}.`,
+    notes: [...result.hints, ...result.outOfReach.map(({ form, reason }) => `${form}: out of reach, ${reason}.`)],
+    candidates: [...solutions, ...others].map((solution, id) => candidateView(solution, id, byParts.includes(solution), id >= solutions.length)),
+  };
+}
+
+function candidateView(solution: Solution, id: number, bestOfParts: boolean, further: boolean): CandidateView {
+  return {
+    id,
+    values: valuesText(solution),
+    holds: solution.holds,
+    margin: dB(solution.marginDb),
+    returnLoss: dB(returnLossDb(solution.worstReflection)),
+    gain: dB(decibels(solution.worstGain)),
+    parts: String(solution.parts),
+    response: solution.form,
+    directCurrent: solution.dcPath === null ? 'not known' : solution.dcPath ? 'passes' : 'blocked',
+    // Said once for each number of parts: of the others it follows.
+    proof: bestOfParts ? proofWords(solution) : '',
+    note: [conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : '', further ? 'below the ones above' : ''].filter((text) => text !== '').join(' · '),
+  };
+}
+
+/** All that `candidatesView` lists, in its order: an id is an index into it. */
+export const listedSolutions = ({ solutions, byParts }: SolveResult): readonly Solution[] => [...solutions, ...byParts.filter((each) => !solutions.includes(each))];

@@ -1,0 +1,54 @@
+import type { CandidateView, PanelView } from '../src/messages/panel';
+import type { Actions } from './actions';
+import type { Controls } from './controls';
+import { element, setText, syncList } from './dom';
+
+/** What could be put in the place of the unknown values, best first. A row that is pointed at or has the focus shows its trace. */
+export function candidatesSection(controls: Controls, actions: Actions) {
+  const heading = element('h2');
+  const message = element('p', { class: 'candidates-message', role: 'status' });
+  const list = element('ol', { class: 'candidates' });
+  const notes = element('ul', { class: 'candidate-notes', 'aria-label': 'Remarks on the solutions' });
+  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, list, notes);
+  const makeRow = () => {
+    const id = () => Number(row.dataset.candidate);
+    const insert = controls.button({ label: 'Insert', onPress: () => actions.insertCandidate(id()) });
+    insert.classList.add('insert');
+    const row = element('li', {},
+      element('div', { class: 'candidate' },
+        element('span', { class: 'values' }),
+        element('span', { class: 'figures' }, element('span', { class: 'margin' }), element('span', { class: 'more-figures' })),
+        element('span', { class: 'remark' })),
+      insert);
+    row.addEventListener('pointerenter', () => actions.previewCandidate(id()));
+    row.addEventListener('pointerleave', () => actions.previewCandidate(null));
+    row.addEventListener('focusin', () => actions.previewCandidate(id()));
+    row.addEventListener('focusout', () => actions.previewCandidate(null));
+    return row;
+  };
+  const updateRow = (row: HTMLElement, candidate: CandidateView) => {
+    const find = (name: string) => row.querySelector(`.${name}`)!;
+    row.dataset.candidate = String(candidate.id);
+    row.className = candidate.holds ? 'held' : 'missed';
+    setText(find('values'), candidate.values);
+    setText(find('margin'), `${candidate.holds ? '✓' : '✗'} margin ${candidate.margin}`);
+    setText(find('more-figures'), `return loss ${candidate.returnLoss}, gain ${candidate.gain}`);
+    setText(find('remark'), [candidate.note, candidate.proof, candidate.response, `direct current ${candidate.directCurrent}`].filter((text) => text !== '').join(' · '));
+    find('insert').setAttribute('aria-label', `Insert ${candidate.values}, margin ${candidate.margin}`);
+  };
+  return {
+    root,
+    update({ candidates }: Pick<PanelView, 'candidates'>) {
+      root.hidden = candidates === null;
+      if (candidates === null) return;
+      root.classList.toggle('old', candidates.stale);
+      setText(heading, candidates.stale && candidates.candidates.length > 0 ? 'Candidates (being worked out anew)' : 'Candidates');
+      setText(message, candidates.message);
+      message.hidden = candidates.message === '';
+      syncList(list, candidates.candidates, makeRow, updateRow);
+      list.hidden = candidates.candidates.length === 0;
+      syncList(notes, candidates.notes, () => element('li'), (item, text) => setText(item, text));
+      notes.hidden = candidates.notes.length === 0;
+    },
+  };
+}
