@@ -1,6 +1,7 @@
 import * as vscode from 'vscode';
 import { verdictText } from '../assistance/goalText';
 import { worstGoal, worstGoalDetail, worstGoalText } from '../assistance/worstGoal';
+import { unsolvedElements } from '../study/obstacles';
 import type { DocumentStudies, Study } from './documentStudies';
 import { isDescription } from './ranges';
 
@@ -14,10 +15,15 @@ export function createStatusItem(studies: DocumentStudies): vscode.Disposable {
     const errors = study?.assessment.diagnostics.filter(({ severity }) => severity === 'error').length ?? 0;
     const goals = study?.assessment.evaluation?.goals ?? [];
     const worst = worstGoal(goals);
+    const problem = study?.assessment.model.problem;
+    const toSolve = problem ? unsolvedElements(problem) : [];
     item.backgroundColor = undefined;
     if (study === null) {
       item.text = '$(loading~spin) Ohmward';
       item.tooltip = 'The description is being evaluated.';
+    } else if (errors === 0 && toSolve.length > 0) {
+      item.text = '$(wand) to solve';
+      item.tooltip = `Still to be solved: ${toSolve.join(', ')}.`;
     } else if (worst === null) {
       item.text = errors > 0 ? `$(error) ${errors === 1 ? '1 error' : `${errors} errors`}` : '$(graph-scatter) no goals';
       item.tooltip = errors > 0 ? 'The description has errors.' : 'The description has no goals.';

@@ -36,6 +36,8 @@ describe('candidates in the panel', () => {
     await eventually('the values in the text', () => !document.getText().includes('solve'));
     for (const value of values.matchAll(/[\d.]+ [np][HF]/g)) assert.ok(document.getText().includes(value[0]), `${value[0]} is in the text`);
     await eventually('no candidates any more', async () => (await page.count('.candidates-section:not([hidden])')) === 0);
+    // The panel has the focus; undo is the editor's.
+    await vscode.window.showTextDocument(document, vscode.ViewColumn.One);
     await undo();
     assert.equal(document.getText(), before);
   });

@@ -39,6 +39,20 @@ describe('the extension in a browser, on a virtual file system', () => {
     await marksThat(document, 'none', (all) => all.length === 0);
   });
 
+  it('solves, in a worker of the browser', async () => {
+    const solving = DESCRIPTION.replace('  - series R1: = r * 2', '  - series L1: solve from E24\n  - shunt C1: solve from E24').replace('title: Port', 'title: Open port');
+    files.write('/boards/open.match.yaml', solving);
+    const document = await vscode.workspace.openTextDocument(vscode.Uri.parse('memory:/boards/open.match.yaml'));
+    await vscode.window.showTextDocument(document);
+    await eventually('a solution', async () => {
+      const lenses = await vscode.commands.executeCommand<vscode.CodeLens[]>('vscode.executeCodeLensProvider', document.uri, 20);
+      return lenses.some(({ command }) => command?.title.startsWith('Insert solved values'));
+    });
+    await vscode.commands.executeCommand('ohmward.insertSolution');
+    await eventually('the values in the text', () => !document.getText().includes('solve from'));
+    await vscode.window.showTextDocument(await vscode.workspace.openTextDocument(uri));
+  });
+
   it('shows the panel', async () => {
     await vscode.commands.executeCommand('ohmward.openPanel');
     await eventually('the title in the panel', async () => (await page.text('body'))?.includes('Port in a browser, invented'));
