@@ -3,7 +3,6 @@ import type { CandidatesView, GoalView, PanelView, ProblemView } from '../messag
 import type { GoalResult } from '../study/goal';
 import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
-import type { SolveResult } from '../solve/solution';
 import { unsolvedElements } from '../study/obstacles';
 import { candidatesView } from './candidates';
 import { cautions } from './cautions';
@@ -12,7 +11,7 @@ import { ladderRows } from './ladderRows';
 import { defaultMarkerHz, markerView } from './markerView';
 import { outOfReachNote } from './limitText';
 import { limitViews } from './limitViews';
-import { solvedAssessment } from './solvedAssessment';
+import { shownSolution, solvedAssessment, type SolvedUnknowns } from './solvedAssessment';
 import { bandViews, discViews, maskViews, sweepList, traceView } from './traceViews';
 
 export interface PanelContext {
@@ -21,7 +20,7 @@ export interface PanelContext {
   /** Null: the middle of the first band. */
   readonly markerHz: number | null;
   /** What the unknowns came out as; null where nothing is unknown or it is not known yet. */
-  readonly solved?: { readonly result: SolveResult; readonly stale: boolean } | null;
+  readonly solved?: SolvedUnknowns | null;
 }
 
 /** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
@@ -33,7 +32,7 @@ export function isDrawable({ evaluation, diagnostics }: Assessment): boolean {
 /** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study. */
 export function panelView(given: Assessment, context: PanelContext): PanelView | null {
   const unsolved = given.model.problem !== null && unsolvedElements(given.model.problem).length > 0;
-  const best = unsolved && !context.solved?.stale ? context.solved?.result.solutions[0] : undefined;
+  const best = shownSolution(given.model.problem, context.solved ?? null);
   const assessment = best ? solvedAssessment(given, best) : given;
   const { description, model, evaluation } = assessment;
   const { problem } = model;
@@ -56,7 +55,7 @@ export function panelView(given: Assessment, context: PanelContext): PanelView |
     masks: maskViews(problem, evaluation.goals),
     marker: markerHz === null ? null : markerView(problem, markerHz),
     ladder: ladderRows(assessment, problem),
-    notInserted: best !== undefined,
+    notInserted: best !== null,
     candidates: !unsolved ? null : context.solved ? candidatesView(context.solved.result, { stale: context.solved.stale }) : solving,
   };
 }

@@ -4,7 +4,7 @@ import { candidatesView, listedSolutions } from '../../src/assistance/candidates
 import { ladderLenses } from '../../src/assistance/ladderLenses';
 import { panelView } from '../../src/assistance/panelView';
 import { solutionFixes } from '../../src/assistance/solutionFixes';
-import { solvedAssessment } from '../../src/assistance/solvedAssessment';
+import { shownProblem, solvedAssessment } from '../../src/assistance/solvedAssessment';
 import { applyEdits } from '../../src/base/diagnostic';
 import { solveProblem } from '../../src/solve/solveProblem';
 
@@ -79,6 +79,14 @@ describe('solving in the editor', () => {
     const none = candidatesView({ ...result, solutions: [], byParts: [], reason: 'an invented reason', hints: ['An invented hint.'], outOfReach: [{ form: 'series C, shunt C', reason: 'an invented one' }] }, { stale: true });
     assert.equal(none.message, 'No solution: an invented reason.');
     assert.deepEqual(none.notes, ['An invented hint.', 'series C, shunt C: out of reach, an invented one.']);
+  });
+
+  it('reads the marker with the best candidate in place, unless it belongs to an older text', () => {
+    const { problem } = unsolved.model;
+    assert.deepEqual(shownProblem(problem, { result, stale: false })?.ladder, best.ladder);
+    for (const solved of [null, { result, stale: true }, { result: { ...result, solutions: [] }, stale: false }]) assert.equal(shownProblem(problem, solved), problem);
+    const { problem: settled } = solvedAssessment(unsolved, best).model;
+    assert.equal(shownProblem(settled, { result, stale: false }), settled);
   });
 
   it('shows the best candidate in the panel, and says that it is not inserted', () => {

@@ -4,7 +4,7 @@ import { elementAt } from '../../assistance/elementAt';
 import { markerView } from '../../assistance/markerView';
 import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
 import { readMarkerText } from '../../assistance/readMarkerText';
-import { solvedAssessment } from '../../assistance/solvedAssessment';
+import { shownProblem, solvedAssessment, type SolvedUnknowns } from '../../assistance/solvedAssessment';
 import { setValue, steppedValue } from '../../assistance/steppedValue';
 import { traceView } from '../../assistance/traceViews';
 import { decodeToHost } from '../../messages/decodePanel';
@@ -85,12 +85,14 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const send = (message: ToPage) => void panel.webview.postMessage(message).then(undefined, (error: unknown) => log.failure('telling the panel', error));
   const idOf = (document: vscode.TextDocument) => document.uri.toString();
 
+  const solvedFor = ({ document, version }: Study): SolvedUnknowns | null => {
+    const found = solver.latest(document);
+    return found && { result: found.result, stale: found.study.version !== version };
+  };
   const sendStudy = (study: Study) => {
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
-    const found = solver.latest(document);
-    const solved = found && { result: found.result, stale: found.study.version !== version };
-    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved });
+    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study) });
     // What can still be computed is shown, unless a better picture of the same description stands there.
     if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
       if (isDrawable(assessment)) pictured = idOf(document);
@@ -136,7 +138,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     if (typeof frequencyHz !== 'number') {
       answer(null, frequencyHz.refusal);
     } else {
-      const problem = study?.assessment.model.problem ?? null;
+      const problem = study && shownProblem(study.assessment.model.problem, solvedFor(study));
       const marker = problem && markerView(problem, frequencyHz);
       if (marker) {
         state.markerHz = frequencyHz;
