@@ -3,6 +3,7 @@ import { caseClass, chartBox, chartSummary, chartViewBox, nearestTracePoint, smi
 import type { Actions } from './actions';
 import type { Controls } from './controls';
 import { element, picture, setMarkup, setText, syncList } from './dom';
+import { notInsertedMark } from './notInsertedMark';
 import { stepFrequency } from './stepFrequency';
 
 /** How far from a trace, in the chart's units, a press still takes hold of it. */
@@ -13,6 +14,7 @@ export function chartSection(controls: Controls, actions: Actions) {
   let view: PanelView | null = null;
   let previews: readonly TraceView[] = [];
   const chart = picture(chartViewBox, { class: 'chart', role: 'img', tabindex: '0' });
+  const mark = notInsertedMark();
   const legend = element('ul', { class: 'legend' });
   const field = controls.textField({
     label: 'Marker frequency',
@@ -22,7 +24,7 @@ export function chartSection(controls: Controls, actions: Actions) {
   const readings = element('ul', { class: 'readings' });
   const refusal = element('p', { class: 'refusal', role: 'alert' });
   const root = element('section', { class: 'trace-section', 'aria-label': 'Reflection trace' },
-    element('h2', { text: 'Reflection trace' }), chart as unknown as HTMLElement, legend,
+    element('h2', { text: 'Reflection trace' }, mark.root), chart as unknown as HTMLElement, legend,
     element('div', { class: 'marker-line' }, element('span', { class: 'marker-label', text: 'marker' }), field.root, readings), refusal);
 
   const stepMarker = (points: number) => {
@@ -71,13 +73,14 @@ export function chartSection(controls: Controls, actions: Actions) {
     update(next: PanelView) {
       view = next;
       setMarkup(chart, smithChart({ ...next, previews }));
-      chart.setAttribute('aria-label', `${chartSummary(next)} Arrow keys move the marker.`);
+      chart.setAttribute('aria-label', `${chartSummary(next)}${next.notInserted ? ' With the best candidate, not inserted.' : ''} Arrow keys move the marker.`);
       syncList(legend, legendOf(next), () => element('li', {}, picture('0 0 26 8', { class: 'sample', 'aria-hidden': 'true' }) as unknown as HTMLElement, element('span')), (item, { className, text }) => {
         const sample = item.firstElementChild as SVGElement;
         sample.toggleAttribute('hidden', className === '');
         setMarkup(sample, className === '' ? ' ' : `<path class="${className}" d="M1 4L25 4"/>`);
         setText(item.lastElementChild!, text);
       });
+      mark.show(next.notInserted);
       field.setValue(next.marker?.text ?? '');
       setText(refusal, '');
       syncList(readings, next.marker?.cases ?? [], () => element('li', {}, element('span', { class: 'case-name' }), element('span')), (item, reading) => {

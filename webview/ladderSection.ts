@@ -3,6 +3,7 @@ import { ladderSymbol, symbolSize } from '../src/picture/ladderSymbol';
 import type { Actions } from './actions';
 import type { Controls, TextField } from './controls';
 import { element, picture, setMarkup, setText, syncList } from './dom';
+import { notInsertedMark } from './notInsertedMark';
 
 const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat'] as const;
 
@@ -13,13 +14,13 @@ const columnClass = (name: (typeof columns)[number]) => (name === 'current' ? 'n
 export function ladderSection(controls: Controls, actions: Actions) {
   const fields = new WeakMap<HTMLElement, TextField>();
   let rows: readonly LadderRowView[] = [];
-  const notInserted = element('span', { class: 'not-inserted' });
+  const mark = notInsertedMark();
   const body = element('tbody');
   const table = element('table', { class: 'ladder' },
     element('caption', { class: 'hidden-text', text: 'Ladder, from the load down to the source' }),
     element('thead', {}, element('tr', {}, element('th', { scope: 'col', class: 'symbol' }, element('span', { class: 'hidden-text', text: 'symbol' })), element('th', { scope: 'col' }, element('span', { class: 'hidden-text', text: 'element' })),
       ...columns.map((name) => element('th', { scope: 'col', class: columnClass(name), text: name })))), body);
-  const root = element('section', { class: 'ladder-section', 'aria-label': 'Ladder' }, element('h2', { text: 'Ladder, from the load down to the source' }, notInserted), element('div', { class: 'table-frame', tabindex: '0', role: 'region', 'aria-label': 'Ladder table' }, table));
+  const root = element('section', { class: 'ladder-section', 'aria-label': 'Ladder' }, element('h2', { text: 'Ladder, from the load down to the source' }, mark.root), element('div', { class: 'table-frame', tabindex: '0', role: 'region', 'aria-label': 'Ladder table' }, table));
 
   const makeRow = () => {
     const row = element('tr');
@@ -65,8 +66,7 @@ export function ladderSection(controls: Controls, actions: Actions) {
       rows = view.ladder;
       syncList(body, view.ladder, makeRow, updateRow);
       root.hidden = view.ladder.length === 0;
-      notInserted.hidden = !view.notInserted;
-      setText(notInserted, view.notInserted ? 'not inserted' : '');
+      mark.show(view.notInserted);
     },
     highlight(elementId: string | null) {
       for (const row of body.children) row.classList.toggle('current', elementId !== null && (row as HTMLElement).dataset.element === elementId);

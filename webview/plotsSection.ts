@@ -2,6 +2,7 @@ import type { PanelView, TraceView } from '../src/messages/panel';
 import { frequencyPlot, frequencyScale, frequencyUnit, plotSize } from '../src/picture/frequencyPlot';
 import type { Actions } from './actions';
 import { element, picture, setMarkup, setText } from './dom';
+import { notInsertedMark } from './notInsertedMark';
 import { stepFrequency } from './stepFrequency';
 
 const plots = ['reflection', 'gain'] as const;
@@ -12,9 +13,10 @@ export function plotsSection(actions: Actions) {
   let previews: readonly TraceView[] = [];
   const markupOf = (shown: PanelView, i: number) =>
     frequencyPlot({ plot: plots[i], frequencyHz: shown.frequencyHz, traces: shown.traces, previews, bands: shown.bands, masks: shown.masks, markerHz: shown.marker?.frequencyHz ?? null });
-  const heading = element('h2');
+  const words = element('span');
+  const mark = notInsertedMark();
   const pictures = plots.map(() => picture(`0 0 ${plotSize.width} ${plotSize.height}`, { class: 'plot', role: 'slider', tabindex: '0', 'aria-orientation': 'horizontal' }));
-  const root = element('section', { class: 'plots-section', 'aria-label': 'Over frequency' }, heading, ...pictures.map((made) => made as unknown as HTMLElement));
+  const root = element('section', { class: 'plots-section', 'aria-label': 'Over frequency' }, element('h2', {}, words, mark.root), ...pictures.map((made) => made as unknown as HTMLElement));
   for (const made of pictures) {
     const follow = (event: PointerEvent) => {
       const x = view && frequencyScale(view.frequencyHz);
@@ -42,7 +44,8 @@ export function plotsSection(actions: Actions) {
     root,
     update(next: PanelView) {
       view = next;
-      setText(heading, `Over frequency, ${frequencyUnit(next.frequencyHz).unit}`);
+      mark.show(next.notInserted);
+      setText(words, `Over frequency, ${frequencyUnit(next.frequencyHz).unit}`);
       pictures.forEach((made, i) => {
         setMarkup(made, markupOf(next, i));
         made.setAttribute('aria-label', `${plots[i] === 'reflection' ? 'Reflection' : 'Gain'} over frequency; marker`);

@@ -2,12 +2,13 @@ import type { GoalView, PanelView } from '../src/messages/panel';
 import { barSize, goalBar } from '../src/picture/goalBar';
 import type { Actions } from './actions';
 import { element, picture, setMarkup, setText, syncList } from './dom';
+import { notInsertedMark } from './notInsertedMark';
 
 /** Goal by goal: whether it holds, its margin as a bar, its worst value and where. Each leads to its line. */
 export function verdictSection(actions: Actions) {
   const words = element('span');
-  const notInserted = element('span', { class: 'not-inserted' });
-  const heading = element('h2', {}, words, notInserted);
+  const mark = notInsertedMark();
+  const heading = element('h2', {}, words, mark.root);
   const list = element('ul', { class: 'goals' });
   const root = element('section', { class: 'verdict', 'aria-label': 'Verdict' }, heading, list);
   const makeGoal = () => {
@@ -36,10 +37,9 @@ export function verdictSection(actions: Actions) {
   };
   return {
     root,
-    update({ verdict, goals, notInserted: imagined }: Pick<PanelView, 'verdict' | 'goals' | 'notInserted'>) {
-      setText(words, `Verdict: ${verdict === '' ? 'no goals yet' : imagined ? `with the best candidate ${verdict}` : verdict}`);
-      notInserted.hidden = !imagined;
-      setText(notInserted, imagined ? 'not inserted' : '');
+    update({ verdict, goals, notInserted }: Pick<PanelView, 'verdict' | 'goals' | 'notInserted'>) {
+      setText(words, `Verdict: ${verdict === '' ? 'no goals yet' : notInserted ? `with the best candidate ${verdict}` : verdict}`);
+      mark.show(notInserted);
       syncList(list, goals, makeGoal, updateGoal);
     },
     highlight(goalId: number | null) {
