@@ -6,6 +6,7 @@ import { readDescription } from '../description/readDescription';
 import { evaluate } from '../study/evaluate';
 import type { Evaluation } from '../study/evaluation';
 import { goalDiagnostics } from './goalDiagnostics';
+import type { Spread } from './spreadAssessment';
 
 /** A text, its files and what they amount to: the one thing that editor, panel and command line all start from. */
 export interface Assessment {
@@ -15,6 +16,8 @@ export interface Assessment {
   readonly evaluation: Evaluation | null;
   /** Of the reading, of the model, and of the goals that are missed; in the order of the text. */
   readonly diagnostics: readonly Diagnostic[];
+  /** What builds with tolerances do; absent while it is not worked out, null where there is none. */
+  readonly spread?: Spread | null;
 }
 
 /** Never throws; a file that is not in the map counts as not read yet. */

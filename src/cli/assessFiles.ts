@@ -1,5 +1,6 @@
 import { dirname } from 'node:path';
 import { assessDescription, type Assessment } from '../assistance/assess';
+import { assessWithSpread } from '../assistance/spreadAssessment';
 import { readDescription } from '../description/readDescription';
 import { readText } from './assessFile';
 import { assessInWorkers } from './assessInWorkers';
@@ -17,7 +18,8 @@ export interface AssessedFile {
 /** Fewer descriptions than this are done before the workers have started. */
 const worthWorkers = 24;
 
-export async function assessFiles(paths: readonly string[], around: Surroundings): Promise<AssessedFile[]> {
+/** `spread`: builds with tolerances are studied too, and goals on yield judged. */
+export async function assessFiles(paths: readonly string[], around: Surroundings, { spread }: { readonly spread: boolean } = { spread: false }): Promise<AssessedFile[]> {
   const found = findDescriptions(paths, around.error);
   const prepared = (path: string) => {
     const description = readDescription(readText(path), { expressions: true });
@@ -28,11 +30,12 @@ export async function assessFiles(paths: readonly string[], around: Surroundings
   const assessments = worker === null
     ? found.map((path) => {
         const { description, files } = prepared(path);
-        return assessDescription(description, files);
+        const assessment = assessDescription(description, files);
+        return spread ? assessWithSpread(assessment) : assessment;
       })
     : await assessInWorkers(worker, found.length, (index) => {
         const { description, files } = prepared(found[index]);
-        return { text: description.syntax.text, files, expressions: true };
+        return { text: description.syntax.text, files, expressions: true, spread };
       });
   return found.map((path, index) => ({ path, shown: shownPath(path), assessment: assessments[index] }));
 }

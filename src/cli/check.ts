@@ -12,7 +12,7 @@ import { writeDiagnostics } from './writeDiagnostics';
 /** Reads and evaluates; says for each goal whether it holds and by how much. Never solves. */
 export async function check(paths: readonly string[], options: CallOptions, around: Surroundings): Promise<number> {
   const format = formatOf(options.format, ['text', 'json']);
-  const assessed = await assessFiles(paths, around);
+  const assessed = await assessFiles(paths, around, { spread: true });
   const earlier = (path: string): Assessment | undefined =>
     options.since === undefined ? undefined : assessFile(options.since, [dirname(options.since), dirname(path)]);
   const files: CheckedFile[] = assessed.map(({ shown, path, assessment }) => ({ path: shown, assessment, earlier: earlier(path) }));

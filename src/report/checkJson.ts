@@ -2,6 +2,7 @@ import type { Assessment } from '../assistance/assess';
 import { isOk } from '../assistance/assess';
 import { lineMap } from '../base/lineMap';
 import type { Complex } from '../network/complex';
+import type { Spread } from '../assistance/spreadAssessment';
 import { bandLimits, type BandLimit } from '../solve/bandLimits';
 import type { BandResult, ElementResult } from '../study/evaluation';
 import type { GoalResult } from '../study/goal';
@@ -38,7 +39,19 @@ function fileJson({ path, assessment, earlier }: CheckedFile): object {
     goals: evaluation === null ? unjudged(assessment) : evaluation.goals.map((result) => ({ ...goalJson(result), ...(earlier !== undefined && { before: beforeJson(result, earlier) }) })),
     elements: (description.syntax.ladder ? evaluation?.elements ?? [] : []).map(elementJson),
     bands: (evaluation?.bands ?? []).map((band, at) => bandJson(band, limits[at] ?? null)),
-    spread: null,
+    spread: spreadJson(assessment.spread ?? null),
+  };
+}
+
+function spreadJson(spread: Spread | null): object | null {
+  if (!spread) return null;
+  const { builds, corner } = spread;
+  return {
+    yield: builds.yield, low: builds.low, high: builds.high, builds: builds.builds, seed: builds.seed,
+    worstCorner: {
+      values: Object.fromEntries(corner.values.map(({ name, value }) => [name, value])), margin: finite(corner.marginDb), case: corner.caseName,
+      ...(corner.proved ? {} : { proved: false }),
+    },
   };
 }
 

@@ -1,6 +1,7 @@
 import { isOk } from '../assistance/assess';
 import { cautions } from '../assistance/cautions';
 import { goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from '../assistance/goalText';
+import { spreadLines } from '../assistance/spreadText';
 import { outOfReachNote } from '../assistance/limitText';
 import { goalBefore, type CheckedFile } from './checkJson';
 
@@ -26,7 +27,8 @@ export function checkText({ path, assessment, earlier }: CheckedFile, colour: bo
   const verdict = !evaluation ? 'nothing can be computed' : results.length === 0 ? 'no goals' : verdictText(results);
   const state = isOk(assessment) ? paint(colour, green, verdict) : paint(colour, red, verdict);
   const heed = model.problem && evaluation ? cautions(model.problem, evaluation).map((text) => `  ! ${text}`) : [];
-  return [`${path}: ${state}`, ...lines, ...heed, ''].join('\n');
+  const spread = assessment.spread ? spreadLines(assessment.spread).map((text) => `  ${text}`) : [];
+  return [`${path}: ${state}`, ...lines, ...spread, ...heed, ''].join('\n');
 }
 
 const beforeText = (before: ReturnType<typeof goalBefore>): string => (before ? `was ${goalValueText(before)}${before.ok ? '' : ', missed'}` : 'not asked before');

@@ -1,0 +1,33 @@
+import type { Tolerance } from '../network/part';
+import { printNumber, printQuantity } from '../quantity/printQuantity';
+import type { WorstCorner } from '../study/spread/worstCorner';
+import type { YieldRemedy } from '../study/spread/yieldRemedy';
+import type { SpreadOfBuilds } from '../study/spread/spreadOfBuilds';
+import type { Spread } from './spreadAssessment';
+import { unitOfKind } from './familyMembers';
+
+const percent = (share: number): string => `${printNumber(100 * share, 3)} %`;
+const dB = (value: number): string => `${printNumber(value, 3)} dB`;
+
+/** `97.3 % of 10000 builds hold every goal (96.9 … 97.6 %)` */
+export const yieldText = ({ yield: share, low, high, builds }: SpreadOfBuilds): string =>
+  `${percent(share)} of ${builds} builds hold every goal (95 % interval ${printNumber(100 * low, 3)} to ${percent(high)})`;
+
+/** `worst corner −0.4 dB in wet bark: L1 10.5 nH, C1 4.2 pF` */
+export function cornerText({ values, marginDb, caseName, proved }: WorstCorner): string {
+  const where = caseName === null ? '' : ` in ${caseName}`;
+  const parts = values.map(({ name, kind, value }) => `${name} ${printQuantity(value, unitOfKind[kind], { digits: 3 })}`).join(', ');
+  return `${proved ? 'worst corner' : 'worst corner found (not proved)'} ${dB(marginDb)}${where}: ${parts}`;
+}
+
+const toleranceText = ({ form, up, down }: Tolerance): string => {
+  const one = (value: number): string => (form === 'relative' ? `${printNumber(100 * value, 3)} %` : printNumber(value, 3));
+  return up === down ? `±${one(up)}` : `+${one(up)} −${one(down)}`;
+};
+
+export const remedyText = ({ elementName, tolerance, yield: share }: YieldRemedy): string => `${elementName} at ${toleranceText(tolerance)} would make it ${percent(share)}`;
+
+/** Yield, worst corner, and what would help. */
+export function spreadLines({ builds, corner, remedy }: Spread): string[] {
+  return [yieldText(builds), cornerText(corner), ...(remedy ? [remedyText(remedy)] : [])];
+}
