@@ -5,11 +5,16 @@ import { element, setText, syncList } from './dom';
 
 /** What could be put in the place of the unknown values, best first. A row that is pointed at or has the focus shows its trace. */
 export function candidatesSection(controls: Controls, actions: Actions) {
-  const heading = element('h2');
+  const heading = element('h2', { text: 'Candidates' });
   const message = element('p', { class: 'candidates-message', role: 'status' });
+  const bar = element('progress', { max: 1, 'aria-label': 'How far the solver is' });
+  const progressText = element('span');
+  const progress = element('div', { class: 'progress' }, bar, progressText);
+  progress.hidden = true;
+  let known = false;
   const list = element('ol', { class: 'candidates' });
   const notes = element('ul', { class: 'candidate-notes', 'aria-label': 'Remarks on the solutions' });
-  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, list, notes);
+  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, list, notes);
   const makeRow = () => {
     const id = () => Number(row.dataset.candidate);
     const insert = controls.button({ label: 'Insert', onPress: () => actions.insertCandidate(id()) });
@@ -32,23 +37,32 @@ export function candidatesSection(controls: Controls, actions: Actions) {
     row.className = candidate.holds ? 'held' : 'missed';
     setText(find('values'), candidate.values);
     setText(find('margin'), `${candidate.holds ? '✓' : '✗'} margin ${candidate.margin}`);
-    setText(find('more-figures'), `return loss ${candidate.returnLoss}, gain ${candidate.gain}`);
+    setText(find('more-figures'), `worst return loss ${candidate.returnLoss}, worst gain ${candidate.gain}`);
     setText(find('remark'), [candidate.note, candidate.proof, candidate.response, `direct current ${candidate.directCurrent}`].filter((text) => text !== '').join(' · '));
     find('insert').setAttribute('aria-label', `Insert ${candidate.values}, margin ${candidate.margin}`);
   };
   return {
     root,
     update({ candidates }: Pick<PanelView, 'candidates'>) {
-      root.hidden = candidates === null;
+      known = candidates !== null;
+      root.hidden = !known && progress.hidden;
       if (candidates === null) return;
       root.classList.toggle('old', candidates.stale);
-      setText(heading, candidates.stale && candidates.candidates.length > 0 ? 'Candidates (being worked out anew)' : 'Candidates');
+      setText(heading, candidates.stale && candidates.candidates.length > 0 ? 'Candidates of an older text' : 'Candidates');
       setText(message, candidates.message);
       message.hidden = candidates.message === '';
       syncList(list, candidates.candidates, makeRow, updateRow);
       list.hidden = candidates.candidates.length === 0;
       syncList(notes, candidates.notes, () => element('li'), (item, text) => setText(item, text));
       notes.hidden = candidates.notes.length === 0;
+    },
+    /** Null: nothing is being solved. */
+    progress(state: { readonly share: number; readonly text: string } | null) {
+      progress.hidden = state === null;
+      root.hidden = !known && progress.hidden;
+      if (state === null) return;
+      bar.value = state.share;
+      setText(progressText, state.text);
     },
   };
 }

@@ -112,7 +112,10 @@ window.addEventListener('message', (event: MessageEvent<unknown>) => {
     case 'view':
       shown = { document: message.document, version: message.version, view: message.view };
       viewVersion = message.version;
+      candidates.progress(null);
       showPreview(null);
+      // What is pointed at is asked for anew: the same row may mean another candidate now.
+      if (previewed !== null) actions.previewCandidate(previewed < (message.view.candidates?.candidates.length ?? 0) ? previewed : null);
       host.remember({ document: message.document });
       problems.update(message.view.problems, message.view.cautions);
       header.setFreshness('up to date', false);
@@ -143,6 +146,9 @@ window.addEventListener('message', (event: MessageEvent<unknown>) => {
       break;
     case 'preview':
       if (message.document === shown?.document && message.request === previewRequest && previewed !== null) showPreview(message.traces);
+      break;
+    case 'solving':
+      if (message.document === shown?.document) candidates.progress(message);
       break;
     case 'cursor':
       if (message.document !== shown?.document) break;

@@ -21,6 +21,11 @@ export function proofWords({ proved, boundDb, parts }: Solution): string {
   return `proved: none of ${partsText(parts)} has more than ${dB(boundDb ?? 0)}`;
 }
 
+/** `42 %, best margin so far 1.2 dB` */
+export function progressText({ share, bestMarginDb }: { readonly share: number; readonly bestMarginDb: number | null }): string {
+  return `${Math.floor(share * 100)} %${bestMarginDb === null || !Number.isFinite(bestMarginDb) ? '' : `, best margin so far ${dB(bestMarginDb)}`}`;
+}
+
 /** The solver's answer as the panel lists it; `stale` where the text has changed since. */
 export function candidatesView(result: SolveResult, options: { readonly stale: boolean }): CandidatesView {
   const { solutions, byParts } = result;
@@ -29,11 +34,11 @@ export function candidatesView(result: SolveResult, options: { readonly stale: b
     stale: options.stale,
     message: result.reason === null ? '' : `No solution: ${result.reason}.`,
     notes: [...result.hints, ...result.outOfReach.map(({ form, reason }) => `${form}: out of reach, ${reason}.`)],
-    candidates: [...solutions, ...others].map((solution, id) => candidateView(solution, id, byParts.includes(solution), id >= solutions.length)),
+    candidates: [...solutions, ...others].map((solution, id) => candidateView(solution, id, byParts.includes(solution))),
   };
 }
 
-function candidateView(solution: Solution, id: number, bestOfParts: boolean, further: boolean): CandidateView {
+function candidateView(solution: Solution, id: number, bestOfParts: boolean): CandidateView {
   return {
     id,
     values: valuesText(solution),
@@ -46,7 +51,7 @@ function candidateView(solution: Solution, id: number, bestOfParts: boolean, fur
     directCurrent: solution.dcPath === null ? 'not known' : solution.dcPath ? 'passes' : 'blocked',
     // Said once for each number of parts: of the others it follows.
     proof: bestOfParts ? proofWords(solution) : '',
-    note: [conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : '', further ? 'below the ones above' : ''].filter((text) => text !== '').join(' · '),
+    note: [conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : ''].filter((text) => text !== '').join(' · '),
   };
 }
 

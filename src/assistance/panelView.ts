@@ -21,6 +21,8 @@ export interface PanelContext {
   readonly markerHz: number | null;
   /** What the unknowns came out as; null where nothing is unknown or it is not known yet. */
   readonly solved?: SolvedUnknowns | null;
+  /** True while they are being worked out. */
+  readonly solving?: boolean;
 }
 
 /** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
@@ -56,11 +58,17 @@ export function panelView(given: Assessment, context: PanelContext): PanelView |
     marker: markerHz === null ? null : markerView(problem, markerHz),
     ladder: ladderRows(assessment, problem),
     notInserted: best !== null,
-    candidates: !unsolved ? null : context.solved ? candidatesView(context.solved.result, { stale: context.solved.stale }) : solving,
+    candidates: unsolved ? candidatesOf(given, context) : null,
   };
 }
 
-const solving: CandidatesView = { stale: true, message: 'The values are being worked out …', notes: [], candidates: [] };
+function candidatesOf({ diagnostics }: Assessment, { solved, solving }: PanelContext): CandidatesView {
+  if (solved && !solved.stale) return candidatesView(solved.result, { stale: false });
+  const message = solving ? 'The values are being worked out …'
+    : diagnostics.some(({ severity }) => severity === 'error') ? 'The values are worked out as soon as the text has no errors.'
+      : 'The solver stopped before it had an answer; the log says why.';
+  return { ...(solved ? candidatesView(solved.result, { stale: true }) : { stale: true, notes: [], candidates: [] }), message };
+}
 
 function goalView(result: GoalResult, id: number, problem: Problem): GoalView {
   return {

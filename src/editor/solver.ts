@@ -1,4 +1,5 @@
 import * as vscode from 'vscode';
+import { progressText } from '../assistance/candidates';
 import { buildModel } from '../description/buildModel';
 import { startWorker, type WorkerHandle } from '../platform/startWorker';
 import type { SolveResult } from '../solve/solution';
@@ -27,6 +28,17 @@ export interface DocumentSolver extends vscode.Disposable {
   solveAgain(document: vscode.TextDocument): Promise<Solved | null>;
   isSolving(document: vscode.TextDocument): boolean;
   readonly onDidSolve: vscode.Event<vscode.TextDocument>;
+  /** Only of what the text asks for, and only where it takes long. */
+  readonly onDidProgress: vscode.Event<SolvingProgress>;
+}
+
+export interface SolvingProgress {
+  readonly document: vscode.TextDocument;
+  readonly version: number;
+  /** 0 … 1. */
+  readonly share: number;
+  /** The best margin so far in dB; null where nothing has been found yet. */
+  readonly bestMarginDb: number | null;
 }
 
 interface Job {
@@ -42,6 +54,7 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
   const answers = new Map<vscode.TextDocument, Solved>();
   const waiting = new Map<vscode.TextDocument, Job[]>();
   const solvedEvent = new vscode.EventEmitter<vscode.TextDocument>();
+  const progressEvent = new vscode.EventEmitter<SolvingProgress>();
   let script: Promise<string> | null = null;
   let worker: WorkerHandle | null = null;
   let running: Job | null = null;
@@ -100,7 +113,10 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
   const showProgress = () => {
     const ended = new Promise<void>((end) => { endProgress = end; });
     void vscode.window.withProgress({ location: vscode.ProgressLocation.Window, title: 'Solving' }, (progress) => {
-      report = (share, best) => progress.report({ message: `${Math.floor(share * 100)} %${best === null ? '' : `, best margin ${best.toFixed(1)} dB`}` });
+      report = (share, bestMarginDb) => {
+        progress.report({ message: progressText({ share, bestMarginDb }) });
+        if (running?.follows) progressEvent.fire({ document: running.study.document, version: running.study.version, share, bestMarginDb });
+      };
       return ended;
     });
   };
@@ -158,6 +174,7 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
 
   const subscriptions = vscode.Disposable.from(
     solvedEvent,
+    progressEvent,
     studies.onDidFinish(follow),
     studies.onDidClose((document) => {
       supersede(document);
@@ -190,6 +207,7 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
       return solvable(study, problem) ? ask(study, problem, false) : null;
     },
     onDidSolve: solvedEvent.event,
+    onDidProgress: progressEvent.event,
     dispose() {
       disposed = true;
       subscriptions.dispose();

@@ -18,7 +18,7 @@ const marker = shape<MarkerView>({ frequencyHz: number, text, cases: listOf(mark
 const row = shape<LadderRowView>({
   id: text, name: text, orientation: oneOf('series', 'shunt', 'through', 'end'),
   symbol: oneOf('load', 'source', 'resistor', 'inductor', 'capacitor', 'branch', 'line', 'stub open', 'stub short', 'transformer', 'block', 'bridge', 'open', 'unsolved'),
-  value: text, reactance: text, impedanceAfter: text, voltage: text, current: text, heat: text, note: text, line: orNull(whole), editable: flag,
+  value: text, reactance: text, impedanceAfter: text, voltage: text, current: text, heat: text, loss: text, sensitivity: text, note: text, line: orNull(whole), editable: flag,
 });
 const candidate = shape<CandidateView>({
   id: whole, values: text, holds: flag, margin: text, returnLoss: text, gain: text, parts: text, response: text, directCurrent: text, proof: text, note: text,
@@ -37,6 +37,7 @@ const toPage: Decoder<ToPage> = byType<ToPage>({
   stale: shape({ type: oneOf('stale'), document: text, version: whole, reason: orNull(text), problems: listOf(problem) }),
   marker: shape({ type: oneOf('marker'), document: text, version: whole, request: whole, marker: orNull(marker), refusal: orNull(text) }),
   preview: shape({ type: oneOf('preview'), document: text, version: whole, request: whole, traces: orNull(listOf(trace)) }),
+  solving: shape({ type: oneOf('solving'), document: text, version: whole, share: number, text }),
   cursor: shape({ type: oneOf('cursor'), document: text, version: whole, elementId: orNull(text), goalId: orNull(whole) }),
   nothing: shape({ type: oneOf('nothing'), document: (data) => (data === '' ? '' : undefined), version: (data) => (data === 0 ? 0 : undefined), message: text }),
 });

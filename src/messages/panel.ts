@@ -105,6 +105,10 @@ export interface LadderRowView {
   readonly voltage: string;
   readonly current: string;
   readonly heat: string;
+  /** Heat as a share of the power available. */
+  readonly loss: string;
+  /** dB of worst margin for 1 % of its value. */
+  readonly sensitivity: string;
   readonly note: string;
   /** Line in the document, from 0; null where it is in none. */
   readonly line: number | null;
@@ -179,6 +183,8 @@ export type ToPage =
   | { readonly type: 'marker'; readonly document: string; readonly version: number; readonly request: number; readonly marker: MarkerView | null; readonly refusal: string | null }
   /** What one candidate would look like; null where it is not known any more. */
   | { readonly type: 'preview'; readonly document: string; readonly version: number; readonly request: number; readonly traces: readonly TraceView[] | null }
+  /** How far the solver is, where it takes long; ends with the next view. */
+  | { readonly type: 'solving'; readonly document: string; readonly version: number; readonly share: number; readonly text: string }
   /** The cursor in the editor is on this element or goal. */
   | { readonly type: 'cursor'; readonly document: string; readonly version: number; readonly elementId: string | null; readonly goalId: number | null }
   | { readonly type: 'nothing'; readonly document: ''; readonly version: 0; readonly message: string };

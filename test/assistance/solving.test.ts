@@ -1,6 +1,6 @@
 import assert from 'node:assert/strict';
 import { assess } from '../../src/assistance/assess';
-import { candidatesView, listedSolutions } from '../../src/assistance/candidates';
+import { candidatesView, listedSolutions, progressText } from '../../src/assistance/candidates';
 import { ladderLenses } from '../../src/assistance/ladderLenses';
 import { panelView } from '../../src/assistance/panelView';
 import { solutionFixes } from '../../src/assistance/solutionFixes';
@@ -81,6 +81,12 @@ describe('solving in the editor', () => {
     assert.deepEqual(none.notes, ['An invented hint.', 'series C, shunt C: out of reach, an invented one.']);
   });
 
+  it('says how far it is', () => {
+    assert.equal(progressText({ share: 0.428, bestMarginDb: 1.234 }), '42 %, best margin so far 1.23 dB');
+    assert.equal(progressText({ share: 0, bestMarginDb: null }), '0 %');
+    assert.equal(progressText({ share: 1, bestMarginDb: -Infinity }), '100 %');
+  });
+
   it('reads the marker with the best candidate in place, unless it belongs to an older text', () => {
     const { problem } = unsolved.model;
     assert.deepEqual(shownProblem(problem, { result, stale: false })?.ladder, best.ladder);
@@ -96,10 +102,12 @@ describe('solving in the editor', () => {
     assert.equal(view?.verdict, 'all 2 hold');
     assert.deepEqual(view?.problems, []);
     assert.match(String(view?.ladder.find(({ id }) => id === 'L1')?.value), /nH$/);
-    const waiting = panelView(unsolved, { ...context, solved: null });
+    const waiting = panelView(unsolved, { ...context, solved: null, solving: true });
     assert.equal(waiting?.notInserted, false);
     assert.match(String(waiting?.candidates?.message), /being worked out/);
-    assert.equal(panelView(unsolved, { ...context, solved: { result, stale: true } })?.notInserted, false);
+    assert.equal(panelView(unsolved, { ...context, solved: { result, stale: true }, solving: true })?.notInserted, false);
+    assert.match(String(panelView(unsolved, { ...context, solved: null })?.candidates?.message), /solver stopped/);
+    assert.match(String(panelView(assessed(text.replace('gain >=', 'gane >=')), context)?.candidates?.message), /no errors/);
     const settled = panelView(solvedAssessment(unsolved, best), context);
     assert.equal(settled?.candidates, null);
   });

@@ -11,7 +11,7 @@ const view: PanelView = {
   traces: [{ caseName: 'load', reflection: { re: [0.1, null], im: [0.2, null] }, reflectionDb: [-13, null], gainDb: [-0.2, null], reason: null }],
   discs: [{ centreRe: 0, centreIm: 0, radius: 0.25, label: '12 dB' }], limits: [{ centreRe: 0, centreIm: 0, radius: 0.1, label: 'Bode–Fano' }], masks: [{ plot: 'reflection', side: 'at most', levelDb: -12, startHz: 863e6, stopHz: 870e6, ok: true, goalId: 0 }],
   marker: { frequencyHz: 866.5e6, text: '866.5 MHz', cases: [{ caseName: 'load', text: 'Γ 0.1', loadReflection: { re: 0.1, im: 0 }, steps: [{ name: 'L1', arc: { re: [0.1], im: [0.2] } }], inputReflection: null }] },
-  ladder: [{ id: 'L1', name: 'L1', orientation: 'series', symbol: 'inductor', value: '13 nH', reactance: '+j70.8 Ω', impedanceAfter: '18.0 + j2.0 Ω', voltage: '1 V', current: '20 mA', heat: '1 mW', note: '', line: 20, editable: true }],
+  ladder: [{ id: 'L1', name: 'L1', orientation: 'series', symbol: 'inductor', value: '13 nH', reactance: '+j70.8 Ω', impedanceAfter: '18.0 + j2.0 Ω', voltage: '1 V', current: '20 mA', heat: '1 mW', loss: '4 %', sensitivity: '0.1', note: '', line: 20, editable: true }],
   notInserted: true,
   candidates: { stale: false, message: '', notes: ['an invented remark'], candidates: [{ id: 0, values: 'L1 13 nH', holds: true, margin: '1 dB', returnLoss: '15 dB', gain: '−0.5 dB', parts: '1', response: 'low-pass', directCurrent: 'passes', proof: 'proved', note: '' }] },
 };
@@ -19,7 +19,7 @@ const view: PanelView = {
 const toPage: readonly ToPage[] = [
   { type: 'view', document: 'file:///a', version: 4, view }, { type: 'stale', document: 'file:///a', version: 4, reason: null, problems: view.problems }, { type: 'marker', document: 'file:///a', version: 4, request: 2, marker: view.marker, refusal: null },
   { type: 'preview', document: 'file:///a', version: 4, request: 3, traces: view.traces }, { type: 'preview', document: 'file:///a', version: 4, request: 3, traces: null },
-  { type: 'marker', document: 'file:///a', version: 4, request: 2, marker: null, refusal: 'not a frequency' }, { type: 'cursor', document: 'file:///a', version: 4, elementId: 'L1', goalId: null }, { type: 'nothing', document: '', version: 0, message: 'no description is open' },
+  { type: 'marker', document: 'file:///a', version: 4, request: 2, marker: null, refusal: 'not a frequency' }, { type: 'solving', document: 'file:///a', version: 4, share: 0.42, text: '42 %' }, { type: 'cursor', document: 'file:///a', version: 4, elementId: 'L1', goalId: null }, { type: 'nothing', document: '', version: 0, message: 'no description is open' },
 ];
 
 const toHost: readonly ToHost[] = [

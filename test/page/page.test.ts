@@ -81,6 +81,31 @@ describe('the panel’s page', function () {
     });
   }
 
+  it('shows how far the solver is, until the next view', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView()));
+    assert.equal(await served.page.locator('.candidates-section').isVisible(), false);
+    await served.post({ type: 'solving', document, version: 1, share: 0.42, text: '42 %, best margin so far 1.2 dB' });
+    assert.equal(await served.page.locator('.candidates-section .progress').innerText(), '42 %, best margin so far 1.2 dB');
+    assert.equal(await served.page.locator('.candidates-section progress').evaluate((bar) => (bar as HTMLProgressElement).value), 0.42);
+    await served.post({ type: 'solving', document: 'file:///another', version: 1, share: 0.9, text: '90 %' });
+    assert.match(await served.page.locator('.candidates-section .progress').innerText(), /^42 %/);
+    await served.post(viewMessage(sampleView(), 2));
+    assert.equal(await served.page.locator('.candidates-section').isVisible(), false);
+    await served.page.close();
+  });
+
+  it('asks anew for the preview that is pointed at when a new view comes', async () => {
+    const served = await openPage('dark', 580);
+    const { view } = unsolvedView();
+    await served.post(viewMessage(view, 3));
+    await served.page.locator('.candidates li').nth(1).hover();
+    await served.post(viewMessage(view, 4));
+    const asked = await last(served, 'preview candidate');
+    assert.ok(asked?.type === 'preview candidate' && asked.candidate === 1 && asked.version === 4);
+    await served.page.close();
+  });
+
   it('leads from a goal and from a row to their lines', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));

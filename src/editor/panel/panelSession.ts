@@ -1,5 +1,5 @@
 import * as vscode from 'vscode';
-import { listedSolutions } from '../../assistance/candidates';
+import { listedSolutions, progressText } from '../../assistance/candidates';
 import { elementAt } from '../../assistance/elementAt';
 import { markerView } from '../../assistance/markerView';
 import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
@@ -92,7 +92,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
   const sendStudy = (study: Study) => {
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
-    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study) });
+    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study), solving: solver.isSolving(document) });
     // What can still be computed is shown, unless a better picture of the same description stands there.
     if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
       if (isDrawable(assessment)) pictured = idOf(document);
@@ -100,6 +100,11 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     } else {
       send({ type: 'stale', document: idOf(document), version: versionOf(version), reason: 'The text cannot be evaluated as it is.', problems: problemViews(assessment) });
     }
+  };
+  /** While the values are worked out the last picture stays, marked as old. */
+  const sendSolving = ({ document, version, assessment }: Study) => {
+    const problems = problemViews(assessment).filter(({ code }) => code !== 'unsolved');
+    send({ type: 'stale', document: idOf(document), version: versionOf(version), reason: 'The values are being worked out.', problems });
   };
   const sendAll = () => {
     if (shown === null) {
@@ -223,8 +228,8 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     studies.onDidFinish((study) => {
       if (study.document !== shown) return;
       clearTimeout(solvingTimer);
-      // While its values are worked out the last picture stays for a moment: mostly the answer is there before one sees it go.
-      if (solver.isSolving(study.document) && pictured === idOf(study.document)) solvingTimer = setTimeout(() => sendStudy(study), PROGRESS_AFTER_MS);
+      // Mostly the answer is there before one could read that it is being worked out.
+      if (solver.isSolving(study.document) && pictured === idOf(study.document)) solvingTimer = setTimeout(() => sendSolving(study), PROGRESS_AFTER_MS);
       else sendStudy(study);
     }),
     solver.onDidSolve((document) => {
@@ -232,6 +237,10 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       if (!study || solver.isSolving(document)) return;
       clearTimeout(solvingTimer);
       sendStudy(study);
+    }),
+    solver.onDidProgress(({ document, version, share, bestMarginDb }) => {
+      if (document !== shown || studies.latest(document)?.version !== version) return;
+      send({ type: 'solving', document: idOf(document), version: versionOf(version), share, text: progressText({ share, bestMarginDb }) });
     }),
     studies.onDidFail(({ document, message }) => {
       if (document === shown) send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: message, problems: [] });
