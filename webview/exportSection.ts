@@ -53,8 +53,8 @@ function toBase64(bytes: Uint8Array): string {
   return btoa(binary);
 }
 
-const head = ['element', 'orientation', 'value', 'X or B', 'Z after', 'peak', 'current', 'heat'];
-const cellsOf = (row: LadderRowView) => [row.name, row.orientation === 'end' ? '' : row.orientation, row.value, row.reactance, row.impedanceAfter, row.voltage, row.current, row.heat];
+const head = ['element', 'orientation', 'value', 'X or B', 'Z after', 'peak', 'current', 'heat', 'loss', 'dB per %'];
+const cellsOf = (row: LadderRowView) => [row.name, row.orientation === 'end' ? '' : row.orientation, row.value, row.reactance, row.impedanceAfter, row.voltage, row.current, row.heat, row.loss, row.sensitivity];
 
 function ladderCsv(rows: readonly LadderRowView[]): string {
   const quoted = (text: string) => (/[",\n]/.test(text) ? `"${text.replace(/"/g, '""')}"` : text);

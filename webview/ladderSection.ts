@@ -5,10 +5,10 @@ import type { Controls, TextField } from './controls';
 import { element, picture, setMarkup, setText, syncList } from './dom';
 import { notInsertedMark } from './notInsertedMark';
 
-const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat'] as const;
+const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'loss', 'dB per %'] as const;
 
 /** Which columns give way first in a narrow panel. */
-const columnClass = (name: (typeof columns)[number]) => (name === 'current' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
+const columnClass = (name: (typeof columns)[number]) => (name === 'current' || name === 'loss' || name === 'dB per %' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
 
 /** Element by element from the load down to the source. Values are typed over or stepped; a row leads to its line. */
 export function ladderSection(controls: Controls, actions: Actions) {
@@ -58,7 +58,7 @@ export function ladderSection(controls: Controls, actions: Actions) {
     if (data.editable) field.setValue(data.value);
     setText(row.querySelector('.shown')!, data.editable ? '' : data.value);
     const cells = row.querySelectorAll(':scope > td.number');
-    [data.reactance, data.impedanceAfter, data.voltage, data.current, data.heat].forEach((text, i) => setText(cells[i + 1], text));
+    [data.reactance, data.impedanceAfter, data.voltage, data.current, data.heat, data.loss, data.sensitivity].forEach((text, i) => setText(cells[i + 1], text));
   };
   return {
     root,

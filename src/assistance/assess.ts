@@ -6,6 +6,7 @@ import { readDescription } from '../description/readDescription';
 import { evaluate } from '../study/evaluate';
 import type { Evaluation } from '../study/evaluation';
 import { goalDiagnostics } from './goalDiagnostics';
+import { ratingWarnings } from './ratingWarnings';
 import type { Spread } from './spreadAssessment';
 
 /** A text, its files and what they amount to: the one thing that editor, panel and command line all start from. */
@@ -28,7 +29,7 @@ export function assess(text: string, files: LoadedFiles, options: ReadOptions): 
 export function assessDescription(description: Description, files: LoadedFiles): Assessment {
   const model = buildModel(description, files);
   const evaluation = model.problem && evaluate(model.problem);
-  const diagnostics = [...model.diagnostics, ...goalDiagnostics(description, model, evaluation)];
+  const diagnostics = [...model.diagnostics, ...ratingWarnings(description, model, evaluation), ...goalDiagnostics(description, model, evaluation)];
   diagnostics.sort((a, b) => a.span.start - b.span.start);
   return { description, model, evaluation, diagnostics };
 }

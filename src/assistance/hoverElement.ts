@@ -2,10 +2,12 @@ import type { ElementSyntax } from '../description/syntax';
 import { printComplex, printPolar, printReactance } from '../quantity/printComplex';
 import { nearestInSeries, nextInSeries } from '../quantity/preferredSeries';
 import { printNumber, printQuantity } from '../quantity/printQuantity';
+import { coilWinding } from '../network/coilWinding';
 import type { ElementResult } from '../study/evaluation';
 import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
 import type { Hover } from './hover';
+import { lossText, sensitivityOf } from './ladderRows';
 import { plainText, rowsTable } from './markdown';
 import { partWithValue } from './partWithValue';
 import { familyValues, knownPart } from './steppedValue';
@@ -19,15 +21,17 @@ export function elementHover(assessment: Assessment, entry: ElementSyntax): Hove
   const head = `**${plainText(name)}**, ${entry.keyword}`;
   if (!result) return { span: entry.span, markdown: `${head}: nothing is known of it yet.` };
   const text = [`${head}${result.value !== null && result.unit ? `, ${printQuantity(result.value, result.unit, { digits: 4 })}` : ''}`];
-  const table = elementTable(result);
+  const table = elementTable(result, problem);
   if (table !== '') text.push('', table);
   if (result.reason !== null) text.push('', plainText(result.reason));
+  const winding = windingText(result);
+  if (winding !== '') text.push('', winding);
   const candidates = problem ? neighbours(assessment, problem, name) : '';
   if (candidates !== '') text.push('', candidates);
   return { span: entry.span, markdown: text.join('\n') };
 }
 
-function elementTable(result: ElementResult): string {
+function elementTable(result: ElementResult, problem: Problem | null): string {
   const rows: [string, string][] = [];
   const at = printQuantity(result.frequencyHz, 'Hz', { digits: 5 });
   if (result.reactanceOhm !== null) rows.push([`reactance at ${at}`, printReactance(result.reactanceOhm, 'Ω')]);
@@ -37,7 +41,19 @@ function elementTable(result: ElementResult): string {
   if (result.peakVoltageV !== null) rows.push(['peak voltage', printQuantity(result.peakVoltageV, 'V', { digits: 3 })]);
   if (result.rmsCurrentA !== null) rows.push(['rms current', printQuantity(result.rmsCurrentA, 'A', { digits: 3 })]);
   if (result.dissipationW !== null) rows.push(['heat', printQuantity(result.dissipationW, 'W', { digits: 3 })]);
+  if (problem && result.dissipationW !== null) rows.push(['of the power available', lossText(result.dissipationW, problem)]);
+  const sensitivity = problem ? sensitivityOf(problem, result.name) : null;
+  if (sensitivity !== null) rows.push(['1 % of its value costs', `${printNumber(sensitivity, 2)} dB of the worst margin`]);
   return rows.length > 0 ? rowsTable(rows) : '';
+}
+
+/** How a solved or stated inductance could be wound for the bench. */
+function windingText(result: ElementResult): string {
+  const winding = result.kind === 'inductor' && result.value !== null ? coilWinding(result.value) : null;
+  if (!winding) return '';
+  const millimetres = (value: number): string => `${printNumber(value * 1e3, 3)} mm`;
+  const { turns, diameterM, lengthM, wireM, coil } = winding;
+  return `On the bench it could be wound as \`coil ${turns} turns, diameter ${millimetres(diameterM)}, length ${millimetres(lengthM)}, wire ${millimetres(wireM)}\` (Lundin 1985, some per cent off where there are few turns; Q about ${printNumber(coil.qAt(result.frequencyHz), 1)}).`;
 }
 
 /** The value itself and those beside it in E24 and in its family, each with the worst margin that it would leave. */

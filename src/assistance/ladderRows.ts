@@ -9,7 +9,9 @@ import { printNumber, printQuantity } from '../quantity/printQuantity';
 
 import type { ElementResult } from '../study/evaluation';
 import { impedancePath } from '../study/impedancePath';
+import { ladderObstacle } from '../study/obstacles';
 import type { Problem } from '../study/problem';
+import { sensitivities } from '../study/spread/sensitivities';
 import type { Assessment } from './assess';
 
 const digits = 3;
@@ -19,18 +21,34 @@ const nothing = '–';
 export function ladderRows({ description, evaluation }: Assessment, problem: Problem): LadderRowView[] {
   const lines = lineMap(description.syntax.text);
   const results = evaluation?.elements ?? [];
+  const sensitive = sensitivitiesOf(problem);
   const entries = description.syntax.ladder?.elements ?? [];
   const load = description.syntax.load;
   return [
     endRow('load', loadAt(problem, results[0]?.frequencyHz ?? null), load ? lines.positionAt(load.span.start).line : null),
-    ...results.map((result) => elementRow(result, problem.ladder.find((element) => element.name === result.name) ?? null, entries.find((entry) => entry.name.value === result.name) ?? null, lines)),
+    ...results.map((result, at) => elementRow(result, problem.ladder.find((element) => element.name === result.name) ?? null, entries.find((entry) => entry.name.value === result.name) ?? null, lines, problem, sensitive[at] ?? null)),
     endRow('source', sourceText(problem), null),
   ];
 }
 
+const known = new WeakMap<Problem, readonly (number | null)[]>();
+
+/** By element, in dB of worst margin for 1 %; worked out once for each problem, and not while something is unsolved. */
+function sensitivitiesOf(problem: Problem): readonly (number | null)[] {
+  const found = known.get(problem) ?? (ladderObstacle(problem.ladder) === null ? sensitivities(problem) : []);
+  known.set(problem, found);
+  return found;
+}
+
+/** What 1 % of an element's value costs; null where it has no one value. */
+export const sensitivityOf = (problem: Problem, name: string): number | null => sensitivitiesOf(problem)[problem.ladder.findIndex((element) => element.name === name)] ?? null;
+
+/** An element's heat as a share of the power available, worst over bands and cases. */
+export const lossText = (dissipationW: number, { availablePowerW }: Problem): string => `${printNumber((100 * dissipationW) / availablePowerW, 2)} %`;
+
 function endRow(id: 'load' | 'source', impedanceAfter: string, line: number | null): LadderRowView {
   return {
-    id, name: id, orientation: 'end', symbol: id, value: '', reactance: '', impedanceAfter, voltage: '', current: '', heat: '', note: '', line, editable: false,
+    id, name: id, orientation: 'end', symbol: id, value: '', reactance: '', impedanceAfter, voltage: '', current: '', heat: '', loss: '', sensitivity: '', note: '', line, editable: false,
   };
 }
 
@@ -50,7 +68,7 @@ function sourceText({ source, z0Ohm }: Problem): string {
   return source.byBand.size > 0 ? 'by band' : printQuantity(z0Ohm, 'Ω', { digits }).replace(' Ω', '');
 }
 
-function elementRow(result: ElementResult, element: Element | null, entry: ElementSyntax | null, lines: LineMap): LadderRowView {
+function elementRow(result: ElementResult, element: Element | null, entry: ElementSyntax | null, lines: LineMap, problem: Problem, sensitivity: number | null): LadderRowView {
   return {
     id: result.name,
     name: result.name,
@@ -62,6 +80,8 @@ function elementRow(result: ElementResult, element: Element | null, entry: Eleme
     voltage: result.peakVoltageV === null ? nothing : printQuantity(result.peakVoltageV, 'V', { digits: 2 }),
     current: result.rmsCurrentA === null ? nothing : printQuantity(result.rmsCurrentA, 'A', { digits: 2 }),
     heat: result.dissipationW === null ? nothing : printQuantity(result.dissipationW, 'W', { digits: 2 }),
+    loss: result.dissipationW === null ? nothing : lossText(result.dissipationW, problem),
+    sensitivity: sensitivity === null ? nothing : printNumber(sensitivity, 2),
     note: result.reason ?? '',
     line: entry ? lines.positionAt(entry.span.start).line : null,
     editable: entry?.body.form === 'branch' && entry.body.branch.form === 'part' && entry.body.branch.value.form === 'known',
