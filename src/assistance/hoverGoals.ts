@@ -5,7 +5,7 @@ import type { Assessment } from './assess';
 import { goalSyntaxOf } from './goalDiagnostics';
 import { goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText } from './goalText';
 import type { Hover } from './hover';
-import { limitLines, outOfReachNote } from './limitText';
+import { goalLimitLines, limitLines } from './limitText';
 import { plainText, rowsTable } from './markdown';
 
 export function goalHover({ description, model, evaluation }: Assessment, syntax: GoalSyntax): Hover {
@@ -17,8 +17,7 @@ export function goalHover({ description, model, evaluation }: Assessment, syntax
     '',
     [`worst value ${goalValueText(result)}`, goalMarginText(result), plainText(goalDetail(result))].filter((text) => text !== '').join(', '),
   ];
-  const note = model.problem ? outOfReachNote(model.problem, result) : '';
-  if (note !== '') lines.push('', plainText(`${note}.`));
+  if (model.problem) lines.push(...goalLimitLines(model.problem, result).flatMap((line) => ['', plainText(line)]));
   return { span: syntax.span, markdown: lines.join('\n') };
 }
 

@@ -4,42 +4,50 @@ import { bandLimits, type BandLimit } from '../solve/bandLimits';
 import type { LoadModel } from '../solve/fitLoad';
 import { reflectionLimit } from '../study/discs';
 import type { Goal, GoalResult } from '../study/goal';
-import { judgedBands } from '../study/place';
+import { placesOf } from '../study/place';
 import type { Problem } from '../study/problem';
 import { wantsLarge } from '../study/verdict';
 
 const magnitude = (value: number): string => printNumber(value, 2);
 const inDb = (value: number): string => `${printNumber(value, 3)} dB`;
 
+/** Loads this near to their model need no word about it. */
+const asGoodAsItsModel = 0.005;
+/** Limits on |Γ| below this are no limit in practice. */
+export const leastNamed = 0.01;
+
 /**
- * Why a goal on reflection or gain that is missed cannot be met in its band by any lossless ladder: one sentence without a full
- * stop. Empty where it could be, or where that is not known.
+ * Why a goal on reflection or gain that is missed cannot be met over its frequencies by any lossless ladder: one sentence
+ * without a full stop; «probably» where only the error of the load's model decides. Empty where it could be met, or where
+ * that is not known. Losses lower the reflection but never raise the gain, hence the two wordings.
  */
 export function outOfReachNote(problem: Problem, { goal, ok }: Pick<GoalResult, 'goal' | 'ok'>): string {
-  if (ok || goal.into !== null) return '';
-  const limits = limitsOfGoal(problem, goal);
-  const worst = limits.reduce<BandLimit | null>((most, each) => ((each.limit.reflection ?? 0) > (most?.limit.reflection ?? 0) ? each : most), null);
-  const reflection = worst?.limit.reflection ?? 0;
-  if (!worst || reflection === 0) return '';
-  const where = worst.caseName === null ? '' : ` of ${worst.caseName}`;
+  if (ok) return '';
+  const worst = limitOfGoal(problem, goal);
+  const { reflection, certain, model } = worst?.limit ?? {};
+  if (!worst || !reflection || !model) return '';
+  const taken = model.fitError < asGoodAsItsModel ? '' : `taken as ${modelText(model)} (within |Γ| ${magnitude(model.fitError)})`;
+  const where = worst.caseName === null ? taken && `, the load ${taken}` : ` with ${worst.caseName}${taken && `, ${taken}`}`;
   const asked = reflectionLimit(goal);
   if (asked !== null && wantsLarge(goal) === (goal.quantity === 'return loss') && asked < reflection) {
-    return `out of reach without loss: over this band no lossless ladder gets below |Γ| ${magnitude(reflection)} (${inDb(returnLossDb(reflection))})${where}`;
+    return `${asked < (certain ?? 0) ? '' : 'probably '}out of reach without loss: over this band no lossless ladder gets below |Γ| ${magnitude(reflection)} (${inDb(returnLossDb(reflection))})${where}`;
   }
   const most = decibels(1 - reflection * reflection);
   const gainDb = goal.quantity === 'gain' && wantsLarge(goal) ? goal.limit : goal.quantity === 'insertion loss' && !wantsLarge(goal) ? -(goal.limit ?? 0) : null;
-  return gainDb !== null && gainDb > most ? `out of reach: over this band no ladder gets above ${inDb(most)} of gain${where}` : '';
+  return gainDb !== null && gainDb > most ? `${gainDb > decibels(1 - (certain ?? 0) ** 2) ? '' : 'probably '}out of reach: over this band no ladder gets above ${inDb(most)} of gain${where}` : '';
 }
 
-/** Limits of the bands that a goal is asked in; those of ranges and single frequencies are not worked out. */
-function limitsOfGoal(problem: Problem, { place, caseName }: Goal): readonly BandLimit[] {
-  if (place.form !== 'band' && place.form !== 'bands') return [];
-  const bands = place.form === 'band' ? problem.bands.filter(({ name }) => name === place.band) : judgedBands(problem);
-  const cases = caseName === null ? problem.cases : problem.cases.filter(({ name }) => name === caseName);
-  return cases.length === 0 ? [] : bandLimits({ bands, cases });
+/** The largest limit among the bands or the range that a goal is asked in; null where there is none, as for a single frequency. */
+function limitOfGoal(problem: Problem, goal: Goal): BandLimit | null {
+  const places = placesOf(goal, problem);
+  const cases = goal.caseName === null ? problem.cases : problem.cases.filter(({ name }) => name === goal.caseName);
+  if (goal.into !== null || typeof places === 'string' || cases.length === 0) return null;
+  const bands = places.map(({ band, frequencyHz }) => ({ name: band ?? '', frequencyHz, watch: false }));
+  return bandLimits({ bands, cases, tunables: problem.tunables })
+    .reduce<BandLimit | null>((most, each) => ((each.limit.reflection ?? 0) > (most?.limit.reflection ?? 0) ? each : most), null);
 }
 
-/** `24.1 Ω in series with 1.9 pF`. */
+/** `24.1 Ω + 1.9 pF`, `50 Ω || 5 pF`. */
 export function modelText({ form, resistanceOhm, inductanceH, capacitanceF }: LoadModel): string {
   const parts = [
     printQuantity(resistanceOhm, 'Ω', { digits: 3 }),
@@ -53,13 +61,34 @@ export function modelText({ form, resistanceOhm, inductanceH, capacitanceF }: Lo
 export function limitLines(problem: Problem, bandName: string): string[] {
   const band = problem.bands.find(({ name }) => name === bandName);
   if (!band || band.frequencyHz.length < 2 || problem.cases.length === 0) return [];
-  const [{ caseName, limit }] = bandLimits({ bands: [band], cases: problem.cases });
-  const of = caseName === null ? 'The load' : `${caseName}`;
-  if (limit.reflection === null) return [`How good the match could be is not known: ${limit.reason ?? ''}.`];
-  if (limit.reflection === 0 || !limit.model) return [`${of} is as good as a plain resistance here: nothing limits the match.`];
-  const few = limit.byReactances.map((value, i) => `${i + 1}: ${inDb(returnLossDb(value))}`).join(', ');
+  const [found] = bandLimits({ ...problem, bands: [band] });
+  return found.limit.reflection === null ? [`No limit is known: ${found.limit.reason ?? ''}.`] : [limitLine(found), ...limitGrounds(found)];
+}
+
+/** For a hover on a missed goal on reflection or gain: the same, with the sentence that says where it is out of reach. */
+export function goalLimitLines(problem: Problem, result: Pick<GoalResult, 'goal' | 'ok'>): string[] {
+  const { goal, ok } = result;
+  const concerned = reflectionLimit(goal) !== null || goal.quantity === 'gain' || goal.quantity === 'insertion loss';
+  const found = ok || !concerned ? null : limitOfGoal(problem, goal);
+  if (!found) return [];
+  const note = outOfReachNote(problem, result);
+  return [note === '' ? limitLine(found) : `${note.charAt(0).toUpperCase()}${note.slice(1)}.`, ...limitGrounds(found)];
+}
+
+function limitLine({ limit: { reflection } }: BandLimit): string {
+  if (reflection === 0) return 'Nothing limits the match over these frequencies: the load is as good as a plain resistance.';
+  if ((reflection ?? 0) < leastNamed) return `Enough reactances could bring |Γ| below ${leastNamed} over these frequencies, without loss (Bode–Fano).`;
+  return `No lossless ladder gets below |Γ| ${magnitude(reflection ?? 0)} (${inDb(returnLossDb(reflection ?? 0))}) over these frequencies (Bode–Fano).`;
+}
+
+function limitGrounds({ caseName, limit: { model, reflection, byReactances } }: BandLimit): string[] {
+  if (!model || !reflection) return [];
+  const enough = byReactances.findIndex((value) => value < leastNamed);
+  const few = byReactances.slice(0, enough < 0 ? undefined : enough + 1)
+    .map((value, i) => `${value < leastNamed ? `below ${leastNamed}` : `${magnitude(value)} (${inDb(returnLossDb(value))})`} with ${i + 1}`);
+  const mismatch = model.fitError < asGoodAsItsModel ? `below ${asGoodAsItsModel}` : `at most ${magnitude(model.fitError)}`;
   return [
-    `No lossless ladder gets below |Γ| ${magnitude(limit.reflection)} (${inDb(returnLossDb(limit.reflection))}) over this band (Bode–Fano). ${of} is taken as ${modelText(limit.model)}, whose mismatch to it is at most ${magnitude(limit.model.fitError)}.`,
-    `Equal ripple with so many reactances, the load’s own counted: ${few}.`,
+    `${caseName ?? 'The load'} is taken as ${modelText(model)}; between the two |Γ| is ${mismatch}.`,
+    `Equal ripple reaches |Γ| ${few.join(', ')} reactances in all, each made resonant in the band, the load’s own counted.`,
   ];
 }

@@ -6,15 +6,13 @@ import { reflectionRegion } from '../study/discs';
 import { judgedBands, middleOf } from '../study/place';
 import type { Problem } from '../study/problem';
 import { sampleSource } from '../study/sampleCase';
-
-/** Smaller rings would be a dot on the chart. */
-const leastShown = 0.01;
+import { leastNamed } from './limitText';
 
 /** The Bode–Fano limit of each judged band, as its image on the chart for the source in the middle of the band. */
 export function limitViews(problem: Problem): DiscView[] {
   const bands = judgedBands(problem);
-  return bandLimits({ bands, cases: problem.cases }).flatMap(({ limit: { reflection } }, at) => {
-    if (reflection === null || reflection < leastShown) return [];
+  return bandLimits({ ...problem, bands }).flatMap(({ limit: { reflection } }, at) => {
+    if (reflection === null || reflection < leastNamed) return [];
     const band = bands[at];
     const source = sampleSource(problem.source, problem.bands, Float64Array.of(middleOf(band.frequencyHz)), band.name);
     if (!source.known[0]) return [];

@@ -9,7 +9,9 @@ export interface MatchLimit {
   readonly model: LoadModel | null;
   /** |Γ| that no lossless ladder gets below; null with a `reason`. */
   readonly reflection: number | null;
-  /** Equal-ripple |Γ| with 1, 2, 3, 4 reactances, the load's own counted (resonators, for a resonant load). */
+  /** The same with the model's error taken off: holds whatever the load does between it and the model. Null like `reflection`. */
+  readonly certain: number | null;
+  /** Equal-ripple |Γ| with 1, 2, 3, 4 reactances, the load's own counted, each made resonant in the band by another. */
   readonly byReactances: readonly number[];
   /** Q at the band's middle (geometric mean) times the fractional bandwidth. */
   readonly qw: number | null;
@@ -23,21 +25,26 @@ export interface MatchLimit {
  * resistance. A resonance bounds through both of its reactances; the larger Q decides, as the smaller can be made up for.
  * Bode 1945; Fano 1950; Pozar, Microwave Engineering, Fig. 5.22. A single point, or a plain resistance, has no limit but 0.
  * Where the model is further from the load than `poorFit`, there is no limit but the reason why.
+ *
+ * Mismatch is a distance d with d(a, c) ≤ (d(a, b) + d(b, c))/(1 + d(a, b) d(b, c)), the same on both sides of a lossless
+ * network: a load within e of a model of limit g cannot be matched better than (g − e)/(1 − g e), `certain`. From memory: the
+ * pseudo-hyperbolic distance of the half-plane of positive resistance.
  */
 export function bodeFanoLimit(impedance: ComplexArray, frequencyHz: Float64Array): MatchLimit {
-  const none = { reflection: null, byReactances: [], qw: null };
+  const none = { reflection: null, certain: null, byReactances: [], qw: null };
   const model = fitLoad(impedance, frequencyHz);
   if (!model) return { ...none, model, reason: 'the load has no positive resistance everywhere in the band' };
   const startHz = frequencyHz[0];
   const stopHz = frequencyHz[frequencyHz.length - 1];
-  if (startHz === stopHz) return { model, reflection: 0, byReactances: new Array<number>(limitReactances).fill(0), qw: 0, reason: null };
+  if (startHz === stopHz) return { model, reflection: 0, certain: 0, byReactances: new Array<number>(limitReactances).fill(0), qw: 0, reason: null };
   if (model.fitError > poorFit) {
     return { ...none, model, reason: `a ${model.form} is not much like this load (its mismatch to it reaches ${model.fitError.toFixed(2)})` };
   }
   const qw = qualityOf(model, 2 * Math.PI * Math.sqrt(startHz * stopHz)) * ((stopHz - startHz) / Math.sqrt(startHz * stopHz));
-  if (qw === 0) return { model, reflection: 0, byReactances: new Array<number>(limitReactances).fill(0), qw, reason: null };
+  if (qw === 0) return { model, reflection: 0, certain: 0, byReactances: new Array<number>(limitReactances).fill(0), qw, reason: null };
   const byReactances = Array.from({ length: limitReactances }, (_, i) => equalRipple(i + 1, qw).largest);
-  return { model, reflection: bodeFanoReflection(qw), byReactances, qw, reason: null };
+  const reflection = bodeFanoReflection(qw);
+  return { model, reflection, certain: Math.max(0, (reflection - model.fitError) / (1 - reflection * model.fitError)), byReactances, qw, reason: null };
 }
 
 /** The larger Q of a model's reactances. */

@@ -116,6 +116,28 @@ describe('the limit of a load over a band', () => {
     }
   });
 
+  it('holds for a load beside its model as far as mismatch is a distance that no lossless network changes', () => {
+    const noisy = loadOf(modelOf('parallel RC', 50, null, 5e-12), oneToTwo);
+    noisy.re.forEach((value, k) => { noisy.re[k] = value * (1 + 0.1 * (-1) ** k); });
+    const { reflection, certain, model } = bodeFanoLimit(noisy, oneToTwo);
+    assert.ok(reflection && certain && model && model.fitError > 0.01);
+    near(certain, (reflection - model.fitError) / (1 - reflection * model.fitError), 1e-12);
+    const exact = bodeFanoLimit(loadOf(modelOf('parallel RC', 50, null, 5e-12), oneToTwo), oneToTwo);
+    near(exact.certain, exact.reflection ?? 0, 1e-9);
+
+    type Z = readonly [re: number, im: number];
+    const mismatch = ([ar, ax]: Z, [br, bx]: Z) => Math.hypot(ar - br, ax - bx) / Math.hypot(ar + br, ax - bx);
+    // A series reactance, then an inversion, as any lossless ladder is made of.
+    const throughLossless = ([r, x]: Z): Z => [r / (r * r + (x + 0.7) ** 2), -(x + 0.7) / (r * r + (x + 0.7) ** 2)];
+    const grid = [0.1, 1, 3].flatMap((re) => [-2, 0, 0.5].map((im): Z => [re, im]));
+    for (const a of grid) {
+      for (const b of grid) {
+        near(mismatch(throughLossless(a), throughLossless(b)) + 1, mismatch(a, b) + 1, 1e-12);
+        for (const c of grid) assert.ok(mismatch(a, c) <= (mismatch(a, b) + mismatch(b, c)) / (1 + mismatch(a, b) * mismatch(b, c)) + 1e-12);
+      }
+    }
+  });
+
   it('keeps a near-perfect fit of noisy data, with its error', () => {
     const clean = loadOf(modelOf('parallel RC', 120, null, 1.5e-12), oneToTwo);
     const noisy: ComplexArray = { re: clean.re.map((value, k) => value * (1 + 0.02 * (-1) ** k)), im: clean.im };
