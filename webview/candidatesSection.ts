@@ -1,7 +1,8 @@
-import type { CandidateView, PanelView } from '../src/messages/panel';
+import type { CandidateView, PanelView, TraceView } from '../src/messages/panel';
 import type { Actions } from './actions';
 import type { Controls } from './controls';
 import { element, setText, syncList } from './dom';
+import { previewPicture } from './previewPicture';
 
 /** What could be put in the place of the unknown values, best first. A row that is pointed at or has the focus shows its trace. */
 export function candidatesSection(controls: Controls, actions: Actions) {
@@ -12,9 +13,10 @@ export function candidatesSection(controls: Controls, actions: Actions) {
   const progress = element('div', { class: 'progress' }, bar, progressText);
   progress.hidden = true;
   let known = false;
+  const picture = previewPicture();
   const list = element('ol', { class: 'candidates' });
   const notes = element('ul', { class: 'candidate-notes', 'aria-label': 'Remarks on the solutions' });
-  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, list, notes);
+  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, picture.root, list, notes);
   const makeRow = () => {
     const id = () => Number(row.dataset.candidate);
     const insert = controls.button({ label: 'Insert', onPress: () => actions.insertCandidate(id()) });
@@ -43,7 +45,8 @@ export function candidatesSection(controls: Controls, actions: Actions) {
   };
   return {
     root,
-    update({ candidates }: Pick<PanelView, 'candidates'>) {
+    update(view: PanelView) {
+      const { candidates } = view;
       known = candidates !== null;
       root.hidden = !known && progress.hidden;
       if (candidates === null) return;
@@ -51,11 +54,14 @@ export function candidatesSection(controls: Controls, actions: Actions) {
       setText(heading, candidates.stale && candidates.candidates.length > 0 ? 'Candidates of an older text' : 'Candidates');
       setText(message, candidates.message);
       message.hidden = candidates.message === '';
+      picture.update(view);
       syncList(list, candidates.candidates, makeRow, updateRow);
       list.hidden = candidates.candidates.length === 0;
       syncList(notes, candidates.notes, () => element('li'), (item, text) => setText(item, text));
       notes.hidden = candidates.notes.length === 0;
     },
+    /** Which candidate's traces are shown beside those of the best. */
+    preview: (traces: readonly TraceView[] | null, candidate: number | null) => picture.show(traces ?? [], candidate),
     /** Null: nothing is being solved. */
     progress(state: { readonly share: number; readonly text: string } | null) {
       progress.hidden = state === null;

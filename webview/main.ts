@@ -73,6 +73,7 @@ main.append(nothing, content);
 function showPreview(traces: readonly TraceView[] | null): void {
   chart.preview(traces);
   plots.preview(traces);
+  candidates.preview(traces, previewed);
 }
 
 function highlight(elementId: string | null): void {

@@ -46,6 +46,8 @@ describe('the panel’s page', function () {
         await served.post({ type: 'preview', document, version: 3, request: asked.request, traces: previews });
         assert.equal(await served.page.locator('svg.chart .preview').count(), previews.length);
         assert.equal(await served.page.locator('svg.plot .preview').count(), 2 * previews.length);
+        assert.equal(await served.page.locator('svg.small-chart .preview').count(), previews.length);
+        assert.match(await served.page.locator('.preview-picture').innerText(), new RegExp(`pointed at: ${view.candidates?.candidates[1].values}`));
         // An answer to an older question changes nothing.
         await served.post({ type: 'preview', document, version: 3, request: asked.request - 1, traces: null });
         assert.equal(await served.page.locator('svg.chart .preview').count(), previews.length);
@@ -78,6 +80,20 @@ describe('the panel’s page', function () {
         assert.deepEqual(await last(served, 'set value'), { type: 'set value', document, version: 1, elementId: 'C1', text: '5.1 pF' });
         await served.page.close();
       });
+    });
+  }
+
+  for (const width of [320, 900, 1100]) {
+    it(`keeps a chart in sight beside the candidates at ${width} px`, async () => {
+      const served = await openPage('light', width);
+      await served.post(viewMessage(unsolvedView().view));
+      await served.page.locator('.candidates li').last().scrollIntoViewIfNeeded();
+      const inSight = await served.page.locator('svg.chart, svg.small-chart').evaluateAll((charts) => charts.filter((chart) => {
+        const { top, bottom, height } = chart.getBoundingClientRect();
+        return height > 100 && top >= 0 && bottom <= innerHeight;
+      }).length);
+      assert.equal(inSight, 1);
+      await served.page.close();
     });
   }
 
