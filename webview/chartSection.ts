@@ -72,7 +72,7 @@ export function chartSection(controls: Controls, actions: Actions) {
     root, chart,
     update(next: PanelView) {
       view = next;
-      setMarkup(chart, smithChart({ ...next, previews }));
+      setMarkup(chart, smithChart({ ...next, previews, cloud: cloudOf(next) }));
       chart.setAttribute('aria-label', `${chartSummary(next)}${next.notInserted ? ' With the best candidate, not inserted.' : ''} Arrow keys move the marker.`);
       syncList(legend, legendOf(next), () => element('li', {}, picture('0 0 26 8', { class: 'sample', 'aria-hidden': 'true' }) as unknown as HTMLElement, element('span')), (item, { className, text }) => {
         const sample = item.firstElementChild as SVGElement;
@@ -90,7 +90,7 @@ export function chartSection(controls: Controls, actions: Actions) {
     },
     preview(traces: readonly TraceView[] | null) {
       previews = traces ?? [];
-      if (view) setMarkup(chart, smithChart({ ...view, previews }));
+      if (view) setMarkup(chart, smithChart({ ...view, previews, cloud: cloudOf(view) }));
     },
     refuse: (text: string) => setText(refusal, text),
     highlight(elementId: string | null) {
@@ -99,12 +99,15 @@ export function chartSection(controls: Controls, actions: Actions) {
   };
 }
 
+/** Of another text's builds nothing is drawn. */
+const cloudOf = ({ spread }: PanelView) => (spread && !spread.stale ? spread.cloud : []);
+
 function legendOf({ traces, bands, discs, limits, marker }: PanelView): { className: string; text: string }[] {
   return [
     ...traces.map(({ caseName, reason }, i) => ({ className: `trace ${caseClass(i)}`, text: `${caseName}${reason === null ? '' : ` (${reason})`}` })),
     ...(bands.length > 0 ? [{ className: '', text: 'thick: in band' }] : []),
     ...discs.map(({ label }) => ({ className: '', text: `disc: ${label}` })),
-    ...limits.map(({ label }) => ({ className: 'limit', text: label })),
+    ...limits.map(({ label }) => ({ className: '', text: `dashed ring: ${label}` })),
     ...(marker && marker.cases.length > 1 && marker.cases[0].steps.length > 0 ? [{ className: '', text: `arcs: ${marker.cases[0].caseName}` }] : []),
   ];
 }

@@ -8,7 +8,7 @@ import { notInsertedMark } from './notInsertedMark';
 const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'loss', 'dB per %'] as const;
 
 /** Which columns give way first in a narrow panel. */
-const columnClass = (name: (typeof columns)[number]) => (name === 'current' || name === 'loss' || name === 'dB per %' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
+const columnClass = (name: (typeof columns)[number]) => (name === 'current' || name === 'loss' ? 'number widest-only' : name === 'dB per %' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
 
 /** Element by element from the load down to the source. Values are typed over or stepped; a row leads to its line. */
 export function ladderSection(controls: Controls, actions: Actions) {

@@ -11,6 +11,7 @@ import { connectHost } from './host';
 import { ladderSection } from './ladderSection';
 import { plotsSection } from './plotsSection';
 import { problemsSection } from './problemsSection';
+import { spreadSection } from './spreadSection';
 import { verdictSection } from './verdictSection';
 
 const host = connectHost();
@@ -59,11 +60,12 @@ const chart = chartSection(controls, actions);
 const plots = plotsSection(actions);
 const ladder = ladderSection(controls, actions);
 const candidates = candidatesSection(controls, actions);
+const spread = spreadSection();
 const exports = exportSection(controls, actions);
 const nothing = element('p', { class: 'nothing' });
 const content = element('div', { class: 'content' },
   header.root, problems.root,
-  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, candidates.root, exports.root)));
+  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, candidates.root, spread.root, exports.root)));
 const pictures = content.querySelector<HTMLElement>('.columns')!;
 content.hidden = true;
 setText(nothing, 'Waiting for the first picture …');
@@ -98,6 +100,7 @@ function draw(): void {
     chart.update(view);
     plots.update(view);
     candidates.update(view);
+    spread.update(view);
     ladder.update(view);
     exports.update(view);
     highlight(pointed);

@@ -4,6 +4,7 @@ import type { Description, Model } from '../description/description';
 import type { GoalSyntax } from '../description/syntax';
 import type { Evaluation } from '../study/evaluation';
 import type { Goal } from '../study/goal';
+import { yieldIsPending } from '../study/judgeYield';
 import { goalDetail, goalValueText } from './goalText';
 import { outOfReachNote } from './limitText';
 
@@ -29,7 +30,8 @@ export function goalDiagnostics(description: Description, model: Model, evaluati
   const found: Diagnostic[] = [];
   for (const result of evaluation?.goals ?? []) {
     const syntax = goalSyntaxOf(description, result.goal);
-    if (result.ok || !syntax) continue;
+    // Builds are studied apart from the typing; until their yield is known there is nothing to say.
+    if (result.ok || !syntax || (result.goal.quantity === 'yield' && result.reason === yieldIsPending)) continue;
     const detail = [goalDetail(result), model.problem ? outOfReachNote(model.problem, result) : ''].filter((text) => text !== '').join('; ');
     found.push({
       code: result.reason !== null && result.value === null ? 'goal-not-known' : 'goal-missed',

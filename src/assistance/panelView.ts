@@ -1,5 +1,5 @@
 import { lineMap } from '../base/lineMap';
-import type { CandidatesView, GoalView, PanelView, ProblemView } from '../messages/panel';
+import type { CandidatesView, GoalView, PanelView, ProblemView, SpreadView } from '../messages/panel';
 import type { GoalResult } from '../study/goal';
 import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
@@ -12,6 +12,8 @@ import { defaultMarkerHz, markerView } from './markerView';
 import { outOfReachNote } from './limitText';
 import { limitViews } from './limitViews';
 import { shownSolution, solvedAssessment, type SolvedUnknowns } from './solvedAssessment';
+import { withSpread, type Spread } from './spreadAssessment';
+import { spreadView } from './spreadView';
 import { bandViews, discViews, maskViews, sweepList, traceView } from './traceViews';
 
 export interface PanelContext {
@@ -23,6 +25,8 @@ export interface PanelContext {
   readonly solved?: SolvedUnknowns | null;
   /** True while they are being worked out. */
   readonly solving?: boolean;
+  /** What builds do, where that is known beside the assessment; `stale` where the text has changed since. */
+  readonly spread?: { readonly spread: Spread; readonly stale: boolean; readonly cloud: SpreadView['cloud'] } | null;
 }
 
 /** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
@@ -32,7 +36,9 @@ export function isDrawable({ evaluation, diagnostics }: Assessment): boolean {
 }
 
 /** Everything that the panel shows of one assessment, as plain data; null where there is nothing to study. */
-export function panelView(given: Assessment, context: PanelContext): PanelView | null {
+export function panelView(bare: Assessment, context: PanelContext): PanelView | null {
+  const studied = context.spread ?? (bare.spread ? { spread: bare.spread, stale: false, cloud: [] } : null);
+  const given = studied && !studied.stale ? withSpread(bare, studied.spread) : bare;
   const unsolved = given.model.problem !== null && unsolvedElements(given.model.problem).length > 0;
   const best = shownSolution(given.model.problem, context.solved ?? null);
   const assessment = best ? solvedAssessment(given, best) : given;
@@ -59,6 +65,7 @@ export function panelView(given: Assessment, context: PanelContext): PanelView |
     ladder: ladderRows(assessment, problem),
     notInserted: best !== null,
     candidates: unsolved ? candidatesOf(given, context) : null,
+    spread: studied && !unsolved ? spreadView(studied.spread, problem.spread.builds, studied) : null,
   };
 }
 

@@ -1,7 +1,10 @@
 import * as vscode from 'vscode';
 import type { Diagnostic, Severity } from '../base/diagnostic';
+import type { Assessment } from '../assistance/assess';
+import { withSpread } from '../assistance/spreadAssessment';
 import type { DocumentStudies } from './documentStudies';
 import { rangeOf } from './ranges';
+import type { DocumentSpreads } from './spreads';
 
 const SEVERITIES: Readonly<Record<Severity, vscode.DiagnosticSeverity>> = {
   error: vscode.DiagnosticSeverity.Error,
@@ -17,11 +20,17 @@ function shown(document: vscode.TextDocument, diagnostic: Diagnostic): vscode.Di
 }
 
 /** Shows what is wrong with each open description. */
-export function publishDiagnostics(studies: DocumentStudies): vscode.Disposable {
+export function publishDiagnostics(studies: DocumentStudies, spreads: DocumentSpreads): vscode.Disposable {
   const collection = vscode.languages.createDiagnosticCollection('ohmward');
+  const publish = (document: vscode.TextDocument, { diagnostics }: Assessment) => collection.set(document.uri, diagnostics.map((diagnostic) => shown(document, diagnostic)));
   return vscode.Disposable.from(
     collection,
-    studies.onDidFinish(({ document, assessment }) => collection.set(document.uri, assessment.diagnostics.map((diagnostic) => shown(document, diagnostic)))),
+    studies.onDidFinish(({ document, assessment }) => publish(document, assessment)),
+    // What is said of the yield comes later, and not before all builds have been made.
+    spreads.onDidChange((document) => {
+      const studied = spreads.latest(document);
+      if (studied?.done && studied.study.version === document.version) publish(document, withSpread(studied.study.assessment, studied.spread));
+    }),
     studies.onDidClose((document) => collection.delete(document.uri)),
   );
 }

@@ -33,3 +33,6 @@ export const HANGING_AFTER_MS = 60_000;
 
 /** Solutions that are asked for: what the panel lists. */
 export const CANDIDATES = 10;
+
+/** Builds are studied once nothing has been typed for so long. */
+export const SPREAD_DELAY_MS = 250;

@@ -18,6 +18,7 @@ import { registerNames } from './providers/names';
 import { registerOutline } from './providers/outline';
 import { registerLenses } from './providers/lenses';
 import { registerSolutions } from './providers/solutions';
+import { createDocumentSpreads } from './spreads';
 import { createDocumentSolver } from './solver';
 import { createStatusItem } from './statusItem';
 
@@ -29,14 +30,15 @@ export function start(context: vscode.ExtensionContext): void {
   const edits = createValueEdits(studies, log);
   const highlight = createElementHighlight();
   const solver = createDocumentSolver(context.extensionUri, studies, log);
-  const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, solver, edits, highlight, log });
+  const spreads = createDocumentSpreads(context.extensionUri, studies, log);
+  const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, solver, spreads, edits, highlight, log });
   const assistance: Assistance = { studies, log };
   const register = [
     registerHover, registerInlayHints, registerLinks, registerOutline, registerNames, registerCompletion, registerFixes, registerFormatting,
   ];
   context.subscriptions.push(
-    log, store, studies, solver, highlight, panels,
-    publishDiagnostics(studies),
+    log, store, studies, solver, spreads, highlight, panels,
+    publishDiagnostics(studies, spreads),
     createStatusItem(studies),
     registerCommands({ extensionUri: context.extensionUri, studies, solver, panels, edits, log }),
     registerLenses(assistance, solver),

@@ -1,5 +1,5 @@
 import { byType, flag, listOf, number, oneOf, orNull, shape, text, whole, type Decoder } from './decode';
-import type { BandView, CandidateView, CandidatesView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, ToHost, ToPage, TraceView } from './panel';
+import type { BandView, CandidateView, CandidatesView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, SpreadView, ToHost, ToPage, TraceView } from './panel';
 
 const maybeNumbers = listOf(orNull(number));
 const point = shape<{ re: number; im: number }>({ re: number, im: number });
@@ -24,9 +24,13 @@ const candidate = shape<CandidateView>({
   id: whole, values: text, holds: flag, margin: text, returnLoss: text, gain: text, parts: text, response: text, directCurrent: text, proof: text, note: text,
 });
 const candidates = shape<CandidatesView>({ stale: flag, message: text, notes: listOf(text), candidates: listOf(candidate) });
+const spread = shape<SpreadView>({
+  stale: flag, share: number, yieldText: text, cornerText: text, remedyText: text, cornerDb: orNull(number),
+  bars: listOf(shape<SpreadView['bars'][number]>({ fromDb: number, toDb: number, count: whole })), cloud: listOf(points),
+});
 const view = shape<PanelView>({
   title: text, fileName: text, pinned: flag, verdict: text, goals: listOf(goal), problems: listOf(problem), cautions: listOf(text), z0Ohm: number,
-  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row), notInserted: flag, candidates: orNull(candidates),
+  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row), notInserted: flag, candidates: orNull(candidates), spread: orNull(spread),
 });
 
 /** A message from the host; null where it is none. */

@@ -150,6 +150,22 @@ export interface CandidatesView {
   readonly candidates: readonly CandidateView[];
 }
 
+/** What builds with tolerances do. */
+export interface SpreadView {
+  /** True where the text has changed since. */
+  readonly stale: boolean;
+  /** Of the builds, how many have been made: 1 when it is done. */
+  readonly share: number;
+  readonly yieldText: string;
+  readonly cornerText: string;
+  /** What would have to be tightened; empty where nothing is to be said. */
+  readonly remedyText: string;
+  readonly cornerDb: number | null;
+  readonly bars: readonly { readonly fromDb: number; readonly toDb: number; readonly count: number }[];
+  /** Traces of some builds on the chart, first case. */
+  readonly cloud: readonly PointList[];
+}
+
 /** One whole picture. Everything that a person reads is text made by the host, so panel, hover and report agree. */
 export interface PanelView {
   readonly title: string;
@@ -174,6 +190,8 @@ export interface PanelView {
   readonly notInserted: boolean;
   /** Null where nothing is left to solve. */
   readonly candidates: CandidatesView | null;
+  /** Null where no part has a tolerance, or nothing is known yet. */
+  readonly spread: SpreadView | null;
 }
 
 export type ToPage =

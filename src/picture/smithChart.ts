@@ -1,4 +1,4 @@
-import type { BandView, DiscView, LadderRowView, MarkerCaseView, MarkerView, TraceView } from '../messages/panel';
+import type { BandView, DiscView, LadderRowView, MarkerCaseView, MarkerView, PointList, TraceView } from '../messages/panel';
 import { chartGrid, chartRadius, chartX, chartY, conductanceCircle, resistanceCircle } from './chartGrid';
 import { placeLabels } from './placeLabels';
 import { escapeText, polyline, tag, textTag } from './svg';
@@ -9,6 +9,8 @@ export interface ChartData {
   /** What the traces would be with other values. */
   readonly previews?: readonly TraceView[];
   readonly bands: readonly BandView[];
+  /** Traces of builds with tolerances, behind the others. */
+  readonly cloud?: readonly PointList[];
   readonly discs: readonly DiscView[];
   readonly limits: readonly DiscView[];
   readonly marker: MarkerView | null;
@@ -34,9 +36,10 @@ export function smithChart(data: ChartData): string {
   return [
     chartGrid(),
     tag('g', { class: 'discs' }, [...data.discs.map((disc) => discMarkup('disc', disc)), ...data.limits.map((limit) => discMarkup('limit', limit))].join('') || ' '),
+    ...(data.cloud ?? []).map((reflection) => traceLine('cloud', reflection)),
     tag('g', { class: 'guides', 'aria-hidden': 'true' }, first ? guides(first, data.ladder) : ' '),
     tag('g', { class: 'traces' }, data.traces.map((trace, i) => traceMarkup(trace, i, data)).join('') || ' '),
-    ...(data.previews ?? []).map(previewMarkup),
+    ...(data.previews ?? []).map(({ reflection }) => traceLine('preview', reflection)),
     tag('g', { class: 'path' }, first ? pathMarkup(first, data) : ' '),
     tag('g', { class: 'markers' }, (data.marker?.cases ?? []).map((reading, i) => inputDot(reading, i)).join('') || ' '),
   ].join('');
@@ -57,8 +60,8 @@ function traceMarkup({ caseName, reflection }: TraceView, index: number, { frequ
   return tag('g', { 'data-case': index }, tag('path', { class: `trace ${caseClass(index)}`, d: polyline(xs, ys) }, tag('title', {}, escapeText(caseName))) + inBands.join(''));
 }
 
-function previewMarkup({ reflection }: TraceView): string {
-  return tag('path', { class: 'preview', d: polyline(reflection.re.map((re) => (re === null ? null : chartX(re))), reflection.im.map((im) => (im === null ? null : chartY(im)))) });
+function traceLine(name: 'preview' | 'cloud', { re, im }: PointList): string {
+  return tag('path', { class: name, d: polyline(re.map((x) => (x === null ? null : chartX(x))), im.map((y) => (y === null ? null : chartY(y)))) });
 }
 
 /** Dotted circles along which the elements move the point, so that the eye finds the arcs' law. */

@@ -10,8 +10,11 @@ export interface YieldAnswer {
   readonly yieldReason?: string | null;
 }
 
+/** The reason while the spread of builds has not been studied. */
+export const yieldIsPending = 'needs the spread of builds';
+
 /** A goal on yield, from the share that the spread of builds found; that study is made elsewhere, and takes long. */
 export function judgeYield(goal: Goal, answer: YieldAnswer): GoalResult {
-  if (answer.yield == null) return notKnown(goal, answer.yieldReason ?? 'needs the spread of builds');
+  if (answer.yield == null) return notKnown(goal, answer.yieldReason ?? yieldIsPending);
   return judged(goal, inUnit(answer.yield, goal.unit), null, null);
 }

@@ -1,5 +1,16 @@
 import { servePort } from '../platform/workerPort';
 import { answerSolveJob, type SolveJob } from './solveJob';
+import { answerSpreadJob, type SpreadJob } from './spreadJob';
 
-// Entry of the solver's own bundle: the same for a thread of Node and for a worker of a browser.
-servePort<SolveJob>(answerSolveJob);
+// Entry of the workers' own bundle: the same for a thread of Node and for a worker of a browser. Solving goes on to its end, a
+// spread of builds in pieces, between which a newer one is heard of.
+let latest = -1;
+
+servePort<SolveJob | SpreadJob>((job, send) => {
+  if (!('type' in job)) {
+    answerSolveJob(job, send);
+    return;
+  }
+  latest = job.id;
+  answerSpreadJob(job, send, () => latest === job.id, (next) => setTimeout(next, 0));
+});

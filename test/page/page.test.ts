@@ -3,7 +3,7 @@ import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import type { ToHost } from '../../src/messages/panel';
 import { openPage, startPages, stopPages, type ServedPage } from './servedPage';
-import { sampleView, unsolvedView, viewMessage } from './sampleView';
+import { sampleView, spreadSample, unsolvedView, viewMessage } from './sampleView';
 import { bodyClass, type ThemeKind } from './themes';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
@@ -122,6 +122,22 @@ describe('the panel’s page', function () {
     await served.page.close();
   });
 
+  it('shows the spread of builds, its histogram and its cloud, and marks them as old', async () => {
+    const served = await openPage('dark', 700);
+    await served.post(viewMessage(spreadSample()));
+    assert.match((await served.page.textContent('.yield-line')) ?? '', /% of 400 builds hold every goal/);
+    assert.match((await served.page.textContent('.corner-line')) ?? '', /^worst corner/);
+    assert.ok((await served.page.locator('svg.histogram .bar-held').count()) > 2);
+    assert.equal(await served.page.locator('svg.histogram .corner-mark').count(), 1);
+    assert.equal(await served.page.locator('svg.chart .cloud').count(), 24);
+    await served.post(viewMessage(spreadSample(true), 2));
+    assert.equal(await served.page.locator('svg.chart .cloud').count(), 0);
+    assert.match((await served.page.textContent('.spread-section h2')) ?? '', /before the last change/);
+    await served.post(viewMessage(sampleView(), 3));
+    assert.ok(await served.page.locator('.spread-section').isHidden());
+    await served.page.close();
+  });
+
   it('leads from a goal and from a row to their lines', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));
@@ -236,6 +252,7 @@ describe('the panel’s page', function () {
   for (const [theme, what, view] of (Object.keys(bodyClass) as ThemeKind[]).flatMap((theme) => [
     [theme, 'a missed goal', sampleView((text) => text.replace('rejection >= 8 dB', 'rejection >= 12 dB'))] as const,
     [theme, 'candidates', unsolvedView().view] as const,
+    [theme, 'a spread of builds', spreadSample()] as const,
   ])) {
     it(`has nothing that axe finds serious in ${theme}, with ${what}`, async () => {
       const served = await openPage(theme, 580);
@@ -251,7 +268,7 @@ describe('the panel’s page', function () {
   for (const width of [320, 580, 1000]) {
     it(`fits ${width} px without scrolling the page sideways`, async () => {
       const served = await openPage('dark', width);
-      for (const [version, view] of [sampleView(), unsolvedView().view].entries()) {
+      for (const [version, view] of [sampleView(), spreadSample(), unsolvedView().view].entries()) {
         await served.post(viewMessage(view, version + 1));
         assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
       }

@@ -3,6 +3,8 @@ import { fileURLToPath } from 'node:url';
 import { assessDescription, type Assessment } from '../../src/assistance/assess';
 import { panelView } from '../../src/assistance/panelView';
 import { solvedAssessment } from '../../src/assistance/solvedAssessment';
+import { wholeSpread } from '../../src/assistance/spreadAssessment';
+import { toleranceCloud } from '../../src/study/spread/toleranceCloud';
 import { traceView } from '../../src/assistance/traceViews';
 import { loadFiles } from '../../src/cli/loadFiles';
 import { readDescription } from '../../src/description/readDescription';
@@ -26,6 +28,14 @@ export function unsolvedView(stale = false): { readonly view: PanelView; readonl
   const result = solveProblem(assessment.model.problem!, { top: 4 });
   const view = panelView(assessment, { fileName: 'frost.match.yaml', pinned: false, markerHz: null, solved: { result, stale } })!;
   return { view, previews: solvedAssessment(assessment, result.solutions[1]).evaluation!.traces.map(traceView) };
+}
+
+/** The sample with what its builds do. */
+export function spreadSample(stale = false): PanelView {
+  const assessment = sampleAssessment((text) => text.replace('  - dc block', '  - dc block\n  - yield >= 95 %'));
+  const { problem } = assessment.model;
+  const spread = wholeSpread({ ...problem!, spread: { ...problem!.spread, builds: 400 } })!;
+  return panelView(assessment, { fileName: 'frost.match.yaml', pinned: false, markerHz: null, spread: { spread, stale, cloud: toleranceCloud(problem!) } })!;
 }
 
 export const viewMessage = (view: PanelView, version = 1): ToPage => ({ type: 'view', document: 'file:///orchard/frost.match.yaml', version, view });

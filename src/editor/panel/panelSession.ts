@@ -13,6 +13,7 @@ import type { ToHost, ToPage } from '../../messages/panel';
 import type { DocumentStudies, Study } from '../documentStudies';
 import { insertSolved } from '../insertSolved';
 import type { Log } from '../log';
+import type { DocumentSpreads } from '../spreads';
 import type { DocumentSolver } from '../solver';
 import { PROGRESS_AFTER_MS } from '../limits';
 import { copyText, savePicture } from './exports';
@@ -23,6 +24,7 @@ export interface PanelServices {
   readonly extensionUri: vscode.Uri;
   readonly studies: DocumentStudies;
   readonly solver: DocumentSolver;
+  readonly spreads: DocumentSpreads;
   readonly edits: ValueEdits;
   readonly highlight: ElementHighlight;
   readonly log: Log;
@@ -69,7 +71,7 @@ async function revealLine(document: vscode.TextDocument, line: number): Promise<
 }
 
 export function createPanelSession(panel: vscode.WebviewPanel, services: PanelServices, initial: PanelState): PanelSession {
-  const { studies, solver, edits, highlight, log } = services;
+  const { studies, solver, spreads, edits, highlight, log } = services;
   const state: PanelState = { ...initial };
   const changed = new vscode.EventEmitter<void>();
   let shown: vscode.TextDocument | null = null;
@@ -89,10 +91,14 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     const found = solver.latest(document);
     return found && { result: found.result, stale: found.study.version !== version };
   };
+  const spreadFor = ({ document, version }: Study) => {
+    const studied = spreads.latest(document);
+    return studied && { spread: studied.spread, cloud: studied.cloud, stale: studied.study.version !== version };
+  };
   const sendStudy = (study: Study) => {
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
-    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study), solving: solver.isSolving(document) });
+    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study), solving: solver.isSolving(document), spread: spreadFor(study) });
     // What can still be computed is shown, unless a better picture of the same description stands there.
     if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
       if (isDrawable(assessment)) pictured = idOf(document);
@@ -241,6 +247,10 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     solver.onDidProgress(({ document, version, share, bestMarginDb }) => {
       if (document !== shown || studies.latest(document)?.version !== version) return;
       send({ type: 'solving', document: idOf(document), version: versionOf(version), share, text: progressText({ share, bestMarginDb }) });
+    }),
+    spreads.onDidChange((document) => {
+      const study = document === shown ? studies.latest(document) : null;
+      if (study && study.version === document.version) sendStudy(study);
     }),
     studies.onDidFail(({ document, message }) => {
       if (document === shown) send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: message, problems: [] });
