@@ -31,7 +31,8 @@ export function verdictSection(actions: Actions) {
     setText(find('place'), goal.place);
     setText(find('number'), goal.valueText);
     setText(find('detail'), goal.detail);
-    setText(find('note'), goal.note);
+    // A word joiner: a line may otherwise end within |Γ|.
+    setText(find('note'), goal.note.replaceAll('|Γ|', '|\u2060Γ|'));
     setMarkup(find('bar') as SVGElement, goalBar(goal.bar));
     button.title = goal.marginText;
   };

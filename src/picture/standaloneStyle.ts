@@ -14,7 +14,7 @@ export function standaloneStyle(theme: 'dark' | 'light'): string {
     `text{font:11px sans-serif;fill:${soft}}.designator{fill:${ink};paint-order:stroke;stroke:${paper};stroke-width:3px}`,
     `.grid{fill:none;stroke:${faint};stroke-width:.8}.rim{fill:none;stroke:${soft};stroke-width:1.2}`,
     `.guide{fill:none;stroke:${soft};stroke-width:.8;stroke-dasharray:1 4}`,
-    `.limit{fill:none;stroke:${good};stroke-width:1.2;stroke-dasharray:1.5 3.5;stroke-linecap:round}`,
+    `.limit{fill:none;stroke:${ink};stroke-width:1.2;stroke-dasharray:4 2.5}`,
     `.disc{fill:${good};fill-opacity:.12;stroke:${good};stroke-width:1}`,
     '.trace{fill:none;stroke-width:1.4}.in-band{stroke-width:4}.in-band.watched{stroke-width:2.6}',
     ...cases.map((colour, i) => `.case-${i}{stroke:${colour};stroke-dasharray:${caseDashes[i]}}.in-band.case-${i}{stroke-dasharray:none}.marker-dot.case-${i}{fill:${colour};stroke:${paper};stroke-dasharray:none}`),

@@ -17,12 +17,13 @@ export function checkText({ path, assessment, earlier }: CheckedFile, colour: bo
   const rows = results.map((result) => [
     `${goalTitle(result.goal)}${goalPlace(result.goal) && `, ${goalPlace(result.goal)}`}`,
     goalValueText(result),
-    [goalMarginText(result), earlier === undefined ? '' : beforeText(goalBefore(result, earlier)), goalDetail(result), model.problem ? outOfReachNote(model.problem, result) : ''].filter((text) => text !== '').join('; '),
+    [goalMarginText(result), earlier === undefined ? '' : beforeText(goalBefore(result, earlier)), goalDetail(result)].filter((text) => text !== '').join('; '),
   ]);
   const widths = [0, 1].map((column) => Math.max(0, ...rows.map((row) => row[column].length)));
   const lines = rows.map(([title, value, rest], i) => {
     const mark = results[i].ok ? paint(colour, green, '✓') : paint(colour, red, '✗');
-    return `  ${mark} ${title.padEnd(widths[0])}  ${value.padStart(widths[1])}${rest && `  ${paint(colour, dim, rest)}`}`;
+    const note = model.problem ? outOfReachNote(model.problem, results[i]) : '';
+    return `  ${mark} ${title.padEnd(widths[0])}  ${value.padStart(widths[1])}${rest && `  ${paint(colour, dim, rest)}`}${note && `\n      ${paint(colour, dim, note)}`}`;
   });
   const verdict = !evaluation ? 'nothing can be computed' : results.length === 0 ? 'no goals' : verdictText(results);
   const state = isOk(assessment) ? paint(colour, green, verdict) : paint(colour, red, verdict);

@@ -11,7 +11,7 @@ import { escapeText, tag } from '../picture/svg';
 const style = `${standaloneStyle('light')}
 body{font:14px/1.45 sans-serif;color:#2b2b2b;background:#fff;max-width:60em;margin:2em auto;padding:0 1em}h1{font-size:1.4em}h2{font-size:1.05em;margin:1.8em 0 .4em;color:#555}
 table{border-collapse:collapse;width:100%}td,th{padding:.25em .5em;text-align:right;border-bottom:1px solid #ddd;font-weight:400}td:first-child,th:first-child,.left{text-align:left}thead th{color:#666}
-.ok{color:#2d7d3f}.no{color:#c72e0f}.soft{color:#666}svg{display:block}svg.chart{width:min(100%,520px);margin:0 auto}svg.plot{width:100%;max-width:680px}
+.ok{color:#2d7d3f}.no{color:#c72e0f}.soft{color:#666}svg{display:block}svg.chart{width:min(100%,520px);margin:0 auto}svg.plot{width:100%;max-width:680px}svg.sample{display:inline-block;vertical-align:middle}
 .wire{fill:none;stroke:#2b2b2b;stroke-width:1.6}.wire.filled{fill:#fff}.wire.dashed{stroke-dasharray:3 3}.node{fill:#2b2b2b}.bar-track{fill:#eee}.bar-held{fill:#2d7d3f}.bar-missed{fill:#c72e0f}.bar-limit{stroke:#2b2b2b}
 .cautions{border:1px solid #b58900;padding:.5em 1em}@media print{body{margin:0;max-width:none}h2{break-after:avoid}svg,table{break-inside:avoid}}`;
 
@@ -44,15 +44,16 @@ function viewHtml(view: PanelView): string {
 const cell = (text: string, kind = '') => `<td${kind && ` class="${kind}"`}>${escapeText(text)}</td>`;
 
 function goalsTable({ goals }: PanelView): string {
-  const rows = goals.map(({ ok, title, place, bar, valueText, marginText, detail }) =>
-    `<tr>${cell(`${ok ? '✓' : '✗'} ${title}`, ok ? 'ok' : 'no')}${cell(place, 'left')}<td>${svg('bar', `0 0 ${barSize.width} ${barSize.height}`, goalBar(bar), marginText)}</td>${cell(valueText)}${cell(marginText)}${cell(detail)}</tr>`);
+  const rows = goals.map(({ ok, title, place, bar, valueText, marginText, detail, note }) =>
+    `<tr>${cell(`${ok ? '✓' : '✗'} ${title}`, ok ? 'ok' : 'no')}${cell(place, 'left')}<td>${svg('bar', `0 0 ${barSize.width} ${barSize.height}`, goalBar(bar), marginText)}</td>${cell(valueText)}${cell(marginText)}${cell(detail)}</tr>${note && `<tr class="soft"><td></td><td class="left" colspan="5">${escapeText(note)}</td></tr>`}`);
   return `<table><thead><tr><th>goal</th><th class="left">where</th><th>margin</th><th>value</th><th></th><th></th></tr></thead><tbody>${rows.join('')}</tbody></table>`;
 }
 
-function legend({ traces, marker }: PanelView): string {
+function legend({ traces, discs, limits, marker }: PanelView): string {
   const lines = traces.map(({ caseName }, i) => `<span>${svg('sample', '0 0 26 8', tag('path', { class: `trace case-${i % 6}`, d: 'M1 4L25 4' }), '')} ${escapeText(caseName)}</span>`);
   const readings = (marker?.cases ?? []).map(({ caseName, text }) => `<li>${escapeText(caseName)}: ${escapeText(text)}</li>`);
-  return `<p class="soft">${lines.join(' ').replace(/<svg class="sample"/g, '<svg class="sample" width="26" height="8"')}</p>${marker ? `<p>At ${escapeText(marker.text)}:</p><ul>${readings.join('')}</ul>` : ''}`;
+  const shapes = [...discs.map(({ label }) => `disc: ${label}`), ...limits.map(({ label }) => `dashed ring: ${label}`)].map((text) => `<span>${escapeText(text)}</span>`);
+  return `<p class="soft">${[...lines, ...shapes].join(' · ').replace(/<svg class="sample"/g, '<svg class="sample" width="26" height="8"')}</p>${marker ? `<p>At ${escapeText(marker.text)}:</p><ul>${readings.join('')}</ul>` : ''}`;
 }
 
 function ladderTable(rows: readonly LadderRowView[]): string {

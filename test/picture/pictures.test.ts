@@ -31,6 +31,14 @@ describe('pictures', () => {
     expectFile('chart.svg', `<svg xmlns="http://www.w3.org/2000/svg" viewBox="${x} ${y} ${width} ${height}"><style>${standaloneStyle('light')}</style><rect class="paper" x="${x}" y="${y}" width="${width}" height="${height}"/>${chart}</svg>\n`);
   });
 
+  it('what no lossless ladder gets inside of is a ring, beside the goals’ discs', () => {
+    const ring = { centreRe: 0.2, centreIm: -0.1, radius: 0.3, label: 'Bode–Fano, an invented band: |Γ| 0.3' };
+    const [, cx, cy, r, title] = /<circle class="limit" cx="([^"]+)" cy="([^"]+)" r="([^"]+)"><title>([^<]+)</.exec(smithChart({ ...view, limits: [ring] })) ?? [];
+    assert.deepEqual([Number(cx), Number(cy), Number(r)], [0.2 * chartRadius, 0.1 * chartRadius, 0.3 * chartRadius]);
+    assert.equal(title, ring.label);
+    assert.ok(!smithChart({ ...view, limits: [] }).includes('class="limit"'));
+  });
+
   it('the plots of the sample', () => {
     for (const plot of ['reflection', 'gain'] as const) {
       expectFile(`${plot}.svg`, `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${plotSize.width} ${plotSize.height}"><style>${standaloneStyle('dark')}</style><rect class="paper" width="${plotSize.width}" height="${plotSize.height}"/>${frequencyPlot({ ...view, plot, markerHz: view.marker!.frequencyHz })}</svg>\n`);
