@@ -28,13 +28,15 @@ export function outOfReachNote(problem: Problem, { goal, ok }: Pick<GoalResult, 
   if (!worst || !reflection || !model) return '';
   const taken = model.fitError < asGoodAsItsModel ? '' : `taken as ${modelText(model)} (within |Γ| ${magnitude(model.fitError)})`;
   const where = worst.caseName === null ? taken && `, the load ${taken}` : ` with ${worst.caseName}${taken && `, ${taken}`}`;
+  const { form } = goal.place;
+  const over = form === 'band' ? 'this band' : form !== 'bands' ? 'these frequencies' : problem.bands.length > 1 ? worst.band : 'this band';
   const asked = reflectionLimit(goal);
   if (asked !== null && wantsLarge(goal) === (goal.quantity === 'return loss') && asked < reflection) {
-    return `${asked < (certain ?? 0) ? '' : 'probably '}out of reach without loss: over this band no lossless ladder gets below |Γ| ${magnitude(reflection)} (${inDb(returnLossDb(reflection))})${where}`;
+    return `${asked < (certain ?? 0) ? '' : 'probably '}out of reach without loss: over ${over} no lossless ladder gets below |Γ| ${magnitude(reflection)} (${inDb(returnLossDb(reflection))})${where}`;
   }
   const most = decibels(1 - reflection * reflection);
   const gainDb = goal.quantity === 'gain' && wantsLarge(goal) ? goal.limit : goal.quantity === 'insertion loss' && !wantsLarge(goal) ? -(goal.limit ?? 0) : null;
-  return gainDb !== null && gainDb > most ? `${gainDb > decibels(1 - (certain ?? 0) ** 2) ? '' : 'probably '}out of reach: over this band no ladder gets above ${inDb(most)} of gain${where}` : '';
+  return gainDb !== null && gainDb > most ? `${gainDb > decibels(1 - (certain ?? 0) ** 2) ? '' : 'probably '}out of reach: over ${over} no ladder gets above ${inDb(most)} of gain${where}` : '';
 }
 
 /** The largest limit among the bands or the range that a goal is asked in; null where there is none, as for a single frequency. */

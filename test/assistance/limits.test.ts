@@ -74,7 +74,7 @@ describe('how good a band could be', () => {
       ['VSWR <= 1.2 in wide', /out of reach without loss/],
       ['gain >= -0.05 dB', /out of reach: over this band no ladder gets above −0\.0803 dB of gain/],
       ['insertion loss <= 0.05 dB', /out of reach: /],
-      ['return loss >= 20 dB at 1 .. 2 GHz', /out of reach without loss/],
+      ['return loss >= 20 dB at 1 .. 2 GHz', /out of reach without loss: over these frequencies no/],
       ['return loss >= 17 dB', /^$/],
       ['return loss <= 3 dB', /^$/],
       ['gain >= -0.1 dB', /^$/],
@@ -90,6 +90,13 @@ describe('how good a band could be', () => {
       if (missed) assert.equal(/out of reach/.test(missed.message), expected.source !== '^$', goal);
       assert.equal(/^ {6}out of reach/m.test(checkText({ path: 'a', assessment }, false)), expected.source !== '^$', goal);
     }
+  });
+
+  it('names the band where a goal goes over several', () => {
+    const problem = problemOf(`${rc}  narrow: 1 .. 1.05 GHz\n${ladder}goals:\n  - return loss >= 20 dB\n  - return loss >= 20 dB in wide\n`);
+    const notes = problem.goals.map((goal) => outOfReachNote(problem, { goal, ok: false }));
+    assert.match(notes[0], /: over wide no lossless/);
+    assert.match(notes[1], /: over this band no lossless/);
   });
 
   it('says probably where only the error of the load’s model decides', () => {
