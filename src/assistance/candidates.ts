@@ -51,7 +51,7 @@ function candidateView(solution: Solution, id: number, bestOfParts: boolean): Ca
     directCurrent: solution.dcPath === null ? 'not known' : solution.dcPath ? 'passes' : 'blocked',
     // Said once for each number of parts: of the others it follows.
     proof: bestOfParts ? proofWords(solution) : '',
-    note: [conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : ''].filter((text) => text !== '').join(' · '),
+    note: [solution.yield === null ? '' : `${printNumber(100 * solution.yield, 3)} % of builds hold`, conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : ''].filter((text) => text !== '').join(' · '),
   };
 }
 

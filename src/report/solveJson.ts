@@ -34,7 +34,7 @@ function solutionJson(solution: Solution): object {
     worstReflection: finite(solution.worstReflection), worstReturnLoss: finite(returnLossDb(solution.worstReflection)), worstGain: finite(decibels(solution.worstGain)),
     margin: finite(solution.marginDb), parts: solution.parts, form: solution.form, dcPath: solution.dcPath, dcBlock: solution.dcBlock,
     proved: solution.proved, bound: finite(solution.boundDb), ...(solution.proved ? {} : { reason: 'the best that was found; it is not proved that nothing is better' }),
-    nodes: solution.nodes, holds: solution.holds,
+    nodes: solution.nodes, holds: solution.holds, yield: solution.yield,
   };
 }
 

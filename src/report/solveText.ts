@@ -24,7 +24,7 @@ export function solveText({ path, result }: SolvedFile): string {
   return lines.join('\n');
 }
 
-const heads = ['values', 'margin', 'return loss', 'gain', 'parts', 'response', 'direct current'];
+const heads = ['values', 'margin', 'return loss', 'gain', 'yield', 'parts', 'response', 'direct current'];
 
 const dB = (value: number): string => `${printNumber(value, 3)} dB`;
 
@@ -32,7 +32,8 @@ function columns(solution: Solution): string[] {
   const current = solution.dcPath === null ? 'not known' : solution.dcPath ? 'passes' : 'blocked';
   return [
     solution.solved.map((each) => `${each.name} ${solvedValue(each)}`).join(', '),
-    `${dB(solution.marginDb)}${solution.holds ? '' : ' ✗'}`, dB(returnLossDb(solution.worstReflection)), dB(decibels(solution.worstGain)), String(solution.parts),
+    `${dB(solution.marginDb)}${solution.holds ? '' : ' ✗'}`, dB(returnLossDb(solution.worstReflection)), dB(decibels(solution.worstGain)),
+    solution.yield === null ? '–' : `${printNumber(100 * solution.yield, 3)} %`, String(solution.parts),
     solution.form, current,
   ];
 }

@@ -23,5 +23,10 @@ export const refinedPerCount = 12;
 export const refinedAtMost = 60;
 /** Work for the seeds of one form and kinds. */
 export const seedNodes = 20_000_000;
+/** Builds for each solution's yield; fewer where each needs a whole evaluation. */
+export const quickBuilds = 500;
+export const slowBuilds = 100;
+/** With a goal on yield so many times what is asked for is looked at: what reaches it may not have the largest margin. */
+export const yieldPool = 3;
 /** Parts of a catalogue that are tried around a value that follows from a chosen Q. */
 export const nearestOfEach = 4;

@@ -26,8 +26,10 @@ export interface Solution {
   readonly marginDb: number;
   /** Goals without a margin in dB (parts, direct current, resistance, stress …) that it misses. */
   readonly conditionsMissed: number;
-  /** Every goal holds, yield left aside. */
+  /** Every goal holds; a goal on yield by `yield`. */
   readonly holds: boolean;
+  /** Share of some random builds that meet every other goal; null where no part has a tolerance. Not part of the proof. */
+  readonly yield: number | null;
   /** |Γ| against the source, over the bands that are not watched and all cases. */
   readonly worstReflection: number;
   /** Transducer gain as a power ratio, over the same. */

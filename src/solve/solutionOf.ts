@@ -35,6 +35,7 @@ export function solutionOf(problem: Problem, solved: readonly SolvedElement[], l
     marginDb: margins.length > 0 ? Math.min(...margins) : decibels(worstGain),
     conditionsMissed: judgedGoals.filter(({ goal, ok }) => isCondition(goal) && !ok).length,
     holds: judgedGoals.every(({ ok }) => ok),
+    yield: null,
     worstReflection, worstGain,
     parts: countParts(ladder),
     form: responseOfLadder(ladder),

@@ -9,11 +9,12 @@ import { conditionsOf } from './conditions';
 import { fillForm } from './fillForm';
 import { formsOf, positionsOf } from './forms';
 import { freeCandidates, hasFreeValue } from './freeCandidates';
-import { searchNodes } from './limits';
+import { searchNodes, yieldPool } from './limits';
 import { twoElementFormsOutOfReach } from './outOfReach';
 import { compareRanked, exactExcess } from './ranking';
 import { defaultTop, type Solution, type SolveOptions, type SolveResult } from './solution';
 import { solutionOf } from './solutionOf';
+import { betterBuild, withYields } from './yieldOfSolutions';
 
 /**
  * Fills in what a problem leaves unknown: the best ladders first (`compareRanked`), and the best for each number of parts.
@@ -46,7 +47,11 @@ export function solveProblem(problem: Problem, options: SolveOptions = {}): Solv
   // What follows from a chosen Q is not the best of all ladders, unless it matches exactly.
   const candidates = chosen ? found.map((each) => ({ ...each, proved: each.excess <= exactExcess })) : found;
   if (candidates.length === 0) return { ...nothing('no ladder can be built from what is left of the parts'), outOfReach };
-  return { ...ranked(problem, candidates, aim, top), reason: null, hints: hintsOf(problem, aim, lossless), outOfReach };
+  const { solutions, byParts } = ranked(problem, candidates, aim, top);
+  const hints = hintsOf(problem, aim, lossless);
+  const better = betterBuild(solutions);
+  if (better) hints.push(`The largest margin is not the best build: ${better.solved.map(({ name }) => name).join(', ')} of solution ${solutions.indexOf(better) + 1} hold in ${percent(better.yield)} of builds, those of the first in ${percent(solutions[0].yield)}.`);
+  return { solutions, byParts, reason: null, hints, outOfReach };
 }
 
 function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, top: number): Pick<SolveResult, 'solutions' | 'byParts'> {
@@ -66,11 +71,18 @@ function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, to
     return solution;
   };
   const counts = [...new Set(order.map(({ parts }) => parts))].sort((a, b) => a - b);
-  return {
-    solutions: order.slice(0, top).map(make),
-    byParts: counts.map((count) => make(order.find(({ parts }) => parts === count) as Candidate)),
-  };
+  const asksYield = problem.goals.some(({ quantity }) => quantity === 'yield');
+  const listed = order.slice(0, asksYield ? yieldPool * top : top).map(make);
+  const bests = counts.map((count) => make(order.find(({ parts }) => parts === count) as Candidate));
+  const all = [...listed, ...bests.filter((each) => !listed.includes(each))];
+  const yields = withYields(problem, all);
+  // The best of each number of parts stays what it is by margin, and is one with its place in the list.
+  const found = new Map(all.map((each) => [each.ladder, yields.find(({ ladder }) => ladder === each.ladder) as Solution]));
+  const chosen = yields.filter(({ ladder }) => listed.some((each) => each.ladder === ladder)).slice(0, top);
+  return { solutions: chosen, byParts: bests.map((each) => found.get(each.ladder) as Solution) };
 }
+
+const percent = (share: number | null): string => `${((share ?? 0) * 100).toFixed(1)} %`;
 
 function hintsOf(problem: Problem, aim: Aim, lossless: boolean): string[] {
   const hints = aim.notKnown.map(({ goal, reason }) => `«${goal.text}» cannot be told and was left aside: ${reason}.`);
