@@ -55,7 +55,11 @@ export function candidatesSection(controls: Controls, actions: Actions) {
       setText(message, candidates.message);
       message.hidden = candidates.message === '';
       picture.update(view);
-      syncList(list, candidates.candidates, makeRow, updateRow);
+      syncList(list, candidates.candidates, makeRow, (row, candidate) => {
+        updateRow(row, candidate);
+        // What belongs to an older text cannot go into this one.
+        row.querySelector<HTMLElement>('.insert')!.hidden = candidates.stale;
+      });
       list.hidden = candidates.candidates.length === 0;
       syncList(notes, candidates.notes, () => element('li'), (item, text) => setText(item, text));
       notes.hidden = candidates.notes.length === 0;

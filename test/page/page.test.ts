@@ -97,6 +97,17 @@ describe('the panel’s page', function () {
     });
   }
 
+  it('says which candidates belong to an older text, and inserts none of them', async () => {
+    const served = await openPage('light', 580);
+    await served.post(viewMessage(unsolvedView(true).view));
+    assert.equal(await served.page.textContent('.candidates-section h2'), 'Candidates of an older text');
+    assert.ok((await served.page.locator('.candidates li').count()) > 1);
+    assert.equal(await served.page.locator('.candidates .insert:visible').count(), 0);
+    await served.post(viewMessage(unsolvedView().view, 2));
+    assert.equal(await served.page.locator('.candidates .insert:visible').count(), await served.page.locator('.candidates li').count());
+    await served.page.close();
+  });
+
   it('shows how far the solver is, until the next view', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));
