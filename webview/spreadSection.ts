@@ -6,8 +6,8 @@ import { element, picture, setMarkup, setText } from './dom';
 export function spreadSection() {
   const heading = element('h2');
   const chart = picture(`0 0 ${histogramSize.width} ${histogramSize.height}`, { class: 'plot histogram', role: 'img' });
-  const lines = ['yield-line', 'corner-line', 'remedy-line'].map((name) => element('p', { class: name }));
-  const root = element('section', { class: 'spread-section', 'aria-label': 'Spread of builds' }, heading, lines[0], chart as unknown as HTMLElement, lines[1], lines[2]);
+  const lines = ['yield-line', 'goals-line', 'corner-line', 'remedy-line'].map((name) => element('p', { class: name }));
+  const root = element('section', { class: 'spread-section', 'aria-label': 'Spread of builds' }, heading, lines[0], chart as unknown as HTMLElement, ...lines.slice(1));
   return {
     root,
     update({ spread }: Pick<PanelView, 'spread'>) {
@@ -15,7 +15,7 @@ export function spreadSection() {
       if (spread === null) return;
       root.classList.toggle('old', spread.stale);
       setText(heading, spread.stale ? 'Spread of builds (before the last change)' : spread.share < 1 ? `Spread of builds, ${Math.floor(100 * spread.share)} % made` : 'Spread of builds');
-      [spread.yieldText, spread.cornerText, spread.remedyText].forEach((text, i) => {
+      [spread.yieldText, spread.goalsText, spread.cornerText, spread.remedyText].forEach((text, i) => {
         setText(lines[i], text);
         lines[i].hidden = text === '';
       });

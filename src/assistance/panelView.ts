@@ -65,7 +65,7 @@ export function panelView(bare: Assessment, context: PanelContext): PanelView | 
     ladder: ladderRows(assessment, problem),
     notInserted: best !== null,
     candidates: unsolved ? candidatesOf(given, context) : null,
-    spread: studied && !unsolved ? spreadView(studied.spread, problem.spread.builds, studied) : null,
+    spread: studied && !unsolved ? spreadView(studied.spread, problem, studied) : null,
   };
 }
 

@@ -1,10 +1,12 @@
 import type { Tolerance } from '../network/part';
 import { printNumber, printQuantity } from '../quantity/printQuantity';
+import type { Goal } from '../study/goal';
 import type { WorstCorner } from '../study/spread/worstCorner';
 import type { YieldRemedy } from '../study/spread/yieldRemedy';
 import type { SpreadOfBuilds } from '../study/spread/spreadOfBuilds';
 import type { Spread } from './spreadAssessment';
 import { unitOfKind } from './familyMembers';
+import { goalTitle } from './goalText';
 
 const percent = (share: number): string => `${printNumber(100 * share, 3)} %`;
 const dB = (value: number): string => `${printNumber(value, 3)} dB`;
@@ -27,7 +29,16 @@ const toleranceText = ({ form, up, down }: Tolerance): string => {
 
 export const remedyText = ({ elementName, tolerance, yield: share }: YieldRemedy): string => `${elementName} at ${toleranceText(tolerance)} would make it ${percent(share)}`;
 
-/** Yield, worst corner, and what would help. */
-export function spreadLines({ builds, corner, remedy }: Spread): string[] {
-  return [yieldText(builds), cornerText(corner), ...(remedy ? [remedyText(remedy)] : [])];
+/** `by goal: return loss ≥ 14 dB 88 %, gain ≥ −1 dB 99.6 %`: those that some builds miss, the worst first; empty where none does. */
+export function goalYieldsText({ goalYields }: SpreadOfBuilds, goals: readonly Goal[]): string {
+  const missed = goals.flatMap((goal, at) => {
+    const share = goalYields[at] ?? null;
+    return share === null || share === 1 ? [] : [{ text: `${goalTitle(goal)} ${percent(share)}`, share }];
+  });
+  return missed.length < 2 ? missed.map(({ text }) => `missed by some: ${text}`).join('') : `by goal: ${missed.sort((a, b) => a.share - b.share).map(({ text }) => text).join(', ')}`;
+}
+
+/** Yield, whole and by goal, worst corner, and what would help. */
+export function spreadLines({ builds, corner, remedy }: Spread, goals: readonly Goal[]): string[] {
+  return [yieldText(builds), goalYieldsText(builds, goals), cornerText(corner), ...(remedy ? [remedyText(remedy)] : [])].filter((text) => text !== '');
 }

@@ -1,17 +1,19 @@
 import type { SpreadView } from '../messages/panel';
-import { cornerText, remedyText, yieldText } from './spreadText';
+import type { Problem } from '../study/problem';
+import { cornerText, goalYieldsText, remedyText, yieldText } from './spreadText';
 import type { Spread } from './spreadAssessment';
 
 /** Bars of the histogram at most. */
 const barsAtMost = 24;
 
 /** The spread as the panel shows it. */
-export function spreadView({ builds, corner, remedy }: Spread, wanted: number, options: { readonly stale: boolean; readonly cloud: SpreadView['cloud'] }): SpreadView {
+export function spreadView({ builds, corner, remedy }: Spread, { goals, spread: { builds: wanted } }: Problem, options: { readonly stale: boolean; readonly cloud: SpreadView['cloud'] }): SpreadView {
   const { marginsDb } = builds;
   return {
     stale: options.stale,
     share: wanted === 0 ? 1 : builds.builds / wanted,
     yieldText: yieldText(builds),
+    goalsText: goalYieldsText(builds, goals),
     cornerText: cornerText(corner),
     remedyText: remedy ? remedyText(remedy) : '',
     cornerDb: Number.isFinite(corner.marginDb) ? corner.marginDb : null,

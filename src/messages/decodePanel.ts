@@ -25,7 +25,7 @@ const candidate = shape<CandidateView>({
 });
 const candidates = shape<CandidatesView>({ stale: flag, message: text, notes: listOf(text), candidates: listOf(candidate) });
 const spread = shape<SpreadView>({
-  stale: flag, share: number, yieldText: text, cornerText: text, remedyText: text, cornerDb: orNull(number),
+  stale: flag, share: number, yieldText: text, goalsText: text, cornerText: text, remedyText: text, cornerDb: orNull(number),
   bars: listOf(shape<SpreadView['bars'][number]>({ fromDb: number, toDb: number, count: whole })), cloud: listOf(points),
 });
 const view = shape<PanelView>({

@@ -157,6 +157,8 @@ export interface SpreadView {
   /** Of the builds, how many have been made: 1 when it is done. */
   readonly share: number;
   readonly yieldText: string;
+  /** Which goals some builds miss; empty where none does. */
+  readonly goalsText: string;
   readonly cornerText: string;
   /** What would have to be tightened; empty where nothing is to be said. */
   readonly remedyText: string;

@@ -28,7 +28,7 @@ export function checkText({ path, assessment, earlier }: CheckedFile, colour: bo
   const verdict = !evaluation ? 'nothing can be computed' : results.length === 0 ? 'no goals' : verdictText(results);
   const state = isOk(assessment) ? paint(colour, green, verdict) : paint(colour, red, verdict);
   const heed = model.problem && evaluation ? cautions(model.problem, evaluation).map((text) => `  ! ${text}`) : [];
-  const spread = assessment.spread ? spreadLines(assessment.spread).map((text) => `  ${text}`) : [];
+  const spread = assessment.spread ? spreadLines(assessment.spread, model.problem?.goals ?? []).map((text) => `  ${text}`) : [];
   return [`${path}: ${state}`, ...lines, ...spread, ...heed, ''].join('\n');
 }
 

@@ -13,7 +13,7 @@ const view: PanelView = {
   marker: { frequencyHz: 866.5e6, text: '866.5 MHz', cases: [{ caseName: 'load', text: 'Γ 0.1', loadReflection: { re: 0.1, im: 0 }, steps: [{ name: 'L1', arc: { re: [0.1], im: [0.2] } }], inputReflection: null }] },
   ladder: [{ id: 'L1', name: 'L1', orientation: 'series', symbol: 'inductor', value: '13 nH', reactance: '+j70.8 Ω', impedanceAfter: '18.0 + j2.0 Ω', voltage: '1 V', current: '20 mA', heat: '1 mW', loss: '4 %', sensitivity: '0.1', note: '', line: 20, editable: true }],
   notInserted: true,
-  spread: { stale: false, share: 1, yieldText: '97 %', cornerText: 'worst corner', remedyText: '', cornerDb: -1, bars: [{ fromDb: 0, toDb: 1, count: 3 }], cloud: [{ re: [0.1, null], im: [0.2, null] }] },
+  spread: { stale: false, share: 1, yieldText: '97 %', goalsText: 'by goal', cornerText: 'worst corner', remedyText: '', cornerDb: -1, bars: [{ fromDb: 0, toDb: 1, count: 3 }], cloud: [{ re: [0.1, null], im: [0.2, null] }] },
   candidates: { stale: false, message: '', notes: ['an invented remark'], candidates: [{ id: 0, values: 'L1 13 nH', holds: true, margin: '1 dB', returnLoss: '15 dB', gain: '−0.5 dB', parts: '1', response: 'low-pass', directCurrent: 'passes', proof: 'proved', note: '' }] },
 };
 
