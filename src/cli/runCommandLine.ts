@@ -5,6 +5,7 @@ import { report } from './report';
 import { solve } from './solve';
 import { sweep } from './sweep';
 import { tidyFiles } from './tidyFiles';
+import { toolVersion } from './toolVersion';
 import { usage } from './usage';
 
 /** What a command may use of the world; a test hands in its own. */
@@ -37,14 +38,12 @@ const commands: Readonly<Record<string, Command>> = {
   tidy: { options: ['verify'], run: tidyFiles },
 };
 
-declare const OHMWARD_VERSION: string;
-
 /** The exit code: 0 all holds, 1 something does not, 2 the call is wrong or a description named in it cannot be read. */
 export async function runCommandLine(words: readonly string[], around: Surroundings): Promise<number> {
   try {
     const { values, positionals } = parseWords(words);
     if (values.version) {
-      around.out(`${OHMWARD_VERSION}\n`);
+      around.out(`${toolVersion()}\n`);
       return 0;
     }
     const [name, ...paths] = positionals;

@@ -1,7 +1,8 @@
 export const usage = `ohmward COMMAND [options] FILE or FOLDER …
 
   check   reads and evaluates; says for each goal whether it holds and by how much
-            --format text|json       text for people (default), or JSON for programs
+            --format text|json|sarif|junit
+                                     text for people (default), JSON for programs, SARIF 2.1.0, JUnit XML
             --since FILE             compares each goal with an earlier version of the description
   solve   finds the values that are still unknown, the best first
             --format text|json
