@@ -1,6 +1,7 @@
 import { askedPoints, outerPoints, rejectingPoints, trialOrder } from './decisivePoints';
-import { indexOf, reducedShape, type LadderShape } from './ladderShape';
-import { nodesOfEvaluation, prefixesAtOnce, searchNodes, thinnedTo, tryAllUpTo } from './limits';
+import { indexOf, reducedShape, type LadderShape, type Slot } from './ladderShape';
+import { nodesOfEvaluation, prefixesAtMost, prefixesAtOnce, searchNodes, suffixesAtMost, thinnedTo, tryAllUpTo } from './limits';
+import { localSearch } from './localSearch';
 import { middleSearch, type MiddleSearch } from './middleSearch';
 import { topList, type Found, type TopList } from './topList';
 import { trialOf, type Trial } from './trial';
@@ -57,10 +58,9 @@ export function catalogueSearch(task: SearchTask): SearchOutcome {
   const total = shapes.reduce((sum, { size }) => sum + size, 0);
   const plainOrder = Int32Array.from({ length: points.count }, (_, k) => k);
   const outer = outerPoints(points);
-  if (total <= Math.max(task.tryAllUpTo ?? tryAllUpTo, task.size) || outer.length === 0) {
-    return tryAll(task, shapes.map((shape) => trialOf(shape, points, trialOrder(points, outer, []))));
-  }
   const firstTrials = shapes.map((shape) => trialOf(shape, points, trialOrder(points, outer, [])));
+  if (total <= Math.max(task.tryAllUpTo ?? tryAllUpTo, task.size)) return tryAll(task, firstTrials);
+  if (outer.length === 0 || !shapes.every((shape) => canBeSearched(shape))) return searchLocally(task, firstTrials);
   const thinned = shapes.map((shape) => {
     const keep = shape.slots.map(({ group, count }) => thin(group, count, thinnedTo[Math.min(shape.slots.length, thinnedTo.length - 1)]));
     return { keep, shape: reducedShape(shape, keep, points.count) };
@@ -103,6 +103,36 @@ export function catalogueSearch(task: SearchTask): SearchOutcome {
     if (isFull(list, task) || most === Infinity) return { found: list.found, proved: true, nodes };
   }
 }
+
+/** Whether the tables of a shape, cut by kinds on the load's side, have a size that one can hold. */
+function canBeSearched(shape: LadderShape): boolean {
+  const middle = middleOf(shape);
+  if (middle < 0) return shape.size <= prefixesAtMost;
+  const largestKind = ({ group }: Slot): number => Math.max(...[...new Set(group)].map((each) => group.filter((own) => own === each).length));
+  const prefixes = shape.slots.slice(0, middle).reduce((product, slot) => product * largestKind(slot), 1);
+  const suffixes = shape.slots.slice(middle + 1).reduce((product, { count }) => product * count, 1);
+  return prefixes <= prefixesAtMost && suffixes <= suffixesAtMost;
+}
+
+/** The best found, without a proof. */
+function searchLocally(task: SearchTask, trials: readonly Trial[]): SearchOutcome {
+  const list = topList(task.size, task.leastMissed);
+  const state = stateOf(task, list);
+  let goesOn = true;
+  task.shapes.forEach((shape, s) => {
+    if (!goesOn) return;
+    state.nodes += localSearch(shape, trials[s], (choice) => (goesOn = known(list, shape, s, choice) || state.consider(s, trials[s], choice, shape)));
+    goesOn &&= state.nodes < state.limit;
+    task.onProgress?.((s + 1) / task.shapes.length, list.found[0] ?? null);
+  });
+  return { found: list.found, proved: false, nodes: state.nodes };
+}
+
+/** Several starts may end at one ladder. */
+const known = (list: TopList, whole: LadderShape, shape: number, choice: Int32Array): boolean => {
+  const index = indexOf(whole, choice);
+  return list.found.some((each) => each.shape === shape && each.index === index);
+};
 
 /** Full with ladders that miss no more than the least: then none outside of the threshold can enter. */
 const isFull = (list: TopList, task: SearchTask): boolean => list.full && list.found[list.found.length - 1].missed <= task.leastMissed;

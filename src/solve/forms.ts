@@ -4,6 +4,7 @@ import { countParts } from '../study/countParts';
 import type { Problem } from '../study/problem';
 import { studiedLadder } from '../study/studiedLadder';
 import type { LadderTask, Unknown } from '../study/unknown';
+import { omissionsAtMost, wholeFreeElementsAtMost } from './limits';
 import { positionOf, type Position } from './positions';
 import type { SolvedElement } from './solution';
 
@@ -28,11 +29,15 @@ export function formsOf(problem: Problem): readonly Form[] {
   const made = new Map(unknowns.map((unknown) => [unknown, positionOfUnknown(unknown, ladder[unknown.elementIndex])]));
   const optional = unknowns.filter(({ mayOmit }) => mayOmit);
   const forms: Form[] = [];
-  for (let mask = 0; mask < 2 ** optional.length; mask++) {
-    const omitted = new Set(optional.filter((_, i) => (mask >> i) & 1));
-    forms.push(formWithout(omitted, unknowns, made, ladder));
-  }
+  for (const omitted of omissions(optional)) forms.push(formWithout(new Set(omitted), unknowns, made, ladder));
   return forms.filter((form) => positionsOf(form).every(({ items }) => items.length > 0));
+}
+
+/** Every subset of the places that may stay empty; of many such places, those of up to two, and what they leave. */
+export function omissions<T>(optional: readonly T[]): readonly (readonly T[])[] {
+  if (optional.length <= omissionsAtMost) return Array.from({ length: 2 ** optional.length }, (_, mask) => optional.filter((__, i) => (mask >> i) & 1));
+  const few: T[][] = [[], ...optional.map((one) => [one]), ...optional.flatMap((one, i) => optional.slice(i + 1).map((other) => [one, other]))];
+  return [...few, ...few.map((kept) => optional.filter((each) => !kept.includes(each)))];
 }
 
 function formWithout(omitted: ReadonlySet<Unknown>, unknowns: readonly Unknown[], made: ReadonlyMap<Unknown, Position>, ladder: readonly Element[]): Form {
@@ -86,5 +91,6 @@ function wholeLadders(task: LadderTask): readonly Form[] {
     unknowns: Array.from({ length: count }, (_, i) => i),
   });
   if (task.form !== 'up to') return [ladderOf(3, task.form === 'pi' ? 'shunt' : 'series')];
-  return Array.from({ length: task.elements }, (_, i) => i + 1).flatMap((count) => [ladderOf(count, 'series'), ladderOf(count, 'shunt')]);
+  const most = series.items.some(({ range }) => range !== null) ? Math.min(task.elements, wholeFreeElementsAtMost) : task.elements;
+  return Array.from({ length: most }, (_, i) => i + 1).flatMap((count) => [ladderOf(count, 'series'), ladderOf(count, 'shunt')]);
 }

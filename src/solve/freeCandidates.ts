@@ -6,7 +6,7 @@ import { inverse, twoElementMatches, type ReactivePart } from './closedForms';
 import { fillForm } from './fillForm';
 import { isPosition, positionsOf, type Form } from './forms';
 import { shapeOf } from './ladderShape';
-import { refinedAtMost, refinedPerCount, seedNodes, seedsPerForm } from './limits';
+import { refinedAtMost, refinedPerCount, leastSeedNodes, seedNodes, seedsPerForm } from './limits';
 import { partOfValue, type Item, type Position } from './positions';
 import { compareRanked, exactExcess } from './ranking';
 import { refineLadder } from './refineLadder';
@@ -23,7 +23,7 @@ export function freeCandidates(task: CatalogueTask, byDefault: boolean): Candida
   const exact = variants.flatMap(({ form, order }) => closedForms(form, order, task));
   const seeds = variants.flatMap(({ form, order }, at) => {
     task.onProgress?.((0.5 * at) / variants.length, null);
-    const found = catalogueCandidates({ ...task, forms: [form], size: seedsPerForm, nodeLimit: seedNodes, onProgress: undefined });
+    const found = catalogueCandidates({ ...task, forms: [form], size: seedsPerForm, nodeLimit: Math.max(leastSeedNodes, seedNodes / variants.length), onProgress: undefined });
     return found.map((each) => ({ ...each, order: [order, ...each.order] }));
   });
   const rank = (a: Candidate, b: Candidate): number => compareRanked(a, b, byDefault);

@@ -21,8 +21,9 @@ export const lengthsTried = 72;
 export const seedsPerForm = 3;
 export const refinedPerCount = 12;
 export const refinedAtMost = 60;
-/** Work for the seeds of one form and kinds. */
-export const seedNodes = 20_000_000;
+/** Work for the seeds of all forms and kinds together, and what one of them gets at least. */
+export const seedNodes = 60_000_000;
+export const leastSeedNodes = 500_000;
 /** Builds for each solution's yield; fewer where each needs a whole evaluation. */
 export const quickBuilds = 500;
 export const slowBuilds = 100;
@@ -30,3 +31,13 @@ export const slowBuilds = 100;
 export const yieldPool = 3;
 /** Parts of a catalogue that are tried around a value that follows from a chosen Q. */
 export const nearestOfEach = 4;
+/** Tables of more than these are not made; then the best found is given, not a proof. */
+export const prefixesAtMost = 2_000_000;
+export const suffixesAtMost = 500_000;
+/** Starts of a search that is not exact, and its work, in items tried times slots. */
+export const localStarts = 48;
+export const localNodes = 10_000_000;
+/** Whole ladders of values that may be anything are found with up to so many elements. */
+export const wholeFreeElementsAtMost = 4;
+/** So many places that may stay empty are tried in all combinations; of more, those that leave out, or fit, two at most. */
+export const omissionsAtMost = 8;

@@ -7,9 +7,9 @@ import { catalogueCandidates, type Candidate, type CatalogueTask } from './catal
 import { formsOfChosenQ } from './chosenQ';
 import { conditionsOf } from './conditions';
 import { fillForm } from './fillForm';
-import { formsOf, positionsOf } from './forms';
+import { formsOf, positionsOf, type Form } from './forms';
 import { freeCandidates, hasFreeValue } from './freeCandidates';
-import { searchNodes, yieldPool } from './limits';
+import { omissionsAtMost, searchNodes, yieldPool } from './limits';
 import { twoElementFormsOutOfReach } from './outOfReach';
 import { compareRanked, exactExcess } from './ranking';
 import { defaultTop, type Solution, type SolveOptions, type SolveResult } from './solution';
@@ -48,7 +48,7 @@ export function solveProblem(problem: Problem, options: SolveOptions = {}): Solv
   const candidates = chosen ? found.map((each) => ({ ...each, proved: each.excess <= exactExcess })) : found;
   if (candidates.length === 0) return { ...nothing('no ladder can be built from what is left of the parts'), outOfReach };
   const { solutions, byParts } = ranked(problem, candidates, aim, top);
-  const hints = hintsOf(problem, aim, lossless);
+  const hints = [...hintsOf(problem, aim, lossless), ...cutHints(problem, forms)];
   const better = betterBuild(solutions);
   if (better) hints.push(`The largest margin is not the best build: ${better.solved.map(({ name }) => name).join(', ')} of solution ${solutions.indexOf(better) + 1} hold in ${percent(better.yield)} of builds, those of the first in ${percent(solutions[0].yield)}.`);
   return { solutions, byParts, reason: null, hints, outOfReach };
@@ -89,6 +89,15 @@ function hintsOf(problem: Problem, aim: Aim, lossless: boolean): string[] {
   if (!lossless && problem.goals.some(asksReflection) && !problem.goals.some(asksGain)) {
     hints.push('The parts have loss, and a lossy match reflects little and passes little: a goal on gain, such as «gain >= -1 dB», would tell the two apart.');
   }
+  return hints;
+}
+
+/** What was not looked at, and why. */
+function cutHints({ ladderTask, unknowns }: Problem, forms: readonly Form[]): string[] {
+  const most = Math.max(...forms.map(({ parts }) => parts));
+  const hints: string[] = [];
+  if (ladderTask?.form === 'up to' && ladderTask.elements > most) hints.push(`Ladders of more than ${most} elements were not looked at.`);
+  if (unknowns.filter(({ mayOmit }) => mayOmit).length > omissionsAtMost) hints.push('So many places may stay empty that only ladders were looked at in which two of them stay empty, or are fitted, at most.');
   return hints;
 }
 
