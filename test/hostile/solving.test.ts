@@ -32,7 +32,7 @@ describe('solving and spread of descriptions with random changes', function () {
       const text = mutateText(all[roll(all.length)], roll);
       try {
         const description = readDescription(text, { expressions: true });
-        const { problem } = buildModel(description, seedFiles, { reopen: roll(3) === 0 });
+        const { problem, diagnostics } = buildModel(description, seedFiles, { reopen: roll(3) === 0 });
         if (!problem) continue;
         const small = { ...problem, spread: { ...problem.spread, builds: 40 } };
         const { solutions, reason } = solveProblem(small, { top: 2 });
@@ -41,7 +41,8 @@ describe('solving and spread of descriptions with random changes', function () {
           answers++;
           assert.ok(!Number.isNaN(solutions[0].marginDb));
           evaluate({ ...small, ladder: solutions[0].ladder, unknowns: [], ladderTask: null });
-          readDescription(applyEdits(text, insertSolution(description.syntax, solutions[0])), { expressions: true });
+          // Nobody inserts into a text with mistakes: a name may stand there twice.
+          if (!diagnostics.some(({ severity }) => severity === 'error')) readDescription(applyEdits(text, insertSolution(description.syntax, solutions[0])), { expressions: true });
         }
         if (spreadObstacle(small) !== null) continue;
         const run = spreadOfBuilds(small);
