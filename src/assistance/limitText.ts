@@ -2,6 +2,7 @@ import { decibels, returnLossDb } from '../network/figures';
 import { printNumber, printQuantity } from '../quantity/printQuantity';
 import { bandLimits, type BandLimit } from '../solve/bandLimits';
 import type { LoadModel } from '../solve/fitLoad';
+import { pointsOfRange } from '../solve/limits';
 import { reflectionLimit } from '../study/discs';
 import type { Goal, GoalResult } from '../study/goal';
 import { placesOf } from '../study/place';
@@ -19,11 +20,11 @@ export const leastNamed = 0.01;
 /**
  * Why a goal on reflection or gain that is missed cannot be met over its frequencies by any lossless ladder: one sentence
  * without a full stop; «probably» where only the error of the load's model decides. Empty where it could be met, or where
- * that is not known. Losses lower the reflection but never raise the gain, hence the two wordings.
+ * that is not known, or where it is judged at too few points to stand for the range between. Losses lower the reflection but never raise the gain, hence the two wordings.
  */
 export function outOfReachNote(problem: Problem, { goal, ok }: Pick<GoalResult, 'goal' | 'ok'>): string {
   if (ok) return '';
-  const worst = limitOfGoal(problem, goal);
+  const worst = limitOfGoal(problem, goal, pointsOfRange);
   const { reflection, certain, model } = worst?.limit ?? {};
   if (!worst || !reflection || !model) return '';
   const taken = model.fitError < asGoodAsItsModel ? '' : `taken as ${modelText(model)} (within |Γ| ${magnitude(model.fitError)})`;
@@ -39,12 +40,13 @@ export function outOfReachNote(problem: Problem, { goal, ok }: Pick<GoalResult, 
   return gainDb !== null && gainDb > most ? `${gainDb > decibels(1 - (certain ?? 0) ** 2) ? '' : 'probably '}out of reach: over ${over} no ladder gets above ${inDb(most)} of gain${where}` : '';
 }
 
-/** The largest limit among the bands or the range that a goal is asked in; null where there is none, as for a single frequency. */
-function limitOfGoal(problem: Problem, goal: Goal): BandLimit | null {
+/** The largest limit among the bands, of so many points at least, or the range that a goal is asked in; null where there is none, as for a single frequency. */
+function limitOfGoal(problem: Problem, goal: Goal, leastPoints: number): BandLimit | null {
   const places = placesOf(goal, problem);
   const cases = goal.caseName === null ? problem.cases : problem.cases.filter(({ name }) => name === goal.caseName);
   if (goal.into !== null || typeof places === 'string' || cases.length === 0) return null;
-  const bands = places.map(({ band, frequencyHz }) => ({ name: band ?? '', frequencyHz, watch: false }));
+  const bands = places.filter(({ frequencyHz }) => frequencyHz.length >= leastPoints)
+    .map(({ band, frequencyHz }) => ({ name: band ?? '', frequencyHz, watch: false }));
   return bandLimits({ bands, cases, tunables: problem.tunables })
     .reduce<BandLimit | null>((most, each) => ((each.limit.reflection ?? 0) > (most?.limit.reflection ?? 0) ? each : most), null);
 }
@@ -71,7 +73,7 @@ export function limitLines(problem: Problem, bandName: string): string[] {
 export function goalLimitLines(problem: Problem, result: Pick<GoalResult, 'goal' | 'ok'>): string[] {
   const { goal, ok } = result;
   const concerned = reflectionLimit(goal) !== null || goal.quantity === 'gain' || goal.quantity === 'insertion loss';
-  const found = ok || !concerned ? null : limitOfGoal(problem, goal);
+  const found = ok || !concerned ? null : limitOfGoal(problem, goal, 1);
   if (!found) return [];
   const note = outOfReachNote(problem, result);
   return [note === '' ? limitLine(found) : `${note.charAt(0).toUpperCase()}${note.slice(1)}.`, ...limitGrounds(found)];
@@ -83,7 +85,7 @@ function limitLine({ limit: { reflection } }: BandLimit): string {
   return `No lossless ladder gets below |Γ| ${magnitude(reflection ?? 0)} (${inDb(returnLossDb(reflection ?? 0))}) over these frequencies (Bode–Fano).`;
 }
 
-function limitGrounds({ caseName, limit: { model, reflection, byReactances } }: BandLimit): string[] {
+function limitGrounds({ caseName, points, limit: { model, reflection, byReactances } }: BandLimit): string[] {
   if (!model || !reflection) return [];
   const enough = byReactances.findIndex((value) => value < leastNamed);
   const few = byReactances.slice(0, enough < 0 ? undefined : enough + 1)
@@ -92,5 +94,6 @@ function limitGrounds({ caseName, limit: { model, reflection, byReactances } }: 
   return [
     `${caseName ?? 'The load'} is taken as ${modelText(model)}; between the two |Γ| is ${mismatch}.`,
     `Equal ripple reaches |Γ| ${few.join(', ')} reactances in all, each made resonant in the band, the load’s own counted.`,
+    ...(points < pointsOfRange ? [`Judged at ${points} points only: a ladder can be better at them and worse between.`] : []),
   ];
 }

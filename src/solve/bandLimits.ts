@@ -7,6 +7,8 @@ import { bodeFanoLimit, type MatchLimit } from './bodeFano';
 export interface BandLimit {
   readonly band: string;
   readonly caseName: string | null;
+  /** The band is judged at so many points; the limit is of the whole range between its ends. */
+  readonly points: number;
   readonly limit: MatchLimit;
 }
 
@@ -21,7 +23,7 @@ export function bandLimits({ bands, cases, tunables }: Pick<Problem, 'bands' | '
   const tuned = tunables.some(({ elements }) => elements.length > 0);
   return bands.map((band) => {
     const limits = cases.map((each): BandLimit => ({
-      band: band.name, caseName: each.name,
+      band: band.name, caseName: each.name, points: band.frequencyHz.length,
       limit: tuned ? unknown('the ladder is tuned anew at each channel, which the limit of one that stays does not cover') : limitOf(each, band),
     }));
     const known = limits.filter(({ limit }) => limit.reflection !== null);

@@ -99,6 +99,21 @@ describe('how good a band could be', () => {
     assert.match(notes[1], /: over this band no lossless/);
   });
 
+  it('does not call out of reach what few points let through', () => {
+    // Found by the search: at the two ends it is above 40 dB, where the range between has no more than 17.4 dB.
+    const values = '  - shunt L1: 4.5438 nH\n  - series L2: 4.0976 nH\n  - shunt C1: 3.0317 pF\n  - series L3: 5.3955 nH\n';
+    const asked = (points: number, parts = ladder) => `load: 50 Ω || 5 pF\nbands:\n  wide: 1 .. 2 GHz, ${points} points\n${parts}goals:\n  - return loss >= 40 dB\n`;
+    assert.deepEqual([2, 5].map((points) => assessed(asked(points, `ladder:\n${values}`)).evaluation?.goals[0].ok), [true, false]);
+    for (const points of [2, 4]) {
+      const problem = problemOf(asked(points));
+      assert.equal(outOfReachNote(problem, { goal: problem.goals[0], ok: false }), '', `${points}`);
+      assert.ok(limitLines(problem, 'wide').includes(`Judged at ${points} points only: a ladder can be better at them and worse between.`));
+    }
+    const problem = problemOf(asked(5));
+    assert.match(outOfReachNote(problem, { goal: problem.goals[0], ok: false }), /^out of reach without loss: /);
+    assert.doesNotMatch(limitLines(problem, 'wide').join('\n'), /points only/);
+  });
+
   it('says probably where only the error of the load’s model decides', () => {
     // Invented: R || C with a little resistance in series. |Γ| 0.1033 by the model, of which 0.0691 is certain.
     const text = (goal: string) => `load: (50 Ω || 5 pF) + 1 Ω\nbands:\n  wide: 1 .. 2 GHz\n${ladder}goals:\n  - ${goal}\n`;
