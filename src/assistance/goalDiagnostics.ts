@@ -4,7 +4,7 @@ import type { Description, Model } from '../description/description';
 import type { GoalSyntax } from '../description/syntax';
 import type { Evaluation } from '../study/evaluation';
 import type { Goal } from '../study/goal';
-import { yieldIsPending } from '../study/judgeYield';
+import { isPending } from '../study/judgeYield';
 import { goalDetail, goalValueText } from './goalText';
 import { outOfReachNote } from './limitText';
 
@@ -31,7 +31,7 @@ export function goalDiagnostics(description: Description, model: Model, evaluati
   for (const result of evaluation?.goals ?? []) {
     const syntax = goalSyntaxOf(description, result.goal);
     // Builds are studied apart from the typing; until their yield is known there is nothing to say.
-    if (result.ok || !syntax || (result.goal.quantity === 'yield' && result.reason === yieldIsPending)) continue;
+    if (result.ok || !syntax || isPending(result)) continue;
     const detail = [goalDetail(result), model.problem ? outOfReachNote(model.problem, result) : ''].filter((text) => text !== '').join('; ');
     found.push({
       code: result.reason !== null && result.value === null ? 'goal-not-known' : 'goal-missed',

@@ -1,5 +1,6 @@
 import { printQuantity } from '../quantity/printQuantity';
 import type { Goal, GoalResult } from '../study/goal';
+import { isPending } from '../study/judgeYield';
 
 /** What a person reads of a goal: the same words in panel, hover, diagnostics and on the command line. */
 
@@ -80,6 +81,10 @@ export function goalBar({ goal, margin, reason, ok }: GoalResult): number | null
 /** `3 of 4 hold`; empty where there are no goals. */
 export function verdictText(results: readonly GoalResult[]): string {
   if (results.length === 0) return '';
-  const held = results.filter((result) => result.ok).length;
-  return held === results.length ? (held === 1 ? 'the goal holds' : `all ${held} hold`) : `${held} of ${results.length} hold`;
+  const judged = results.filter((result) => !isPending(result));
+  const pending = judged.length < results.length ? 'the yield is being worked out' : '';
+  if (judged.length === 0) return pending;
+  const held = judged.filter((result) => result.ok).length;
+  const text = held === judged.length ? (held === 1 ? 'the goal holds' : `all ${held} hold`) : `${held} of ${judged.length} hold`;
+  return pending === '' ? text : `${text}, ${pending}`;
 }

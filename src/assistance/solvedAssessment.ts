@@ -24,9 +24,9 @@ export function shownProblem(problem: Problem | null, solved: SolvedUnknowns | n
 }
 
 /** The same description as it would be with a solution in it: its numbers, not its text. */
-export function solvedAssessment(assessment: Assessment, solution: Pick<Solution, 'ladder'>): Assessment {
+export function solvedAssessment(assessment: Assessment, solution: Pick<Solution, 'ladder' | 'yield'>): Assessment {
   const { problem } = assessment.model;
   if (!problem) return assessment;
   const solved = withLadder(problem, solution.ladder);
-  return { ...assessment, model: { ...assessment.model, problem: solved }, evaluation: evaluate(solved) };
+  return { ...assessment, model: { ...assessment.model, problem: solved }, evaluation: evaluate(solved, solution.yield === null ? {} : { yield: solution.yield }) };
 }

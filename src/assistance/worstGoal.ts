@@ -1,4 +1,5 @@
 import type { GoalResult } from '../study/goal';
+import { isPending } from '../study/judgeYield';
 import { goalBar, goalDetail, goalMarginText, goalTitle, goalValueText } from './goalText';
 
 /**
@@ -8,7 +9,7 @@ import { goalBar, goalDetail, goalMarginText, goalTitle, goalValueText } from '.
 export function worstGoal(results: readonly GoalResult[]): GoalResult | null {
   let worst: GoalResult | null = null;
   let least = Infinity;
-  for (const result of results) {
+  for (const result of results.filter((each) => !isPending(each))) {
     const { goal, ok } = result;
     const isPlain = ok && (goal.comparison === null || goal.quantity === 'parts');
     const rank = (isPlain ? 20 : ok ? 10 : 0) + (goalBar(result) ?? -2);

@@ -1,7 +1,6 @@
 import * as vscode from 'vscode';
 import type { Diagnostic, Severity } from '../base/diagnostic';
 import type { Assessment } from '../assistance/assess';
-import { withSpread } from '../assistance/spreadAssessment';
 import type { DocumentStudies } from './documentStudies';
 import { rangeOf } from './ranges';
 import type { DocumentSpreads } from './spreads';
@@ -28,8 +27,8 @@ export function publishDiagnostics(studies: DocumentStudies, spreads: DocumentSp
     studies.onDidFinish(({ document, assessment }) => publish(document, assessment)),
     // What is said of the yield comes later, and not before all builds have been made.
     spreads.onDidChange((document) => {
-      const studied = spreads.latest(document);
-      if (studied?.done && studied.study.version === document.version) publish(document, withSpread(studied.study.assessment, studied.spread));
+      const study = spreads.latest(document)?.study;
+      if (study?.version === document.version) publish(document, spreads.complete(study).assessment);
     }),
     studies.onDidClose((document) => collection.delete(document.uri)),
   );

@@ -1,5 +1,5 @@
 import * as vscode from 'vscode';
-import type { Spread } from '../assistance/spreadAssessment';
+import { withSpread, type Spread } from '../assistance/spreadAssessment';
 import { startWorker, type WorkerHandle } from '../platform/startWorker';
 import { spreadObstacle } from '../study/spread/spreadOfBuilds';
 import type { CloudTrace } from '../study/spread/toleranceCloud';
@@ -20,6 +20,8 @@ export interface StudiedSpread {
 /** Studies the builds of each open description off the extension host's thread: a first estimate soon, then refined; typing ends it. */
 export interface DocumentSpreads extends vscode.Disposable {
   latest(document: vscode.TextDocument): StudiedSpread | null;
+  /** The study with its goals on yield judged, where all builds of that version have been made; else as it is. */
+  complete(study: Study): Study;
   readonly onDidChange: vscode.Event<vscode.TextDocument>;
 }
 
@@ -111,6 +113,10 @@ export function createDocumentSpreads(extensionUri: vscode.Uri, studies: Documen
   );
   return {
     latest: (document) => found.get(document) ?? null,
+    complete(study) {
+      const studied = found.get(study.document);
+      return studied?.done && studied.study.version === study.version ? { ...study, assessment: withSpread(study.assessment, studied.spread) } : study;
+    },
     onDidChange: changed.event,
     dispose() {
       disposed = true;

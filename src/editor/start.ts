@@ -32,14 +32,14 @@ export function start(context: vscode.ExtensionContext): void {
   const solver = createDocumentSolver(context.extensionUri, studies, log);
   const spreads = createDocumentSpreads(context.extensionUri, studies, log);
   const panels = createPanelHost(context, { extensionUri: context.extensionUri, studies, solver, spreads, edits, highlight, log });
-  const assistance: Assistance = { studies, log };
+  const assistance: Assistance = { studies, spreads, log };
   const register = [
     registerHover, registerInlayHints, registerLinks, registerOutline, registerNames, registerCompletion, registerFixes, registerFormatting,
   ];
   context.subscriptions.push(
     log, store, studies, solver, spreads, highlight, panels,
     publishDiagnostics(studies, spreads),
-    createStatusItem(studies),
+    createStatusItem(studies, spreads),
     registerCommands({ extensionUri: context.extensionUri, studies, solver, panels, edits, log }),
     registerLenses(assistance, solver),
     registerSolutions(assistance, solver),

@@ -4,14 +4,16 @@ import { worstGoal, worstGoalDetail, worstGoalText } from '../assistance/worstGo
 import { unsolvedElements } from '../study/obstacles';
 import type { DocumentStudies, Study } from './documentStudies';
 import { isDescription } from './ranges';
+import type { DocumentSpreads } from './spreads';
 
 /** The worst margin of the active description, in the status bar; a click goes to that goal. */
-export function createStatusItem(studies: DocumentStudies): vscode.Disposable {
+export function createStatusItem(studies: DocumentStudies, spreads: DocumentSpreads): vscode.Disposable {
   const item = vscode.window.createStatusBarItem('ohmward.margin', vscode.StatusBarAlignment.Left, 50);
   item.name = 'Ohmward: worst margin';
   item.command = 'ohmward.revealWorstGoal';
 
-  const paint = (study: Study | null) => {
+  const paint = (bare: Study | null) => {
+    const study = bare && spreads.complete(bare);
     const errors = study?.assessment.diagnostics.filter(({ severity }) => severity === 'error').length ?? 0;
     const goals = study?.assessment.evaluation?.goals ?? [];
     const worst = worstGoal(goals);
@@ -49,6 +51,7 @@ export function createStatusItem(studies: DocumentStudies): vscode.Disposable {
     studies.onDidFinish((study) => {
       if (vscode.window.activeTextEditor?.document === study.document) paint(study);
     }),
+    spreads.onDidChange(follow),
     studies.onDidClose(follow),
   );
 }

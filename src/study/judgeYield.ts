@@ -13,6 +13,9 @@ export interface YieldAnswer {
 /** The reason while the spread of builds has not been studied. */
 export const yieldIsPending = 'needs the spread of builds';
 
+/** True for a goal on yield while its builds have not been studied: neither held nor missed yet. */
+export const isPending = ({ goal, reason }: GoalResult): boolean => goal.quantity === 'yield' && reason === yieldIsPending;
+
 /** A goal on yield, from the share that the spread of builds found; that study is made elsewhere, and takes long. */
 export function judgeYield(goal: Goal, answer: YieldAnswer): GoalResult {
   if (answer.yield == null) return notKnown(goal, answer.yieldReason ?? yieldIsPending);

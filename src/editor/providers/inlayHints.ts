@@ -11,6 +11,9 @@ export function registerInlayHints(assistance: Assistance): vscode.Disposable {
   return vscode.Disposable.from(
     changed,
     assistance.studies.onDidFinish(() => changed.fire()),
+    assistance.spreads.onDidChange((document) => {
+      if (assistance.spreads.latest(document)?.done) changed.fire();
+    }),
     vscode.workspace.onDidChangeConfiguration((event) => {
       if (event.affectsConfiguration('ohmward.inlayHints')) changed.fire();
     }),

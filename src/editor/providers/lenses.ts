@@ -15,6 +15,9 @@ export function registerLenses(assistance: Assistance, solver: DocumentSolver): 
     changed,
     assistance.studies.onDidFinish(() => changed.fire()),
     solver.onDidSolve(() => changed.fire()),
+    assistance.spreads.onDidChange((document) => {
+      if (assistance.spreads.latest(document)?.done) changed.fire();
+    }),
     vscode.languages.registerCodeLensProvider(DESCRIPTIONS, {
       onDidChangeCodeLenses: changed.event,
       provideCodeLenses: (document, token) =>
