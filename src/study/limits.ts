@@ -22,8 +22,12 @@ export const totalReflectionSlack = 1e-12;
 export const codeCombinationsAtMost = 1 << 20;
 /** Margins that are held at once while all codes of several channels are tried. */
 export const heldMarginsAtMost = 1 << 22;
-/** Codes of a channel that are judged as a whole, where a goal needs more than reflection and gain. */
-export const wholeJudgementsAtMost = 5000;
+/** Combinations of codes that are judged as a whole, over all channels, where a goal needs more than reflection and gain … */
+export const wholeJudgementsAtMost = 1 << 16;
+/** … and how many of each channel at least. */
+export const wholeJudgementsAtLeast = 64;
 /** Starts, and rounds from each, of a search that goes one tunable at a time. */
 export const codeSearchStarts = 8;
 export const codeSearchRounds = 50;
+/** Evaluations of one point in a search for the codes of all channels. */
+export const codePointsAtMost = 1 << 26;

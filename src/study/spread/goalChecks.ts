@@ -174,7 +174,8 @@ function lawOf(goal: Goal): Pick<GoalCheck, 'quantity' | 'side' | 'limit'> | nul
   }
 }
 
-function joined(parts: readonly Immittance[]): Immittance {
+/** Several runs of points one after the other; reasons are left behind. */
+export function joined(parts: readonly Immittance[]): Immittance {
   const join = (pick: (z: Immittance) => ComplexArray): ComplexArray => ({
     re: Float64Array.from(parts.flatMap((z) => [...pick(z).re])), im: Float64Array.from(parts.flatMap((z) => [...pick(z).im])),
   });

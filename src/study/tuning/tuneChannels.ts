@@ -1,0 +1,124 @@
+import { casesOf } from '../casesOf';
+import type { Goal, GoalResult } from '../goal';
+import { codeCombinationsAtMost, codePointsAtMost, heldMarginsAtMost, wholeJudgementsAtLeast, wholeJudgementsAtMost } from '../limits';
+import { isCondition } from '../marginDb';
+import { placesOf } from '../place';
+import type { Problem } from '../problem';
+import { sampler, type Sampler } from '../sampler';
+import { ladderAtCodes, type TunableCodes } from '../tunableCodes';
+import { channelProblems, type ChannelProblem } from './channelProblems';
+import { aimedGoals, judgeAtChannel, scoreOf, type ChannelScore } from './channelJudgement';
+import { chooseCodes, marginOfExcess } from './chooseCodes';
+import { codeMeter, type CodeMeter } from './codeMeter';
+import { codeSpace, type CodeSpace } from './codeSpace';
+import { searchCodes } from './searchCodes';
+
+/** One channel with its codes, and everything judged with them. */
+export interface TunedChannel {
+  readonly channel: ChannelProblem;
+  readonly codes: TunableCodes;
+  readonly proved: boolean;
+  /** The ladder at these codes. */
+  readonly samples: Sampler;
+  /** By goal of the channel's problem. */
+  readonly results: readonly GoalResult[];
+  readonly score: ChannelScore;
+  /** The score with one tunable at the state before (−1) or after (1) its own; null where there is none. */
+  stepScore(tunable: string, step: -1 | 1): ChannelScore | null;
+}
+
+/** Every channel with its best codes. Only for a problem with tunables in its ladder, and with a ladder that is known. */
+export function tuneChannels(problem: Problem): readonly TunedChannel[] {
+  const space = codeSpace(problem);
+  const channels = channelProblems(problem);
+  const tuned: TunedChannel[] = [];
+  let previous: Int32Array | null = null;
+  const add = (channel: ChannelProblem, states: Int32Array, proved: boolean): void => {
+    tuned.push(tunedChannel(problem, space, channel, states, proved));
+    previous = states;
+  };
+  if (isExhaustive(problem, space, channels)) {
+    const trials = Math.max(wholeJudgementsAtLeast, Math.floor(wholeJudgementsAtMost / channels.length));
+    const together = Math.max(1, Math.floor(heldMarginsAtMost / space.count));
+    for (let at = 0; at < channels.length; at += together) {
+      const run = channels.slice(at, at + together);
+      const meter = codeMeter(problem, space, run);
+      excessesOfAll(meter, space, run.length).forEach((excesses, c) => {
+        const goals = meter.others[c];
+        const { states, proved } = chooseCodes(excesses, space, previous, goals.length === 0 ? null : {
+          judge: (at) => judged(problem, space, run[c], at, goals), leastMissed: leastMissed(problem, run[c], goals), trials,
+        });
+        add(run[c], states, proved);
+      });
+    }
+    return tuned;
+  }
+  for (const channel of channels) {
+    const meter = codeMeter(problem, space, [channel]);
+    const excess = new Float64Array(1);
+    const score = (states: Int32Array): ChannelScore => {
+      meter.measure(states, excess);
+      const rest = judged(problem, space, channel, states, meter.others[0]);
+      return { missed: rest.missed, marginDb: Math.min(rest.marginDb, marginOfExcess(excess[0])) };
+    };
+    const { states } = searchCodes(score, space, previous, Math.floor(codePointsAtMost / (channels.length * Math.max(1, meter.points))));
+    add(channel, states, false);
+  }
+  return tuned;
+}
+
+function isExhaustive(problem: Problem, space: CodeSpace, channels: readonly ChannelProblem[]): boolean {
+  if (space.count > codeCombinationsAtMost) return false;
+  // At least one point a channel and case: enough to tell whether there would be far too many.
+  return space.count * channels.length * problem.cases.length <= codePointsAtMost;
+}
+
+/** By channel: the excess of each combination. */
+function excessesOfAll(meter: CodeMeter, space: CodeSpace, channels: number): Float64Array[] {
+  const excesses = Array.from({ length: channels }, () => new Float64Array(space.count));
+  const states = new Int32Array(space.tunables.length);
+  const now = new Float64Array(channels);
+  for (let combination = 0; combination < space.count; combination++) {
+    space.statesOf(combination, states);
+    meter.measure(states, now);
+    for (let c = 0; c < channels; c++) excesses[c][combination] = now[c];
+  }
+  return excesses;
+}
+
+const ladderAt = (problem: Problem, space: CodeSpace, states: Int32Array) => ladderAtCodes(problem, space.codesOf(states));
+
+const judged = (problem: Problem, space: CodeSpace, channel: ChannelProblem, states: Int32Array, goals: readonly Goal[]): ChannelScore =>
+  goals.length === 0 ? { missed: 0, marginDb: Infinity } : scoreOf(judgeAtChannel(channel, ladderAt(problem, space, states), goals).results);
+
+/** Conditions that no code can meet, since a load or the source is not known where they are asked. */
+function leastMissed(problem: Problem, channel: ChannelProblem, goals: readonly Goal[]): number {
+  const conditions = goals.filter(isCondition);
+  if (conditions.length === 0) return 0;
+  const samples = sampler(channel.problem, ladderAtCodes(problem));
+  const isBlind = (goal: Goal): boolean => {
+    const places = placesOf(goal, channel.problem);
+    const loads = goal.into ? [goal.into] : casesOf(goal, channel.problem);
+    if (typeof places === 'string' || typeof loads === 'string') return true;
+    return places.some((place) => loads.some((load) => {
+      const { load: seen, source } = samples.trace(place, load);
+      // Of a bandwidth only the middle must be known.
+      return seen.known.every((known) => !known) || source.known.every((known) => !known) || (goal.quantity !== 'bandwidth' && (seen.known.includes(0) || source.known.includes(0)));
+    }));
+  };
+  return conditions.filter(isBlind).length;
+}
+
+function tunedChannel(problem: Problem, space: CodeSpace, channel: ChannelProblem, states: Int32Array, proved: boolean): TunedChannel {
+  const scoreAt = (at: Int32Array): ChannelScore => scoreOf(judgeAtChannel(channel, ladderAt(problem, space, at), aimedGoals(channel)).results);
+  const { samples, results } = judgeAtChannel(channel, ladderAt(problem, space, states), aimedGoals(channel));
+  return {
+    channel, codes: space.codesOf(states), proved, samples, results: results.slice(0, channel.problem.goals.length), score: scoreOf(results),
+    stepScore(tunable, step) {
+      const t = space.tunables.findIndex(({ name }) => name === tunable);
+      const at = states.slice();
+      at[t] += step;
+      return at[t] >= 0 && at[t] < space.tunables[t].states.length ? scoreAt(at) : null;
+    },
+  };
+}
