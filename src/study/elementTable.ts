@@ -14,14 +14,13 @@ import { worstStress } from './worstStress';
 
 /**
  * The ladder as a table, from the load to the source: what each element is, and what is seen just after it in the first
- * case at the middle of the first band; voltage, current and heat are the worst over the judged bands and all cases.
+ * case at the middle of the first band; voltage, current and heat (`stress`) are the worst over the judged bands and all cases.
  */
-export function elementTable(sampler: Sampler): readonly ElementResult[] {
+export function elementTable(sampler: Sampler, stress = worstStress(sampler, stressedBands(sampler.problem).map(placeOfBand))): readonly ElementResult[] {
   const { problem, ladder } = sampler;
   const frequencyHz = firstMiddle(problem);
   const point = Float64Array.of(frequencyHz);
   const firstCase = problem.cases[0];
-  const stress = worstStress(sampler, stressedBands(problem).map(placeOfBand));
   let seen: Immittance = sampleLoad(firstCase, point);
   let reason = seen.known[0] ? null : named(firstCase.name === null ? 'load' : `load ${firstCase.name}`, seen.reason ?? 'not known there');
   return ladder.map((element, at) => {

@@ -10,17 +10,23 @@ import { sampler } from './sampler';
 import { studiedLadder } from './studiedLadder';
 import { traceCase } from './traceCase';
 import type { TunableCodes } from './tunableCodes';
+import { codesObstacle } from './tuning/bestCodes';
+import { evaluateTuned } from './tuning/evaluateTuned';
 
 export interface EvaluateOptions extends YieldAnswer {
-  /** Codes of the tunables by name; each stands at its first state where nothing is said (see `tunableHint`). */
+  /** These codes of the tunables by name, at every frequency, instead of the best ones of each channel; the first state without one. */
   readonly codes?: TunableCodes;
+  /** Traces have the codes of the channel nearest to it; without, of the middle channel. */
+  readonly markerHz?: number | null;
 }
 
 /**
- * What the problem's ladder does: traces over the sweep, the worst of each band, each goal, each element. Never throws on a
- * problem that is well typed; what is not known says so.
+ * What the problem's ladder does: traces over the sweep, the worst of each band, each goal, each element. With tunables goals
+ * and bands are judged once a channel, with its best codes. Never throws on a problem that is well typed; what is not known
+ * says so.
  */
 export function evaluate(problem: Problem, options: EvaluateOptions = {}): Evaluation {
+  if (options.codes === undefined && codesObstacle(problem) === null) return evaluateTuned(problem, options, options.markerHz ?? null);
   const samples = sampler(problem, studiedLadder(problem, options.codes));
   const goals = problem.goals.map((goal) => judgeGoal(goal, samples, options));
   const sweep = sweepPlace(problem);
@@ -31,5 +37,6 @@ export function evaluate(problem: Problem, options: EvaluateOptions = {}): Evalu
     goals,
     elements: problem.ladder.length === 0 ? [] : elementTable(samples),
     ok: goals.every((goal) => goal.ok) && unsolvedElements(problem).length === 0,
+    tuning: null,
   };
 }

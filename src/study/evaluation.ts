@@ -1,6 +1,7 @@
 import type { Complex, ComplexArray } from '../network/complex';
 import type { Orientation } from '../network/element';
 import type { GoalResult } from './goal';
+import type { TunableCodes } from './tunableCodes';
 
 /** What a ladder does, over the sweep, in the bands, against the goals, element by element. SI units. */
 export interface Evaluation {
@@ -12,6 +13,19 @@ export interface Evaluation {
   readonly elements: readonly ElementResult[];
   /** True where every goal holds and nothing is unsolved. */
   readonly ok: boolean;
+  /** The codes that tunable parts were judged with, channel by channel; null where there are none or the codes were given. */
+  readonly tuning: Tuning | null;
+}
+
+export interface Tuning {
+  /** Increasing. */
+  readonly channelsHz: Float64Array;
+  /** By channel. */
+  readonly codes: readonly TunableCodes[];
+  /** True where every combination was looked at. */
+  readonly proved: boolean;
+  /** The channel whose codes the traces and the table of elements have. */
+  readonly shown: number;
 }
 
 /** One load case over the sweep. Points where `known` is 0 hold NaN. */

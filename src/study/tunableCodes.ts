@@ -22,14 +22,3 @@ export function ladderAtCodes(problem: Problem, codes: TunableCodes = new Map())
     return part && element.form === 'branch' ? { ...element, branch: { form: 'part', part } } : element;
   });
 }
-
-/** What to say beside results that stand on one code of each tunable; null where the ladder has no tunables. */
-export function tunableHint(problem: Problem, codes: TunableCodes = new Map()): string | null {
-  const used = problem.tunables.filter((tunable) => tunable.elements.length > 0 && tunable.states.length > 0);
-  if (used.length === 0) return null;
-  const stands = used.map((tunable) => {
-    const code = tunable.states.find((state) => state.code === codes.get(tunable.name))?.code ?? tunable.states[0].code;
-    return `${tunable.name} at code ${code}`;
-  });
-  return `Goals are judged with ${stands.join(', ')} at every frequency, not with the best codes for each channel.`;
-}

@@ -40,6 +40,7 @@ export interface CodeStep {
 /** Why there are no codes to choose: nothing is tuned, or the ladder is not known. */
 export function codesObstacle(problem: Problem): string | null {
   if (usedTunables(problem).length === 0) return 'nothing in the ladder is set by a code';
+  if (!problem.channelsHz?.length) return 'there is no channel';
   return ladderObstacle(studiedLadder(problem));
 }
 
