@@ -14,8 +14,8 @@ export interface Lens {
   readonly action: 'worst goal' | 'insert' | 'solve again' | null;
 }
 
-/** The place of `ladder:` and what is said above it; null without a ladder. `solved`: null while it is being solved. */
-export function ladderLenses({ description, model, evaluation, diagnostics }: Assessment, solved: SolveResult | null): { readonly span: Span; readonly lenses: readonly Lens[] } | null {
+/** The place of `ladder:` and what is said above it; null without a ladder. `solved`: null where there is no answer, `solving` where it may still come. */
+export function ladderLenses({ description, model, evaluation, diagnostics }: Assessment, solved: SolveResult | null, solving: boolean): { readonly span: Span; readonly lenses: readonly Lens[] } | null {
   const { ladder } = description.syntax;
   if (!ladder) return null;
   const { problem } = model;
@@ -24,7 +24,7 @@ export function ladderLenses({ description, model, evaluation, diagnostics }: As
   if (errors > 0) {
     lenses.push({ title: errors === 1 ? '1 error' : `${errors} errors`, tooltip: 'Errors have to be mended before the ladder can be judged.', action: null });
   } else if (problem && unsolvedElements(problem).length > 0) {
-    lenses.push(solveLens(solved));
+    lenses.push(solveLens(solved, solving));
   } else if (problem && evaluation) {
     lenses.push({ title: verdictText(evaluation.goals) || 'no goals', tooltip: 'Go to the goal with the least margin.', action: evaluation.goals.length > 0 ? 'worst goal' : null });
   }
@@ -34,7 +34,8 @@ export function ladderLenses({ description, model, evaluation, diagnostics }: As
   return { span: ladder.keySpan, lenses };
 }
 
-function solveLens(solved: SolveResult | null): Lens {
+function solveLens(solved: SolveResult | null, solving: boolean): Lens {
+  if (solved === null && !solving) return { title: 'the solver stopped', tooltip: 'It had no answer yet; the log says why. It starts anew with the next change of the text.', action: null };
   if (solved === null) return { title: 'solving …', tooltip: 'The values are being worked out.', action: null };
   const [best] = solved.solutions;
   if (!best) return { title: `no solution: ${solved.reason ?? ''}`, tooltip: solved.outOfReach.map(({ form, reason }) => `${form}: ${reason}`).join('\n'), action: null };

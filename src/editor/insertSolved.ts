@@ -1,4 +1,5 @@
 import * as vscode from 'vscode';
+import { improves } from '../assistance/improves';
 import { insertSolution } from '../assistance/insertSolution';
 import { listedSolutions } from '../assistance/candidates';
 import { printNumber } from '../quantity/printQuantity';
@@ -25,7 +26,7 @@ export async function solveAgain(document: vscode.TextDocument, solver: Document
     void vscode.window.showInformationMessage(solved?.result.reason ? `There is no solution: ${solved.result.reason}.` : 'There is nothing to solve again: no value says «from» without being «fixed», or the text has errors.');
     return;
   }
-  if (insertSolution(solved.study.assessment.description.syntax, best).length === 0) {
+  if (insertSolution(solved.study.assessment.description.syntax, best).length === 0 || !improves(solved.problem, best)) {
     void vscode.window.showInformationMessage(best.proved ? 'Nothing that exists is better: the values stay.' : 'Nothing better was found: the values stay.');
     return;
   }

@@ -1,11 +1,13 @@
 import assert from 'node:assert/strict';
 import { assess } from '../../src/assistance/assess';
+import { improves } from '../../src/assistance/improves';
 import { candidatesView, listedSolutions, progressText } from '../../src/assistance/candidates';
 import { ladderLenses } from '../../src/assistance/ladderLenses';
 import { panelView } from '../../src/assistance/panelView';
 import { solutionFixes } from '../../src/assistance/solutionFixes';
 import { shownProblem, solvedAssessment } from '../../src/assistance/solvedAssessment';
 import { applyEdits } from '../../src/base/diagnostic';
+import { buildModel } from '../../src/description/buildModel';
 import { solveProblem } from '../../src/solve/solveProblem';
 
 // Invented: a valve's radio.
@@ -29,7 +31,7 @@ const unsolved = assessed(text);
 assert.ok(unsolved.model.problem);
 const result = solveProblem(unsolved.model.problem);
 const [best] = result.solutions;
-const titles = (from: string, solved: typeof result | null) => ladderLenses(assessed(from), solved)?.lenses.map(({ title, action }) => [title, action]);
+const titles = (from: string, solved: typeof result | null, solving = true) => ladderLenses(assessed(from), solved, solving)?.lenses.map(({ title, action }) => [title, action]);
 
 describe('solving in the editor', () => {
   it('says above the ladder what can be inserted, or why nothing can', () => {
@@ -37,6 +39,7 @@ describe('solving in the editor', () => {
     assert.match(String(title), /^Insert solved values: L1 [\d.]+ nH, C1 [\d.]+ pF \(margin [\d.]+ dB\)$/);
     assert.equal(action, 'insert');
     assert.deepEqual(titles(text, null), [['solving …', null]]);
+    assert.deepEqual(titles(text, null, false), [['the solver stopped', null]]);
     assert.deepEqual(titles(text, { ...result, solutions: [], reason: 'an invented reason' }), [['no solution: an invented reason', null]]);
     assert.match(String(titles(text, { ...result, solutions: [{ ...best, holds: false, marginDb: -2 }] })?.[0][0]), /\(misses a goal, margin −2 dB\)$/);
   });
@@ -47,7 +50,29 @@ describe('solving in the editor', () => {
     assert.deepEqual(titles(inserted, null)?.[1], ['Solve again', 'solve again']);
     assert.equal(titles(inserted.replace('from coils\n', 'from coils fixed\n').replace('from caps\n', 'from caps fixed\n'), null)?.length, 1);
     assert.deepEqual(titles(text.replace('18 - j37', '18-37j'), null)?.[0], ['1 error', null]);
-    assert.equal(ladderLenses(assessed('ohmward: 1\n'), null), null);
+    assert.equal(ladderLenses(assessed('ohmward: 1\n'), null, false), null);
+  });
+
+  it('puts nothing worse in the place of values that are there', () => {
+    const again = (l1: string, c1: string) => {
+      const { problem } = buildModel(assessed(text.replace('solve from coils', `${l1} from coils`).replace('solve from caps or none', `${c1} from caps`)).description, new Map(), { reopen: true });
+      assert.ok(problem);
+      const [found] = solveProblem(problem).solutions;
+      return { problem, found };
+    };
+    const poor = again('8.2 nH', '4.7 pF');
+    assert.equal(improves(poor.problem, poor.found), true);
+    // Between the values of E12 lies a better match than any of them gives.
+    const between = again('11 nH', '4 pF');
+    assert.equal(improves(between.problem, between.found), false);
+    const same = again('12 nH', '3.9 pF');
+    assert.equal(same.found.marginDb, best.marginDb);
+    assert.equal(improves(same.problem, same.found), false);
+    // A condition that is met counts for more than margin.
+    assert.equal(improves(between.problem, { ...between.found, conditionsMissed: 1, marginDb: 99 }), false);
+    assert.equal(improves({ ...between.problem, goals: between.problem.goals.map((goal) => ({ ...goal, quantity: 'yield' })) }, between.found), true);
+    assert.ok(unsolved.model.problem);
+    assert.equal(improves(unsolved.model.problem, { ...best, marginDb: -99 }), true);
   });
 
   it('puts the best and the next best on the light bulb of a solve', () => {

@@ -23,7 +23,7 @@ export function registerLenses(assistance: Assistance, solver: DocumentSolver): 
       provideCodeLenses: (document, token) =>
         guarded(assistance, 'code lenses', document, token, ({ assessment, version }) => {
           const solved = solver.latest(document);
-          const found = ladderLenses(assessment, solved?.study.version === version ? solved.result : null);
+          const found = ladderLenses(assessment, solved?.study.version === version ? solved.result : null, solver.isSolving(document));
           if (!found) return [];
           const range = rangeOf(document, found.span);
           return found.lenses.map(({ title, tooltip, action }) =>

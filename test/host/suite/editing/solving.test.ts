@@ -74,6 +74,14 @@ describe('solving in the editor', () => {
     assert.match(document.getText(), /series L1: 1 nH from coils/);
   });
 
+  it('keeps what is there where solving again finds nothing better', async () => {
+    // Between the values of E12, and better than any of them.
+    const { document } = await openText('orchard/valve.match.yaml', text.replace('solve from coils', '11 nH from coils').replace('solve from caps or none', '4 pF from caps'));
+    const before = document.getText();
+    await run(await lensThat(document, /^Solve again$/));
+    assert.equal(document.getText(), before);
+  });
+
   it('keeps up with somebody who types while a large search goes on', async () => {
     const editor = await openText('orchard/valve.match.yaml', text.replace(/ladder:[^]*?parts:/, 'ladder: solve up to 5 elements from coils, caps\nparts:').replaceAll('E12', 'E24'));
     const at = () => placeOf(editor.document, 'dB\n').end;
