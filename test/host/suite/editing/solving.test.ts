@@ -76,8 +76,9 @@ describe('solving in the editor', () => {
 
   it('keeps what is there where solving again finds nothing better', async () => {
     // Between the values of E12, and better than any of them.
-    const { document } = await openText('orchard/valve.match.yaml', text.replace('solve from coils', '11 nH from coils').replace('solve from caps or none', '4 pF from caps'));
+    const { document } = await openText('orchard/sluice.match.yaml', text.replace('solve from coils', '11 nH from coils').replace('solve from caps or none', '4 pF from caps'));
     const before = document.getText();
+    assert.match(before, /series L1: 11 nH from coils/);
     await run(await lensThat(document, /^Solve again$/));
     assert.equal(document.getText(), before);
   });
