@@ -1,6 +1,7 @@
 import { parseArgs } from 'node:util';
 import { CallError } from './callError';
 import { check } from './check';
+import { codes } from './codes';
 import { report } from './report';
 import { solve } from './solve';
 import { sweep } from './sweep';
@@ -34,6 +35,7 @@ const commands: Readonly<Record<string, Command>> = {
   check: { options: ['format', 'since'], run: check },
   solve: { options: ['format', 'top', 'again', 'write'], run: solve },
   sweep: { options: ['format', 'output', 'case', 'two-port'], run: sweep },
+  codes: { options: ['format', 'write', 'verify'], run: codes },
   report: { options: ['output'], run: report },
   tidy: { options: ['verify'], run: tidyFiles },
 };

@@ -14,6 +14,10 @@ export const usage = `ohmward COMMAND [options] FILE or FOLDER …
             --case NAME              only this load case
             --two-port               the ladder itself as a two-port (touchstone)
             -o, --output PATH        a file, or a folder where there are several
+  codes   the best codes of tunable parts for each channel
+            --format text|json
+            --write                  writes the firmware's tables; never over a file that ohmward did not write
+            --verify                 writes nothing; fails where a table is missing or out of date
   report  one self-contained HTML file with pictures and tables
             -o, --output FILE
   tidy    lays descriptions out
@@ -22,5 +26,5 @@ export const usage = `ohmward COMMAND [options] FILE or FOLDER …
   --help, --version
 
 A folder means every *.match.yaml and *.match.yml under it, except in node_modules, .git and what .gitignore leaves out.
-Exit code: 0 all holds; 1 a goal is missed or a description has errors; 2 the call is wrong or a file in it cannot be read.
+Exit code: 0 all holds; 1 a goal is missed, a description has errors or a table is out of date; 2 the call is wrong or a file in it cannot be read.
 `;

@@ -3,7 +3,7 @@ import { lineMap } from '../base/lineMap';
 import type { Surroundings } from './runCommandLine';
 
 /** Mistakes and warnings as `file:line:column: severity: message`, on standard error. Missed goals have a place of their own. */
-export function writeDiagnostics(shown: string, assessment: Assessment, around: Surroundings): void {
+export function writeDiagnostics(shown: string, assessment: Pick<Assessment, 'description' | 'diagnostics'>, around: Surroundings): void {
   const lines = lineMap(assessment.description.syntax.text);
   for (const { code, severity, message, span } of assessment.diagnostics) {
     if (code === 'goal-missed' || code === 'goal-not-known') continue;

@@ -1,3 +1,4 @@
+import { isNameInC } from '../../base/cWords';
 import { nearestWord } from '../../base/nearestWord';
 import type { Located } from '../../base/span';
 import { buildsAtMost } from '../limits';
@@ -85,8 +86,8 @@ export function readFirmware(entry: TreeEntry, context: SectionContext): Descrip
     const node = expectScalar(each, context);
     if (!node) continue;
     const value = located(node);
-    if (name === 'symbol' && !/^[A-Za-z_][A-Za-z0-9_]{0,62}$/.test(value.value)) {
-      context.report(mistake('bad-symbol', `«${value.value}» cannot be a name in C: letters, digits and _ without a digit first.`, value.span));
+    if (name === 'symbol' && !isNameInC(value.value)) {
+      context.report(mistake('bad-symbol', `«${value.value}» cannot be a name in C: letters, digits and _ without a digit first, and no word of the language.`, value.span));
       continue;
     }
     found[name] = value;

@@ -6,7 +6,7 @@ import { settledReflection } from '../reflectionFigures';
 import { studiedLadder } from '../studiedLadder';
 import type { TunableCodes } from '../tunableCodes';
 import { usedTunables } from './codeSpace';
-import { tuneChannels, type TunedChannel } from './tuneChannels';
+import { tuneChannels, type OnProgress, type TunedChannel } from './tuneChannels';
 
 /** The best codes of one channel, and what they leave. */
 export interface ChannelCodes {
@@ -18,6 +18,8 @@ export interface ChannelCodes {
    * Null, with a reason, where one of these goals is not known.
    */
   readonly marginDb: number | null;
+  /** True where every goal judged at this channel holds. */
+  readonly holds: boolean;
   /** Goals on other things (resistance, stress, bandwidth) that are missed at this channel. */
   readonly conditionsMissed: number;
   /** |Γ| at the channel, worst over the cases, and the least gain in dB (may be −∞); null where a case is not known there. */
@@ -51,17 +53,18 @@ export function codesObstacle(problem: Problem): string | null {
  * `codeCombinationsAtMost` and the work stays below `codePointsAtMost`; past that the codes are good ones, not `proved`.
  * Only where there is no `codesObstacle`.
  */
-export function bestCodes(problem: Problem): readonly ChannelCodes[] {
-  return tuneChannels(problem).map(channelCodes);
+export function bestCodes(problem: Problem, onProgress?: OnProgress): readonly ChannelCodes[] {
+  return tuneChannels(problem, onProgress).map(channelCodes);
 }
 
 export function channelCodes(tuned: TunedChannel): ChannelCodes {
   const { channel: { frequencyHz, problem }, codes, proved, results, score } = tuned;
   const blind = results.find(({ goal, value, reason }) => !isCondition(goal) && value === null && reason !== null);
   const own = worstAt(tuned);
-  const reason = blind?.reason ?? (results.every(({ goal }) => isCondition(goal)) ? own.reason : null);
+  const withoutGoal = results.every(({ goal }) => isCondition(goal));
+  const reason = blind?.reason ?? (withoutGoal ? own.reason : null);
   return {
-    frequencyHz, codes, proved,
+    frequencyHz, codes, proved, holds: reason === null && results.every(({ ok }) => ok),
     marginDb: reason === null ? score.marginDb : null,
     conditionsMissed: score.missed,
     worstReflection: own.reflection, worstGainDb: own.gainDb,

@@ -27,8 +27,14 @@ export interface TunedChannel {
   stepScore(tunable: string, step: -1 | 1): ChannelScore | null;
 }
 
+/** Told now and then how much of the work is done, 0 … 1. */
+export type OnProgress = (share: number) => void;
+
+/** Combinations between two reports. */
+const reportEvery = 4096;
+
 /** Every channel with its best codes. Only for a problem with tunables in its ladder, and with a ladder that is known. */
-export function tuneChannels(problem: Problem): readonly TunedChannel[] {
+export function tuneChannels(problem: Problem, onProgress: OnProgress = () => undefined): readonly TunedChannel[] {
   const space = codeSpace(problem);
   const channels = channelProblems(problem);
   const tuned: TunedChannel[] = [];
@@ -43,7 +49,7 @@ export function tuneChannels(problem: Problem): readonly TunedChannel[] {
     for (let at = 0; at < channels.length; at += together) {
       const run = channels.slice(at, at + together);
       const meter = codeMeter(problem, space, run);
-      excessesOfAll(meter, space, run.length).forEach((excesses, c) => {
+      excessesOfAll(meter, space, run.length, (share) => onProgress((at + share * run.length) / channels.length)).forEach((excesses, c) => {
         const goals = meter.others[c];
         const { states, proved } = chooseCodes(excesses, space, previous, goals.length === 0 ? null : {
           judge: (at) => judged(problem, space, run[c], at, goals), leastMissed: leastMissed(problem, run[c], goals), trials,
@@ -63,6 +69,7 @@ export function tuneChannels(problem: Problem): readonly TunedChannel[] {
     };
     const { states } = searchCodes(score, space, previous, Math.floor(codePointsAtMost / (channels.length * Math.max(1, meter.points))));
     add(channel, states, false);
+    onProgress(tuned.length / channels.length);
   }
   return tuned;
 }
@@ -74,7 +81,7 @@ function isExhaustive(problem: Problem, space: CodeSpace, channels: readonly Cha
 }
 
 /** By channel: the excess of each combination. */
-function excessesOfAll(meter: CodeMeter, space: CodeSpace, channels: number): Float64Array[] {
+function excessesOfAll(meter: CodeMeter, space: CodeSpace, channels: number, onProgress: OnProgress): Float64Array[] {
   const excesses = Array.from({ length: channels }, () => new Float64Array(space.count));
   const states = new Int32Array(space.tunables.length);
   const now = new Float64Array(channels);
@@ -82,6 +89,7 @@ function excessesOfAll(meter: CodeMeter, space: CodeSpace, channels: number): Fl
     space.statesOf(combination, states);
     meter.measure(states, now);
     for (let c = 0; c < channels; c++) excesses[c][combination] = now[c];
+    if (combination % reportEvery === 0) onProgress(combination / space.count);
   }
   return excesses;
 }

@@ -1,0 +1,11 @@
+/** Words that cannot name anything in C99 or C++17 (ISO/IEC 9899:1999, 6.4.1; ISO/IEC 14882:2017, 5.11). From memory. */
+const words = new Set((
+  'auto break case char const continue default do double else enum extern float for goto if inline int long register restrict return short ' +
+  'signed sizeof static struct switch typedef union unsigned void volatile while _Bool _Complex _Imaginary ' +
+  'alignas alignof and and_eq asm bitand bitor bool catch char16_t char32_t class compl constexpr const_cast decltype delete dynamic_cast explicit ' +
+  'export false friend mutable namespace new noexcept not not_eq nullptr operator or or_eq private protected public reinterpret_cast static_assert ' +
+  'static_cast template this thread_local throw true try typeid typename using virtual wchar_t xor xor_eq'
+).split(' '));
+
+/** True for a name that a header for C and C++ may use. */
+export const isNameInC = (name: string): boolean => /^[A-Za-z_][A-Za-z0-9_]{0,62}$/.test(name) && !words.has(name);
