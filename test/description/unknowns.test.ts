@@ -15,7 +15,7 @@ const choicesOf = (entry: string) => problemOf(entry).unknowns[0].choices;
 const valuesOf = (choice: Choice | undefined) => (choice?.form === 'catalogue' ? choice.parts.map((part) => part.value) : []);
 const near = (actual: number, expected: number) => assert.ok(Math.abs(actual / expected - 1) < 1e-9, `${actual} is not ${expected}`);
 
-/** Middle of the first band, by the spec's geometric mean. */
+/** Middle of the first band: its geometric mean. */
 const omega = 2 * Math.PI * Math.sqrt(863e6 * 870e6);
 
 describe('unknown values', () => {
@@ -69,6 +69,23 @@ describe('unknown values', () => {
     const [drawer] = choicesOf('series L1: solve from drawer');
     assert.ok(drawer.form === 'catalogue');
     assert.deepEqual(drawer.parts.map(({ value, loss }) => [value, loss]), [[3.3e-9, { law: 'constant q', q: 40 }]]);
+  });
+
+  it('take of a drawer no row that a description could not name: another of its value, or of its designation, comes first', () => {
+    const rows = 'kind,value,q,part\nC,3.3 pF,10,A1\nC,3.3 pF,20,B2\nC,3.3 pF,30,two words\nC,3.3 pF,40,\nC,3.3 pF,50,A1\nC,4.7 pF,60,B2\nC,4.7 pF,70,B2\nC,6.8 pF,80,"a, b"\n';
+    const entry = (phrase: string) => text([`shunt C1: ${phrase}`]);
+    const loaded = files({ 'stock.csv': csv(rows) });
+    const [choice] = soundProblem(entry('solve from drawer'), loaded).unknowns[0].choices;
+    assert.ok(choice.form === 'catalogue');
+    const q = ({ loss }: (typeof choice.parts)[number]) => (loss.law === 'constant q' ? loss.q : null);
+    assert.deepEqual(choice.parts.map((part, i) => [q(part), choice.labels[i]]), [[10, null], [20, 'B2'], [60, null], [80, null]]);
+    const { parts, labels } = choice;
+    for (const [i, part] of parts.entries()) {
+      const label = labels[i];
+      const [named] = soundProblem(entry(`${part.value * 1e12} pF from drawer${label === null ? '' : ` part ${label}`}`), loaded).ladder;
+      assert.ok(named.form === 'branch' && named.branch.form === 'part');
+      assert.equal(q(named.branch.part), q(part));
+    }
   });
 
   it('may be the length of a line', () => {

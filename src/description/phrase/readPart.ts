@@ -22,6 +22,11 @@ export function readPartPhrase(phrase: Phrase, expects: PartKind | null, context
 
 const anyKind: readonly QuantityKind[] = ['resistance', 'inductance', 'capacitance'];
 
+const partName = /[^\s,|+]+/y;
+
+/** True for a designation that can stand after `part`: one word. */
+export const isPartName = (text: string): boolean => /^[^\s,|+]+$/.test(text);
+
 /** Value and figures at the scanner. The kind is the designator's, else the unit's. */
 export function partAt(s: Scanner, expects: PartKind | null): PartSyntax {
   skipBlanks(s);
@@ -40,7 +45,7 @@ export function partAt(s: Scanner, expects: PartKind | null): PartSyntax {
       else if (from || solve) complain(s, 'from-twice', '«from» is stated twice.', name.span);
       from ??= name;
     } else if (takeWord(s, 'part')) {
-      const found = take(s, /[^\s,|+]+/y);
+      const found = take(s, partName);
       if (found) label = { value: found[0], span: spanOf(s, s.at - found[0].length, s.at) };
       else complain(s, 'part-name-missing', 'After «part» comes its designation in the drawer.', spanOf(s, at, s.at));
     } else if (takeWord(s, 'fixed')) {

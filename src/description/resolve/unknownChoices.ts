@@ -3,10 +3,11 @@ import type { PartKind } from '../../network/part';
 import { isSeriesName, seriesBetween } from '../../quantity/preferredSeries';
 import type { Choice, ValueRange } from '../../study/unknown';
 import { reactanceReach } from '../limits';
+import { isPartName } from '../phrase/readPart';
 import type { FiguresSyntax, RangeSyntax, SolveSyntax } from '../syntax';
 import { findName } from './findName';
 import { makePart, mergeFigures, noFigures } from './makePart';
-import { problemAt, type Resolution, type ResolvedFamily } from './resolution';
+import { problemAt, type Resolution, type ResolvedFamily, type ResolvedMember } from './resolution';
 
 /** What may be put where it says `solve`: `kind` null where an inductor and a capacitor are both possible. */
 export function partChoices(
@@ -41,15 +42,16 @@ export function partChoices(
 
 /**
  * The members of one kind, inside a range where one is stated, as long as there are any left. A value means the first part of
- * that value; the others are to be had by their label, and without one not at all.
+ * that value; the others are to be had by their label, and without one that can be written and is theirs alone, not at all.
  */
 export function familyChoices(family: ResolvedFamily, kind: PartKind, range: ValueRange | null, own: FiguresSyntax = noFigures): Choice[] {
   const slack = 1e-9;
-  const seen = new Set<number>();
-  const members = family.members
-    .filter((member) => member.kind === kind)
-    .map((member) => ({ member, first: !seen.has(member.value) && seen.add(member.value) !== null }))
-    .filter(({ member, first }) => member.count !== 0 && (first || member.label !== null))
+  const ofKind = family.members.filter((member) => member.kind === kind);
+  const firstOfValue = firsts(ofKind, ({ value }) => value);
+  const firstOfLabel = firsts(ofKind, ({ label }) => label);
+  const members = ofKind
+    .map((member) => ({ member, first: firstOfValue.has(member) }))
+    .filter(({ member, first }) => member.count !== 0 && (first || (member.label !== null && isPartName(member.label) && firstOfLabel.has(member))))
     .filter(({ member }) => !range || (member.value >= range.min * (1 - slack) && member.value <= range.max * (1 + slack)));
   if (members.length === 0) return [];
   return [{
@@ -58,6 +60,13 @@ export function familyChoices(family: ResolvedFamily, kind: PartKind, range: Val
     labels: members.map(({ member, first }) => (first ? null : member.label)),
     counts: members.map(({ member }) => member.count),
   }];
+}
+
+/** Of members with the same key, each time the first. */
+function firsts(members: readonly ResolvedMember[], key: (member: ResolvedMember) => unknown): ReadonlySet<ResolvedMember> {
+  const found = new Map<unknown, ResolvedMember>();
+  for (const member of members) if (!found.has(key(member))) found.set(key(member), member);
+  return new Set(found.values());
 }
 
 function reportNothing(name: { value: string; span: { start: number; end: number } }, kind: PartKind | null, family: ResolvedFamily, range: ValueRange | null, { report }: Resolution): void {
