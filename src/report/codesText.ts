@@ -31,10 +31,11 @@ function stepText({ lowerDb, higherDb }: ChannelCodes['steps'][number]): string 
 function verdict(channels: readonly ChannelCodes[]): string {
   const held = channels.filter(({ holds }) => holds).length;
   const count = `${channels.length} channel${channels.length === 1 ? '' : 's'}`;
-  const known = channels.filter(({ marginDb }) => marginDb !== null);
+  const byGain = channels.every((channel) => channel.byGain);
+  const known = channels.filter((channel) => channel.marginDb !== null && channel.byGain === byGain);
   const worst = known.reduce<ChannelCodes | null>((least, each) => (least === null || (each.marginDb ?? 0) < (least.marginDb ?? 0) ? each : least), null);
-  const where = worst === null ? '' : `; least margin ${level(worst.marginDb)} at ${printQuantity(worst.frequencyHz, 'Hz', { digits: 7 })}`;
-  return `${held === channels.length ? `every goal holds at ${count}` : `goals hold at ${held} of ${count}`}${where}`;
+  const where = worst === null ? '' : `; least ${byGain ? 'gain' : 'margin'} ${level(worst.marginDb)} at ${printQuantity(worst.frequencyHz, 'Hz', { digits: 7 })}`;
+  return `${held < channels.length ? `goals hold at ${held} of ${count}` : byGain ? count : `every goal holds at ${count}`}${where}`;
 }
 
 const proofText = (channels: readonly ChannelCodes[]): string =>

@@ -8,12 +8,12 @@ import { isCondition, marginDb } from '../marginDb';
 import type { Problem } from '../problem';
 import { sampler } from '../sampler';
 import { bandwidthHolds } from './bandwidthOnPoints';
-import { checkedPoints, type CheckedPoints, type GoalCheck } from './goalChecks';
+import { excessOf } from './excess';
+import { checkedPoints, type CheckedPoints } from './goalChecks';
 import { pairValue, withPartValue, type ToleratedPart } from './toleratedParts';
 
-/** Measures one ladder again and again with other values of its tolerated parts. */
-export interface MarginMeter {
-  readonly points: CheckedPoints;
+/** Measures a ladder again and again with other values of its tolerated parts. */
+export interface Meter {
   /** Of the last measurement, by goal: 1 where it holds. Yield goals always do. */
   readonly holds: Uint8Array;
   /** Of the last measurement, in dB, over the goals that are ranked; without any, the worst gain in dB. */
@@ -22,6 +22,11 @@ export interface MarginMeter {
   readonly worstCase: string | null;
   /** `values` in the order of the tolerated parts. */
   measure(values: Float64Array): void;
+}
+
+/** The meter of one ladder, with what it saw. */
+export interface MarginMeter extends Meter {
+  readonly points: CheckedPoints;
   /** |Γ|² and gain at each point of `points`, of the last measurement. */
   readonly reflectionSquare: Float64Array;
   readonly gain: Float64Array;
@@ -111,21 +116,4 @@ export function marginMeter(problem: Problem, ladder: readonly Element[], parts:
       }
     },
   };
-}
-
-/** How far a check is from its limit as a ratio of powers: at most 1 where it holds. NaN where something is not known. */
-export function excessOf({ quantity, side, limit, points, reference }: GoalCheck, reflectionSquare: Float64Array, gain: Float64Array): number {
-  let least = Infinity;
-  for (let i = 0; i < reference.length; i++) least = Math.min(least, gain[reference[i]]);
-  let worst = 0;
-  for (let i = 0; i < points.length; i++) {
-    const k = points[i];
-    const over = quantity === 'reflection' ? reflectionSquare[k] / limit : quantity === 'gain' ? gain[k] / limit : (gain[k] * limit) / least;
-    // A rejection of at least so much is a gain of at most so little.
-    const atMost = quantity === 'rejection' ? side === 'at least' : side === 'at most';
-    const excess = atMost ? over : 1 / over;
-    if (Number.isNaN(excess)) return NaN;
-    if (excess > worst) worst = excess;
-  }
-  return worst;
 }

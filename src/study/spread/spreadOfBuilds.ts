@@ -1,7 +1,7 @@
 import type { Problem } from '../problem';
 import { studiedLadder } from '../studiedLadder';
 import { ladderObstacle } from '../obstacles';
-import { marginMeter } from './marginMeter';
+import { meterOf } from './meterOf';
 import { randomBuilds } from './randomBuilds';
 import { toleratedParts } from './toleratedParts';
 import { wilsonInterval } from './wilson';
@@ -38,7 +38,7 @@ export function spreadOfBuilds(problem: Problem, ladder = studiedLadder(problem)
   const parts = toleratedParts(ladder);
   const { builds: wanted, seed } = problem.spread;
   const draw = randomBuilds(parts, problem.spread);
-  const meter = marginMeter(problem, ladder, parts);
+  const meter = meterOf(problem, ladder, parts);
   const values = new Float64Array(parts.length);
   const marginsDb = new Float64Array(wanted);
   const held = new Float64Array(problem.goals.length);

@@ -1,7 +1,7 @@
 import type { PartKind } from '../../network/part';
 import type { Problem } from '../problem';
 import { studiedLadder } from '../studiedLadder';
-import { marginMeter } from './marginMeter';
+import { meterOf } from './meterOf';
 import { toleratedParts, valueAt } from './toleratedParts';
 
 /** The worst of the builds in which every part lies at one end of its tolerance. The worst inside may be worse still. */
@@ -20,7 +20,7 @@ export const exactUpTo = 16;
 /** Only where there is no `spreadObstacle`. Ties go to the first corner, parts at their lower end counting first. */
 export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): WorstCorner {
   const parts = toleratedParts(ladder);
-  const meter = marginMeter(problem, ladder, parts);
+  const meter = meterOf(problem, ladder, parts);
   const ends = parts.map((part) => [valueAt(part, -1), valueAt(part, 1)]);
   const values = new Float64Array(parts.length);
   const at = (corner: Uint8Array): number => {

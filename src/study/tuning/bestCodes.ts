@@ -18,6 +18,8 @@ export interface ChannelCodes {
    * Null, with a reason, where one of these goals is not known.
    */
   readonly marginDb: number | null;
+  /** True where the margin is the gain, since no goal of this channel has a margin in dB. */
+  readonly byGain: boolean;
   /** True where every goal judged at this channel holds. */
   readonly holds: boolean;
   /** Goals on other things (resistance, stress, bandwidth) that are missed at this channel. */
@@ -61,10 +63,10 @@ export function channelCodes(tuned: TunedChannel): ChannelCodes {
   const { channel: { frequencyHz, problem }, codes, proved, results, score } = tuned;
   const blind = results.find(({ goal, value, reason }) => !isCondition(goal) && value === null && reason !== null);
   const own = worstAt(tuned);
-  const withoutGoal = results.every(({ goal }) => isCondition(goal));
-  const reason = blind?.reason ?? (withoutGoal ? own.reason : null);
+  const byGain = results.every(({ goal }) => isCondition(goal));
+  const reason = blind?.reason ?? (byGain ? own.reason : null);
   return {
-    frequencyHz, codes, proved, holds: reason === null && results.every(({ ok }) => ok),
+    frequencyHz, codes, proved, byGain, holds: reason === null && results.every(({ ok }) => ok),
     marginDb: reason === null ? score.marginDb : null,
     conditionsMissed: score.missed,
     worstReflection: own.reflection, worstGainDb: own.gainDb,
