@@ -32,11 +32,11 @@ export function insertSolution(syntax: DescriptionSyntax, solution: Pick<Solutio
     .flatMap((each) => setElementValue(syntax, each.name, solvedValue(each)));
 }
 
-/** True where the text has that value already: solving again leaves it as it is written. */
-function says(syntax: DescriptionSyntax, { name, part, family }: SolvedElement): boolean {
+/** True where the text has that very part already: solving again leaves it as it is written. */
+function says(syntax: DescriptionSyntax, { name, part, family, label }: SolvedElement): boolean {
   const body = syntax.ladder?.elements.find((element) => element.name.value === name)?.body;
   if (body?.form !== 'branch' || body.branch.form !== 'part' || body.branch.value.form !== 'known' || part === null) return false;
-  return Math.abs(body.branch.value.value - part.value) <= 1e-9 * part.value && body.branch.from?.value === family;
+  return Math.abs(body.branch.value.value - part.value) <= 1e-9 * part.value && body.branch.from?.value === family && (body.branch.label?.value ?? null) === label;
 }
 
 const entryOf = (solved: SolvedElement): LadderEntry => ({ key: `${solved.orientation} ${solved.name}`, phrase: solvedValue(solved) });

@@ -53,6 +53,18 @@ function assertSame(read: unknown, found: unknown, text: string): void {
 }
 
 describe('inserted solutions, read again', () => {
+  it('put another part of the same value in the place of one that is reconsidered', () => {
+    const text = `${head}ladder:\n  - series L1: 10 nH from coils fixed\n  - shunt C1: 3.3 pF from drawer   # from a bag\n`;
+    const { syntax } = readDescription(text, { expressions: true });
+    const { problem } = buildModel(readDescription(text, { expressions: true }), stock, { reopen: true });
+    assert.ok(problem);
+    const purer = listedSolutions(solveProblem(problem)).find(({ solved: [{ label }] }) => label === 'TP-33/A');
+    assert.ok(purer);
+    const after = applyEdits(text, insertSolution(syntax, purer));
+    assert.match(after, /shunt C1: 3\.3 pF from drawer part TP-33\/A {3}# from a bag/);
+    assertSame(modelOf(after).ladder, purer.ladder, after);
+  });
+
   for (const ladder of ladders) {
     for (const lineEnd of ['\n', '\r\n']) {
       it(`are the ladder that was found: ${JSON.stringify(ladder.replaceAll('\n', lineEnd))}`, () => {
