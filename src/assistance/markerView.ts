@@ -4,6 +4,8 @@ import { printQuantity } from '../quantity/printQuantity';
 import type { Band, Problem } from '../study/problem';
 import { impedancePath } from '../study/impedancePath';
 import { markerReading, type MarkerReading } from '../study/markerReading';
+import type { TunableCodes } from '../study/tunableCodes';
+import { codesAt } from '../study/tuning/evaluateTuned';
 
 /** Middle of the first band that is not watched: where the marker stands until someone moves it. */
 export function defaultMarkerHz(problem: Problem): number | null {
@@ -11,19 +13,20 @@ export function defaultMarkerHz(problem: Problem): number | null {
   return band ? Math.sqrt(band.frequencyHz[0] * band.frequencyHz[band.frequencyHz.length - 1]) : null;
 }
 
-/** Everything at one frequency, each case with its way over the chart. Null where the frequency makes no sense. */
+/** Everything at one frequency, each case with its way over the chart, tunables at the codes of that channel. Null where the frequency makes no sense. */
 export function markerView(problem: Problem, frequencyHz: number): MarkerView | null {
   if (!(frequencyHz > 0) || !Number.isFinite(frequencyHz)) return null;
-  const readings = markerReading(problem, frequencyHz);
+  const codes = codesAt(problem, frequencyHz);
+  const readings = markerReading(problem, frequencyHz, codes);
   return {
     frequencyHz,
     text: printQuantity(frequencyHz, 'Hz', { digits: 6 }),
-    cases: readings.map((reading, at) => caseView(problem, reading, at, frequencyHz)),
+    cases: readings.map((reading, at) => caseView(problem, reading, at, frequencyHz, codes)),
   };
 }
 
-function caseView(problem: Problem, reading: MarkerReading, at: number, frequencyHz: number): MarkerCaseView {
-  const path = impedancePath(problem, at, frequencyHz);
+function caseView(problem: Problem, reading: MarkerReading, at: number, frequencyHz: number, codes: TunableCodes | undefined): MarkerCaseView {
+  const path = impedancePath(problem, at, frequencyHz, codes);
   return {
     caseName: reading.caseName ?? 'load',
     text: markerText(reading),

@@ -2,6 +2,7 @@ import { lineMap } from '../base/lineMap';
 import type { CandidatesView, GoalView, PanelView, ProblemView, SpreadView } from '../messages/panel';
 import type { GoalResult } from '../study/goal';
 import type { Problem } from '../study/problem';
+import { showChannelAt } from '../study/tuning/evaluateTuned';
 import type { Assessment } from './assess';
 import { unsolvedElements } from '../study/obstacles';
 import { candidatesView } from './candidates';
@@ -41,11 +42,12 @@ export function panelView(bare: Assessment, context: PanelContext): PanelView | 
   const given = studied && !studied.stale ? withSpread(bare, studied.spread) : bare;
   const unsolved = given.model.problem !== null && unsolvedElements(given.model.problem).length > 0;
   const best = shownSolution(given.model.problem, context.solved ?? null);
-  const assessment = best ? solvedAssessment(given, best) : given;
-  const { description, model, evaluation } = assessment;
-  const { problem } = model;
-  if (!problem || !evaluation) return null;
+  const found = best ? solvedAssessment(given, best) : given;
+  const { description, model: { problem } } = found;
+  if (!problem || !found.evaluation) return null;
   const markerHz = context.markerHz ?? defaultMarkerHz(problem);
+  const evaluation = markerHz === null ? found.evaluation : showChannelAt(problem, found.evaluation, markerHz);
+  const assessment = { ...found, evaluation };
   return {
     title: problem.title ?? description.syntax.title?.value ?? context.fileName,
     fileName: context.fileName,

@@ -79,7 +79,7 @@ function outputsOf({ file, problem, evaluation }: Swept, stem: string, format: '
   if (format === 'csv') return [{ name: `${stem}.csv`, text: sweepCsv(evaluation) }];
   const title = problem.title ?? stem;
   if (twoPort) {
-    const network = networkOfAbcd(cascade(studiedLadder(problem), problem.sweepHz), problem.z0Ohm, problem.z0Ohm);
+    const network = networkOfAbcd(cascade(studiedLadder(problem, evaluation.tuning?.codes[evaluation.tuning.shown]), problem.sweepHz), problem.z0Ohm, problem.z0Ohm);
     if (!network) throw new CallError(`${file.shown}: the ladder is not known at any point of the sweep`);
     return [{ name: `${stem}.s2p`, text: writeTouchstone(network, { comments: [title, 'The ladder: port 1 at the source, port 2 at the load'] }) }];
   }

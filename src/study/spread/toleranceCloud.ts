@@ -3,7 +3,7 @@ import type { Impedance } from '../../network/impedance';
 import type { Problem } from '../problem';
 import { placeOfBand, sweepPlace } from '../place';
 import { sampler } from '../sampler';
-import { studiedLadder } from '../studiedLadder';
+import { middleLadder } from '../tuning/middleLadder';
 import { traceCase } from '../traceCase';
 import { randomBuilds } from './randomBuilds';
 import { pairValue, toleratedParts, withPartValue } from './toleratedParts';
@@ -18,7 +18,7 @@ const builds = 24;
 const pointsAtMost = 61;
 
 /** The traces of the first few random builds, for a cloud behind the chart's own: over the sweep, in the first case, against z0. */
-export function toleranceCloud(problem: Problem, ladder = studiedLadder(problem)): CloudTrace[] {
+export function toleranceCloud(problem: Problem, ladder = middleLadder(problem)): CloudTrace[] {
   const parts = toleratedParts(ladder);
   const draw = randomBuilds(parts, problem.spread);
   const values = new Float64Array(parts.length);

@@ -11,6 +11,7 @@ import { traceCase } from '../traceCase';
 import { ladderAtCodes, type TunableCodes } from '../tunableCodes';
 import { notKnown } from '../verdict';
 import { worstStress } from '../worstStress';
+import { codesObstacle } from './bestCodes';
 import { isJudgedOnce, nearestChannel } from './channelProblems';
 import { mergeBands } from './mergeBands';
 import { mergeStress } from './mergeStress';
@@ -84,7 +85,8 @@ export function showChannelAt(problem: Problem, evaluation: Evaluation, frequenc
   };
 }
 
-/** The codes that stand at a frequency; none where nothing is tuned. */
-export function codesAt({ tuning }: Pick<Evaluation, 'tuning'>, frequencyHz: number): TunableCodes | undefined {
-  return tuning?.codes[nearestChannel(frequencyHz, tuning.channelsHz)];
+/** The codes that stand at a frequency, those of the channel nearest to it; none where nothing is tuned or the ladder is not known. */
+export function codesAt(problem: Problem, frequencyHz: number): TunableCodes | undefined {
+  if (!problem.channelsHz || codesObstacle(problem) !== null) return undefined;
+  return tuneChannels(problem)[nearestChannel(frequencyHz, problem.channelsHz)].codes;
 }

@@ -33,8 +33,19 @@ export type OnProgress = (share: number) => void;
 /** Combinations between two reports. */
 const reportEvery = 4096;
 
-/** Every channel with its best codes. Only for a problem with tunables in its ladder, and with a ladder that is known. */
+const known = new WeakMap<Problem, readonly TunedChannel[]>();
+
+/**
+ * Every channel with its best codes. Only for a problem with tunables in its ladder, and with a ladder that is known. Worked out
+ * once for each problem: what is shown beside its evaluation, at a marker for example, has the same codes.
+ */
 export function tuneChannels(problem: Problem, onProgress: OnProgress = () => undefined): readonly TunedChannel[] {
+  const tuned = known.get(problem) ?? search(problem, onProgress);
+  known.set(problem, tuned);
+  return tuned;
+}
+
+function search(problem: Problem, onProgress: OnProgress): readonly TunedChannel[] {
   const space = codeSpace(problem);
   const channels = channelProblems(problem);
   const tuned: TunedChannel[] = [];
