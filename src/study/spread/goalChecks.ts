@@ -160,7 +160,8 @@ function referenceRun(goal: Goal, problem: Problem, at: number, runOf: (place: P
   return run ? indices(run) : null;
 }
 
-function lawOf(goal: Goal): Pick<GoalCheck, 'quantity' | 'side' | 'limit'> | null {
+/** What a goal asks of |Γ|² or of gain at a point; null where something else decides. */
+export function lawOf(goal: Goal): Pick<GoalCheck, 'quantity' | 'side' | 'limit'> | null {
   const large = wantsLarge(goal);
   const limit = goal.limit ?? 0;
   switch (goal.quantity) {

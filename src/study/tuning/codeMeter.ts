@@ -1,12 +1,10 @@
-import type { Element } from '../../network/element';
-import { ladderKernel } from '../../network/ladderKernel';
 import type { Goal } from '../goal';
-import type { Problem, Tunable } from '../problem';
+import type { Problem } from '../problem';
 import { excessOf } from '../spread/excess';
 import { checkedPoints, joined, type CheckedPoints, type GoalCheck } from '../spread/goalChecks';
-import { ladderAtCodes } from '../tunableCodes';
 import { aimedGoals } from './channelJudgement';
 import type { ChannelProblem } from './channelProblems';
+import { codeKernel } from './codeKernel';
 import type { CodeSpace } from './codeSpace';
 
 /** Measures one combination of codes after the other, at several channels in one go. */
@@ -25,9 +23,7 @@ export interface CodeMeter {
 export function codeMeter(problem: Problem, space: CodeSpace, channels: readonly ChannelProblem[]): CodeMeter {
   const own = channels.map((channel) => channelChecks(channel));
   const frequencyHz = Float64Array.from(own.flatMap(({ checked }) => [...checked.frequencyHz]));
-  const kernel = ladderKernel(ladderAtCodes(problem), frequencyHz, joined(own.map(({ checked }) => checked.source)), joined(own.map(({ checked }) => checked.load)));
-  const knobs = space.tunables.map((tunable) => knobOf(problem, tunable));
-  const current = new Int32Array(knobs.length).fill(-1);
+  const kernel = codeKernel(problem, space, frequencyHz, joined(own.map(({ checked }) => checked.source)), joined(own.map(({ checked }) => checked.load)));
   const { reflectionMagnitude, gain } = kernel;
   const reflectionSquare = new Float64Array(frequencyHz.length);
   let start = 0;
@@ -41,15 +37,7 @@ export function codeMeter(problem: Problem, space: CodeSpace, channels: readonly
     others: own.map(({ others }) => others),
     points: frequencyHz.length,
     measure(states, into) {
-      knobs.forEach(({ elementIndices, elements, sameLaw, tunable }, t) => {
-        if (current[t] === states[t]) return;
-        current[t] = states[t];
-        elementIndices.forEach((index, i) => {
-          if (sameLaw) kernel.setValue(index, tunable.states[states[t]].part.value);
-          else kernel.setElement(index, elements[states[t]][i]);
-        });
-      });
-      kernel.evaluate();
+      kernel.evaluate(states);
       for (let c = 0; c < views.length; c++) {
         const { from, to, reflectionWeight, gainFloor, rest, reflections, gains } = views[c];
         let worst = 0;
@@ -58,9 +46,10 @@ export function codeMeter(problem: Problem, space: CodeSpace, channels: readonly
           reflectionSquare[k] = square;
           const byReflection = square * reflectionWeight[k - from];
           if (!(byReflection <= worst)) worst = orInfinite(byReflection);
-          const byGain = gainFloor[k - from] / gain[k];
-          // No gain where none is asked for is 0/0, and is no matter.
-          if (!(byGain <= worst) && gainFloor[k - from] > 0) worst = orInfinite(byGain);
+          if (gainFloor[k - from] === 0) continue;
+          // A load that gives power back has a gain below 0, which meets nothing.
+          const byGain = gain[k] > 0 ? gainFloor[k - from] / gain[k] : Infinity;
+          if (byGain > worst) worst = byGain;
         }
         for (const check of rest) {
           const excess = excessOf(check, reflections, gains);
@@ -99,24 +88,4 @@ function plainAndRest({ checks, frequencyHz }: CheckedPoints): { readonly reflec
     return true;
   });
   return { reflectionWeight, gainFloor, rest };
-}
-
-interface Knob {
-  readonly tunable: Tunable;
-  readonly elementIndices: readonly number[];
-  /** By state: the elements as they then are. */
-  readonly elements: readonly (readonly Element[])[];
-  /** True where states differ in nothing but their value. */
-  readonly sameLaw: boolean;
-}
-
-function knobOf(problem: Problem, tunable: Tunable): Knob {
-  const elementIndices = problem.ladder.flatMap((element, index) => (tunable.elements.includes(element.name) && element.form === 'branch' ? [index] : []));
-  const elements = tunable.states.map(({ code }) => {
-    const ladder = ladderAtCodes(problem, new Map([[tunable.name, code]]));
-    return elementIndices.map((index) => ladder[index]);
-  });
-  const law = ({ part: { loss, eslH, srfHz } }: Tunable['states'][number]): string => JSON.stringify([loss, eslH, srfHz]);
-  const sameLaw = tunable.states.every((state) => state.part.measured === null && law(state) === law(tunable.states[0]));
-  return { tunable, elementIndices, elements, sameLaw };
 }
