@@ -104,7 +104,9 @@ const ladder: Chapter = {
     '`pair 5.6 nH` is two equal parts, one in each leg of a balanced path. `not fitted` is an empty place across the path, `0 Ω` a '
     + 'bridge in series.',
     yaml('ladder:', '  - series L1: pair 5.6 nH', '  - shunt C1: not fitted', '  - series R1: 0 Ω'),
-    'Parts that firmware sets have a code. Goals are then judged once a channel with the best codes of that channel.',
+    'Parts that firmware sets have a code. Goals are then judged once a channel with the best codes of that channel: a goal on a band at '
+    + 'the channels in it. A band, range or frequency that holds no channel is judged at its own points, with the codes of the nearest '
+    + 'channel between the first and the last one, with those of every channel outside of them.',
     yaml(
       'tunables:', '  antcap: capacitor 5 bits 0.9 pF .. 4.6 pF Q 60 @ 900 MHz', '  bank: {0b00: 1.1 pF, 0b01: 2.3 pF, 0b10: 3.4 pF, 0b11: 4.7 pF}', 'ladder:', '  - shunt C3: tunable antcap', '  - series C4: tunable bank',
       'channels: 863.1 MHz .. 869.9 MHz step 200 kHz',

@@ -161,7 +161,7 @@ describe('command line', () => {
         cpSync('crate-reader/loop.s1p', `${place}/loop.s1p`);
       }
       const { out } = await run('check', '--format', 'json', '.');
-      assert.deepEqual(JSON.parse(out).files.map((file: { path: string }) => file.path), ['crate-reader/loop.match.yaml', 'deep/er/loop.match.yaml', 'orchard/frost.match.yaml']);
+      assert.deepEqual(JSON.parse(out).files.map((file: { path: string }) => file.path), ['crate-reader/loop.match.yaml', 'deep/er/loop.match.yaml', 'gate-reader/gate.match.yaml', 'orchard/frost.match.yaml']);
     });
   });
 

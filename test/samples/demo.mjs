@@ -17,6 +17,7 @@ function ohmward(...words) {
 ohmward('check', 'media/samples');
 ohmward('sweep', sample, '--case', 'wet bark');
 ohmward('sweep', sample, '--format', 'touchstone', '-o', 'out/demo/');
+ohmward('codes', '--verify', 'media/samples');
 ohmward('report', 'media/samples', '-o', 'out/demo/report.html');
 console.log(`
 Open out/demo/report.html in a browser.
