@@ -1,7 +1,7 @@
 import * as vscode from 'vscode';
 import type { FileReference, LoadedFile } from '../description/files';
 import { readReference, resolveFile, type FileScope } from './fileAccess';
-import { MAX_WATCHED_FOLDERS } from './limits';
+import { MAX_WATCHED_FOLDERS, SETTLING_LOOKS_MS } from './limits';
 import type { Log } from './log';
 
 /**
@@ -43,8 +43,9 @@ export function createFileStore(log: Log): FileStore {
   const loading = new Map<string, Promise<LoadedFile>>();
   const watchers = new Map<string, vscode.Disposable>();
   const changed = new vscode.EventEmitter<void>();
-  /** Counts what was invalidated, so that a reading that began before is not kept. */
+  /** Counts what was invalidated, so that a reading that began before is neither kept nor waited for. */
   let generation = 0;
+  const settling = new Set<NodeJS.Timeout>();
 
   /** Drops what a change at `uri` may concern: the file itself, and patterns of the folder that it is in. */
   const invalidate = (uri: vscode.Uri) => {
@@ -69,6 +70,27 @@ export function createFileStore(log: Log): FileStore {
     }
     const watcher = vscode.workspace.createFileSystemWatcher(new vscode.RelativePattern(folder, '*'));
     watchers.set(key, vscode.Disposable.from(watcher, watcher.onDidCreate(invalidate), watcher.onDidChange(invalidate), watcher.onDidDelete(invalidate)));
+    // A watcher does not say when it has begun to watch, and a folder that was just made may be missed by the one above it.
+    for (const delayMs of SETTLING_LOOKS_MS) {
+      const timer = setTimeout(() => {
+        settling.delete(timer);
+        void revalidate();
+      }, delayMs);
+      settling.add(timer);
+    }
+  };
+
+  const revalidate = async () => {
+    try {
+      const looked = await Promise.all(
+        [...entries].map(async ([key, entry]) => ({ key, entry, stamp: await stampOf(entry.isPattern ? vscode.Uri.joinPath(entry.uri, '..') : entry.uri) })),
+      );
+      const outdated = looked.filter(({ key, entry, stamp }) => entries.get(key) === entry && stamp !== entry.stamp);
+      for (const { key } of outdated) entries.delete(key);
+      if (outdated.length > 0) changed.fire();
+    } catch (error) {
+      log.failure('looking for changed files', error);
+    }
   };
 
   const read = async (scope: FileScope, reference: FileReference, uri: vscode.Uri, key: string): Promise<LoadedFile> => {
@@ -95,31 +117,23 @@ export function createFileStore(log: Log): FileStore {
       const key = keyOf(scope, resolved.uri, reference.kind);
       const known = entries.get(key);
       if (known) return Promise.resolve(known.file);
-      let promise = loading.get(key);
+      const reading = `${generation} ${key}`;
+      let promise = loading.get(reading);
       if (!promise) {
-        promise = read(scope, reference, resolved.uri, key).finally(() => loading.delete(key));
-        loading.set(key, promise);
+        promise = read(scope, reference, resolved.uri, key).finally(() => loading.delete(reading));
+        loading.set(reading, promise);
       }
       return promise;
     },
-    async revalidate() {
-      try {
-        const looked = await Promise.all(
-          [...entries].map(async ([key, entry]) => ({ key, entry, stamp: await stampOf(entry.isPattern ? vscode.Uri.joinPath(entry.uri, '..') : entry.uri) })),
-        );
-        const outdated = looked.filter(({ key, entry, stamp }) => entries.get(key) === entry && stamp !== entry.stamp);
-        for (const { key } of outdated) entries.delete(key);
-        if (outdated.length > 0) changed.fire();
-      } catch (error) {
-        log.failure('looking for changed files', error);
-      }
-    },
+    revalidate,
     forget() {
       generation++;
       entries.clear();
     },
     onDidChange: changed.event,
     dispose() {
+      for (const timer of settling) clearTimeout(timer);
+      settling.clear();
       for (const watcher of watchers.values()) watcher.dispose();
       watchers.clear();
       entries.clear();

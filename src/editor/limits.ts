@@ -16,6 +16,9 @@ export const MAX_FILES = 4_000;
 /** Folders that are watched at the same time. */
 export const MAX_WATCHED_FOLDERS = 64;
 
+/** When to look, after a folder began to be watched, whether something changed before the watcher was awake. */
+export const SETTLING_LOOKS_MS = [500, 2_000, 6_000];
+
 /** Where one evaluation takes longer than this, the next one waits as long as the last took, so that typing stays smooth. */
 export const SMOOTH_STUDY_MS = 30;
 
