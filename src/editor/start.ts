@@ -21,6 +21,7 @@ import { registerSolutions } from './providers/solutions';
 import { createDocumentSpreads } from './spreads';
 import { createDocumentSolver } from './solver';
 import { createStatusItem } from './statusItem';
+import { registerTasks } from './tasks';
 
 /** Starts the extension; the same in both extension hosts, with Node and without. */
 export function start(context: vscode.ExtensionContext): void {
@@ -43,6 +44,7 @@ export function start(context: vscode.ExtensionContext): void {
     registerCommands({ extensionUri: context.extensionUri, studies, solver, panels, edits, log }),
     registerLenses(assistance, solver),
     registerSolutions(assistance, solver),
+    registerTasks(context.extensionUri),
     ...register.map((feature) => feature(assistance)),
   );
 }
