@@ -18,6 +18,7 @@ import { registerNames } from './providers/names';
 import { registerOutline } from './providers/outline';
 import { registerLenses } from './providers/lenses';
 import { registerSolutions } from './providers/solutions';
+import { registerSamples } from './samples';
 import { createDocumentSpreads } from './spreads';
 import { createDocumentSolver } from './solver';
 import { createStatusItem } from './statusItem';
@@ -45,6 +46,7 @@ export function start(context: vscode.ExtensionContext): void {
     registerLenses(assistance, solver),
     registerSolutions(assistance, solver),
     registerTasks(context.extensionUri),
+    registerSamples(context.extensionUri, log),
     ...register.map((feature) => feature(assistance)),
   );
 }
