@@ -20,7 +20,7 @@ const allowed: Readonly<Record<string, readonly string[]>> = {
   'src/report': ['src/base', 'src/quantity', 'src/network', 'src/description', 'src/study', 'src/solve', 'src/assistance', 'src/picture', 'src/messages'],
   'src/worker': ['src/base', 'src/platform', 'src/network', 'src/study', 'src/solve', 'src/messages', 'src/description', 'src/assistance', 'src/report'],
   'src/platform': ['src/base', 'src/description', 'src/network'],
-  'src/editor': ['src/base', 'src/quantity', 'src/network', 'src/description', 'src/study', 'src/solve', 'src/assistance', 'src/messages', 'src/platform', 'src/worker'],
+  'src/editor': ['src/base', 'src/quantity', 'src/network', 'src/description', 'src/study', 'src/solve', 'src/assistance', 'src/report', 'src/messages', 'src/platform', 'src/worker'],
   'src/cli': ['src/base', 'src/quantity', 'src/network', 'src/description', 'src/study', 'src/solve', 'src/assistance', 'src/report', 'src/platform', 'src/messages', 'src/worker'],
   webview: ['src/messages', 'src/picture'],
 };

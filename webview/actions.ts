@@ -9,7 +9,9 @@ export interface Actions {
   /** Null: no candidate any more. */
   previewCandidate(candidate: number | null): void;
   insertCandidate(candidate: number): void;
-  copy(what: 'chart svg' | 'ladder csv' | 'ladder markdown', text: string): void;
+  writeFirmware(): void;
+  saveReport(): void;
+  copy(what: 'chart svg' | 'ladder csv' | 'ladder markdown' | 'codes csv', text: string): void;
   save(what: 'chart svg' | 'chart png', base64: string): void;
   pin(pinned: boolean): void;
 }

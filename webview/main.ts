@@ -3,6 +3,7 @@ import type { PanelView, TraceView } from '../src/messages/panel';
 import type { Actions } from './actions';
 import { candidatesSection } from './candidatesSection';
 import { chartSection } from './chartSection';
+import { codesSection } from './codesSection';
 import { plainControls, toolkitControls } from './controls';
 import { element, setText } from './dom';
 import { exportSection } from './exportSection';
@@ -45,6 +46,8 @@ const actions: Actions = {
     else host.send({ type: 'preview candidate', document: send.document(), version: viewVersion, request: ++previewRequest, candidate });
   },
   insertCandidate: (candidate) => host.send({ type: 'insert candidate', document: send.document(), version: viewVersion, candidate }),
+  writeFirmware: () => host.send({ type: 'write firmware', document: send.document(), version: viewVersion }),
+  saveReport: () => host.send({ type: 'save report', document: send.document() }),
   copy: (what, text) => host.send({ type: 'copy', document: send.document(), what, text }),
   save: (what, base64) => host.send({ type: 'save', document: send.document(), what, base64 }),
   pin: (pinned) => host.send({ type: 'pin', document: send.document(), pinned }),
@@ -60,12 +63,13 @@ const chart = chartSection(controls, actions);
 const plots = plotsSection(actions);
 const ladder = ladderSection(controls, actions);
 const candidates = candidatesSection(controls, actions);
+const codes = codesSection(controls, actions);
 const spread = spreadSection();
 const exports = exportSection(controls, actions);
 const nothing = element('p', { class: 'nothing' });
 const content = element('div', { class: 'content' },
   header.root, problems.root,
-  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, candidates.root, spread.root, exports.root)));
+  element('div', { class: 'columns' }, element('div', { class: 'column' }, verdict.root, chart.root), element('div', { class: 'column' }, plots.root, ladder.root, candidates.root, codes.root, spread.root, exports.root)));
 const pictures = content.querySelector<HTMLElement>('.columns')!;
 content.hidden = true;
 setText(nothing, 'Waiting for the first picture …');
@@ -100,6 +104,7 @@ function draw(): void {
     chart.update(view);
     plots.update(view);
     candidates.update(view);
+    codes.update(view);
     spread.update(view);
     ladder.update(view);
     exports.update(view);

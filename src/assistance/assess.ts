@@ -26,8 +26,9 @@ export function assess(text: string, files: LoadedFiles, options: ReadOptions): 
   return assessDescription(readDescription(text, options), files);
 }
 
-export function assessDescription(description: Description, files: LoadedFiles): Assessment {
-  const model = buildModel(description, files);
+export const assessDescription = (description: Description, files: LoadedFiles): Assessment => assessModel(description, buildModel(description, files));
+
+export function assessModel(description: Description, model: Model): Assessment {
   const evaluation = model.problem && evaluate(model.problem);
   const diagnostics = [...model.diagnostics, ...ratingWarnings(description, model, evaluation), ...goalDiagnostics(description, model, evaluation)];
   diagnostics.sort((a, b) => a.span.start - b.span.start);

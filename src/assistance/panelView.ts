@@ -7,6 +7,7 @@ import type { Assessment } from './assess';
 import { unsolvedElements } from '../study/obstacles';
 import { candidatesView } from './candidates';
 import { cautions } from './cautions';
+import { codesView, type CodesContext } from './codesView';
 import { goalBar, goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
 import { ladderRows } from './ladderRows';
 import { defaultMarkerHz, markerView } from './markerView';
@@ -28,6 +29,8 @@ export interface PanelContext {
   readonly solving?: boolean;
   /** What builds do, where that is known beside the assessment; `stale` where the text has changed since. */
   readonly spread?: { readonly spread: Spread; readonly stale: boolean; readonly cloud: SpreadView['cloud'] } | null;
+  /** What is known of codes beside the evaluation. */
+  readonly codes?: CodesContext;
 }
 
 /** False where mistakes leave not one point of any trace: a last good picture then says more than an empty chart. */
@@ -68,6 +71,7 @@ export function panelView(bare: Assessment, context: PanelContext): PanelView | 
     notInserted: best !== null,
     candidates: unsolved ? candidatesOf(given, context) : null,
     spread: studied && !unsolved ? spreadView(studied.spread, problem, studied) : null,
+    codes: codesView(problem, evaluation, context.codes ?? { coverage: null, firmware: [] }),
   };
 }
 

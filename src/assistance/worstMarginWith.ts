@@ -4,6 +4,7 @@ import { evaluate } from '../study/evaluate';
 import type { GoalResult } from '../study/goal';
 import { isCondition, marginDb } from '../study/marginDb';
 import type { Problem } from '../study/problem';
+import { tuningPoints } from '../study/tuning/tuneChannels';
 
 /** The least margin in dB over the goals that ladders are ranked by; null where there is none, or one of them is not known. */
 export function worstMarginDb(results: readonly GoalResult[]): number | null {
@@ -12,8 +13,12 @@ export function worstMarginDb(results: readonly GoalResult[]): number | null {
   return known.length === 0 || known.length < margins.length ? null : Math.min(...known);
 }
 
+/** Codes would have to be sought anew for every value: past so many evaluations of one point a hover would take too long. */
+const tuningPointsAtMost = 30_000;
+
 /** The least margin with another part in the place of the one part of an element; null where that cannot be told. */
 export function worstMarginWith(problem: Problem, elementName: string, part: Part): number | null {
+  if (tuningPoints(problem) > tuningPointsAtMost) return null;
   const ladder = problem.ladder.map((element): Element =>
     element.form === 'branch' && element.name === elementName && element.branch.form === 'part'
       ? { ...element, branch: { form: 'part', part } }

@@ -1,4 +1,3 @@
-import { existsSync, readFileSync } from 'node:fs';
 import { dirname, isAbsolute, resolve } from 'node:path';
 import { codesJson, type CodedFile } from '../report/codesJson';
 import { codesText } from '../report/codesText';
@@ -14,6 +13,7 @@ import { CallError } from './callError';
 import { findDescriptions, shownPath } from './findDescriptions';
 import { formatOf } from './formatOf';
 import { loadFiles } from './loadFiles';
+import { presentText } from './presentText';
 import { progressLine } from './progressLine';
 import type { CallOptions, Surroundings } from './runCommandLine';
 import { writeDiagnostics } from './writeDiagnostics';
@@ -73,7 +73,7 @@ function firmwareFiles(files: readonly Coded[], write: boolean, around: Surround
   if (tables.length === 0) around.error('ohmward: no description here says where a firmware table goes\n');
   let good = tables.length > 0;
   for (const { text, target, known } of tables) {
-    const state = firmwareState(text, existsSync(target) ? readFileSync(target, 'utf8') : null);
+    const state = firmwareState(text, presentText(target));
     if (!known) {
       good = false;
     } else if (state === 'foreign') {

@@ -1,4 +1,5 @@
 import { dirname } from 'node:path';
+import { improves } from '../assistance/improves';
 import { insertSolution } from '../assistance/insertSolution';
 import { applyEdits } from '../base/diagnostic';
 import { buildModel } from '../description/buildModel';
@@ -40,7 +41,10 @@ export function solve(paths: readonly string[], options: CallOptions, around: Su
     around.progress?.('');
     const [best] = result.solutions;
     files.push({ path: shown, result, good: faulty ? false : isSettled(problem) ? assessment.evaluation?.ok === true : best?.holds === true });
-    if (options.write === true && best) {
+    // Values that are all there stay where nothing better was found.
+    const stays = best !== undefined && assessment.model.problem !== null && isSettled(assessment.model.problem) && problem !== null && !improves(problem, best);
+    if (options.write === true && stays) around.error(`${shown}: nothing better was found; the values stay\n`);
+    if (options.write === true && best && !stays) {
       if (!isUtf8) throw new CallError(`${shown}: is not UTF-8; save it as UTF-8 first, so that nothing is lost`);
       const written = applyEdits(text, insertSolution(description.syntax, best));
       if (written !== text) {

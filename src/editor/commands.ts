@@ -7,13 +7,17 @@ import type { Log } from './log';
 import type { PanelHost } from './panel/panelHost';
 import type { ValueEdits } from './panel/valueEdits';
 import { insertSolved, solveAgain } from './insertSolved';
+import type { FirmwareTables } from './firmwareTables';
 import { isDescription } from './ranges';
+import type { Reports } from './reports';
 import type { DocumentSolver } from './solver';
 
 interface Services {
   readonly extensionUri: vscode.Uri;
   readonly studies: DocumentStudies;
   readonly solver: DocumentSolver;
+  readonly firmware: FirmwareTables;
+  readonly reports: Reports;
   readonly panels: PanelHost;
   readonly edits: ValueEdits;
   readonly log: Log;
@@ -57,11 +61,11 @@ async function step(edits: ValueEdits, direction: 'up' | 'down'): Promise<void> 
 }
 
 /** The commands of package.json; each failure is logged and told. */
-export function registerCommands({ extensionUri, studies, solver, panels, edits, log }: Services): vscode.Disposable {
-  const command = (name: string, run: (argument: unknown) => unknown) =>
-    vscode.commands.registerCommand(name, async (argument: unknown) => {
+export function registerCommands({ extensionUri, studies, solver, firmware, reports, panels, edits, log }: Services): vscode.Disposable {
+  const command = (name: string, run: (argument: unknown, more: unknown) => unknown) =>
+    vscode.commands.registerCommand(name, async (argument: unknown, more: unknown) => {
       try {
-        await run(argument);
+        await run(argument, more);
       } catch (error) {
         log.failure(name, error);
         void vscode.window.showErrorMessage(`Ohmward: ${error instanceof Error ? error.message : String(error)}`);
@@ -80,6 +84,14 @@ export function registerCommands({ extensionUri, studies, solver, panels, edits,
     command('ohmward.solveAgain', async (argument) => {
       const document = await describedBy(argument);
       if (document) await solveAgain(document, solver);
+    }),
+    command('ohmward.writeFirmware', async (argument) => {
+      const document = await describedBy(argument);
+      if (document) await firmware.write(document);
+    }),
+    command('ohmward.saveReport', async (argument, target) => {
+      const document = await describedBy(argument);
+      if (document) await reports.save(document, target instanceof vscode.Uri ? target : null);
     }),
     command('ohmward.revealWorstGoal', () => revealWorstGoal(studies)),
     command('ohmward.openReference', () => vscode.commands.executeCommand('markdown.showPreview', vscode.Uri.joinPath(extensionUri, 'media', 'language-reference.md'))),

@@ -11,7 +11,8 @@ const SEVERITIES: Readonly<Record<Severity, vscode.DiagnosticSeverity>> = {
   info: vscode.DiagnosticSeverity.Information,
 };
 
-function shown(document: vscode.TextDocument, diagnostic: Diagnostic): vscode.Diagnostic {
+/** As the editor shows it. */
+export function markOf(document: vscode.TextDocument, diagnostic: Diagnostic): vscode.Diagnostic {
   const result = new vscode.Diagnostic(rangeOf(document, diagnostic.span), diagnostic.message, SEVERITIES[diagnostic.severity]);
   result.source = 'Ohmward';
   result.code = diagnostic.code;
@@ -21,7 +22,7 @@ function shown(document: vscode.TextDocument, diagnostic: Diagnostic): vscode.Di
 /** Shows what is wrong with each open description. */
 export function publishDiagnostics(studies: DocumentStudies, spreads: DocumentSpreads): vscode.Disposable {
   const collection = vscode.languages.createDiagnosticCollection('ohmward');
-  const publish = (document: vscode.TextDocument, { diagnostics }: Assessment) => collection.set(document.uri, diagnostics.map((diagnostic) => shown(document, diagnostic)));
+  const publish = (document: vscode.TextDocument, { diagnostics }: Assessment) => collection.set(document.uri, diagnostics.map((diagnostic) => markOf(document, diagnostic)));
   return vscode.Disposable.from(
     collection,
     studies.onDidFinish(({ document, assessment }) => publish(document, assessment)),

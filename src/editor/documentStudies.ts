@@ -1,13 +1,17 @@
 import * as vscode from 'vscode';
-import { assessDescription, filesNeeded, type Assessment } from '../assistance/assess';
+import { assessModel, filesNeeded, type Assessment } from '../assistance/assess';
 import { latestRunner, type LatestRunner } from '../base/latestRunner';
+import { buildModel } from '../description/buildModel';
 import type { LoadedFile } from '../description/files';
 import { readDescription } from '../description/readDescription';
+import { codesObstacle } from '../study/tuning/bestCodes';
+import { giveCodes, tuningPoints } from '../study/tuning/tuneChannels';
 import { fileScope } from './fileAccess';
 import type { FileStore } from './fileStore';
-import { MAX_FILES, MAX_LOADING_ROUNDS, MAX_STUDY_DELAY_MS, SMOOTH_STUDY_MS } from './limits';
+import { CODES_IN_PLACE_POINTS, MAX_FILES, MAX_LOADING_ROUNDS, MAX_STUDY_DELAY_MS, SMOOTH_STUDY_MS } from './limits';
 import type { Log } from './log';
 import { isDescription } from './ranges';
+import type { Tuner } from './tuner';
 
 /** One version of one document, evaluated. */
 export interface Study {
@@ -39,7 +43,7 @@ interface State {
   tookMs: number;
 }
 
-export function createDocumentStudies(store: FileStore, log: Log): DocumentStudies {
+export function createDocumentStudies(store: FileStore, tuner: Tuner, log: Log): DocumentStudies {
   const states = new Map<vscode.TextDocument, State>();
   const finished = new vscode.EventEmitter<Study>();
   const failed = new vscode.EventEmitter<{ document: vscode.TextDocument; message: string }>();
@@ -63,8 +67,17 @@ export function createDocumentStudies(store: FileStore, log: Log): DocumentStudi
       if (superseded()) return null;
       needed.forEach((reference, i) => files.set(reference.path, loaded[i] as LoadedFile));
     }
-    const evaluating = performance.now();
-    const assessment = assessDescription(description, files);
+    let evaluating = performance.now();
+    const model = buildModel(description, files);
+    tookMs += performance.now() - evaluating;
+    if (model.problem && tuningPoints(model.problem) > CODES_IN_PLACE_POINTS && codesObstacle(model.problem) === null) {
+      const codes = await tuner.codes(document, model.problem);
+      if (superseded()) return null;
+      if (codes === null) throw new Error('the search for codes was stopped');
+      giveCodes(model.problem, codes);
+    }
+    evaluating = performance.now();
+    const assessment = assessModel(description, model);
     tookMs += performance.now() - evaluating;
     state.tookMs = tookMs;
     return { document, version, text, assessment, files };
@@ -95,11 +108,15 @@ export function createDocumentStudies(store: FileStore, log: Log): DocumentStudi
     if (!state) return;
     state.runner.dispose();
     states.delete(document);
+    tuner.supersede(document);
     if (states.size === 0) store.forget();
     closed.fire(document);
   };
   const requestAll = () => {
-    for (const state of states.values()) state.runner.request();
+    for (const [document, state] of states) {
+      tuner.supersede(document);
+      state.runner.request();
+    }
   };
 
   const subscriptions = vscode.Disposable.from(
@@ -107,7 +124,9 @@ export function createDocumentStudies(store: FileStore, log: Log): DocumentStudi
     vscode.workspace.onDidOpenTextDocument(open),
     vscode.workspace.onDidCloseTextDocument(close),
     vscode.workspace.onDidChangeTextDocument(({ document, contentChanges }) => {
-      if (contentChanges.length > 0) states.get(document)?.runner.request();
+      if (contentChanges.length === 0) return;
+      tuner.supersede(document);
+      states.get(document)?.runner.request();
     }),
     vscode.workspace.onDidSaveTextDocument(() => void store.revalidate()),
     vscode.window.onDidChangeWindowState(({ focused }) => {

@@ -12,6 +12,8 @@ export interface FileStore extends vscode.Disposable {
   /** What a reference means, if it is known already; undefined where it must be loaded. */
   peek(scope: FileScope, reference: FileReference): LoadedFile | undefined;
   load(scope: FileScope, reference: FileReference): Promise<LoadedFile>;
+  /** Any file of text, as the `csv` form has it. */
+  loadText(scope: FileScope, path: string): Promise<LoadedFile>;
   /** Looks whether anything changed unnoticed; tells so through `onDidChange`. */
   revalidate(): Promise<void>;
   /** Forgets everything, silently. */
@@ -105,26 +107,29 @@ export function createFileStore(log: Log): FileStore {
     return file;
   };
 
+  const load = (scope: FileScope, reference: FileReference): Promise<LoadedFile> => {
+    const resolved = resolveFile(scope, reference.path);
+    if ('refused' in resolved) return Promise.resolve({ form: 'refused', reason: resolved.refused });
+    const key = keyOf(scope, resolved.uri, reference.kind);
+    const known = entries.get(key);
+    if (known) return Promise.resolve(known.file);
+    const reading = `${generation} ${key}`;
+    let promise = loading.get(reading);
+    if (!promise) {
+      promise = read(scope, reference, resolved.uri, key).finally(() => loading.delete(reading));
+      loading.set(reading, promise);
+    }
+    return promise;
+  };
+
   return {
     peek(scope, reference) {
       const resolved = resolveFile(scope, reference.path);
       if ('refused' in resolved) return { form: 'refused', reason: resolved.refused };
       return entries.get(keyOf(scope, resolved.uri, reference.kind))?.file;
     },
-    load(scope, reference) {
-      const resolved = resolveFile(scope, reference.path);
-      if ('refused' in resolved) return Promise.resolve({ form: 'refused', reason: resolved.refused });
-      const key = keyOf(scope, resolved.uri, reference.kind);
-      const known = entries.get(key);
-      if (known) return Promise.resolve(known.file);
-      const reading = `${generation} ${key}`;
-      let promise = loading.get(reading);
-      if (!promise) {
-        promise = read(scope, reference, resolved.uri, key).finally(() => loading.delete(reading));
-        loading.set(reading, promise);
-      }
-      return promise;
-    },
+    load,
+    loadText: (scope, path) => load(scope, { path, kind: 'csv', span: { start: 0, end: 0 }, within: null }),
     revalidate,
     forget() {
       generation++;

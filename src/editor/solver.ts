@@ -5,7 +5,8 @@ import { startWorker } from '../platform/startWorker';
 import type { SolveResult } from '../solve/solution';
 import { isSettled } from '../study/obstacles';
 import type { Problem } from '../study/problem';
-import { createSolverQueue } from '../worker/solverQueue';
+import type { SolveJob } from '../worker/solveJob';
+import { createWorkQueue } from '../worker/workQueue';
 import type { DocumentStudies, Study } from './documentStudies';
 import { CANDIDATES, HANGING_AFTER_MS, PROGRESS_AFTER_MS, SUPERSEDED_GRACE_MS } from './limits';
 import type { Log } from './log';
@@ -58,7 +59,7 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
   let told = false;
 
   const readScript = () => (script ??= Promise.resolve(vscode.workspace.fs.readFile(vscode.Uri.joinPath(extensionUri, 'dist', 'solver.js'))).then((bytes) => new TextDecoder().decode(bytes)));
-  const queue = createSolverQueue<vscode.TextDocument>({
+  const queue = createWorkQueue<vscode.TextDocument, Omit<SolveJob, 'id'>, SolveResult>({
     start: async (listeners) => startWorker(await readScript(), listeners),
     failed(reason) {
       log.failure('the solver', new Error(reason));
@@ -85,8 +86,7 @@ export function createDocumentSolver(extensionUri: vscode.Uri, studies: Document
       });
     };
     queue.ask(document, {
-      problem,
-      top: CANDIDATES,
+      job: { problem, top: CANDIDATES },
       started: () => { timer = setTimeout(showProgress, PROGRESS_AFTER_MS); },
       progress: (share, bestMarginDb) => report?.(share, bestMarginDb),
       done(result) {

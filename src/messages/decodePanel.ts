@@ -1,5 +1,5 @@
 import { byType, flag, listOf, number, oneOf, orNull, shape, text, whole, type Decoder } from './decode';
-import type { BandView, CandidateView, CandidatesView, DiscView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, SpreadView, ToHost, ToPage, TraceView } from './panel';
+import type { BandView, CandidateView, CandidatesView, ChannelView, CodesView, CoverageView, DiscView, FirmwareView, GoalView, LadderRowView, MarkerCaseView, MarkerView, MaskView, PanelView, PathStepView, PointList, ProblemView, SpreadView, ToHost, ToPage, TraceView } from './panel';
 
 const maybeNumbers = listOf(orNull(number));
 const point = shape<{ re: number; im: number }>({ re: number, im: number });
@@ -28,9 +28,17 @@ const spread = shape<SpreadView>({
   stale: flag, share: number, yieldText: text, goalsText: text, cornerText: text, remedyText: text, cornerDb: orNull(number),
   bars: listOf(shape<SpreadView['bars'][number]>({ fromDb: number, toDb: number, count: whole })), cloud: listOf(points),
 });
+const channel = shape<ChannelView>({ frequencyHz: number, text, codes: listOf(whole), margin: text, marginDb: orNull(number), holds: flag, returnLoss: text, gain: text });
+const coverage = shape<CoverageView>({
+  text, across: whole, marginDb: maybeNumbers, cases: listOf(shape<CoverageView['cases'][number]>({ caseName: text, text, holds: flag, reflection: orNull(point) })),
+});
+const codes = shape<CodesView>({
+  summary: text, tunables: listOf(shape<CodesView['tunables'][number]>({ name: text, low: whole, high: whole })), channels: listOf(channel), shown: whole, stepsText: text, proof: text,
+  firmware: listOf(shape<FirmwareView>({ path: text, text, ok: flag, writable: flag })), coverage: orNull(coverage), coverageText: text,
+});
 const view = shape<PanelView>({
   title: text, fileName: text, pinned: flag, verdict: text, goals: listOf(goal), problems: listOf(problem), cautions: listOf(text), z0Ohm: number,
-  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row), notInserted: flag, candidates: orNull(candidates), spread: orNull(spread),
+  frequencyHz: listOf(number), bands: listOf(band), traces: listOf(trace), discs: listOf(disc), limits: listOf(disc), masks: listOf(mask), marker: orNull(marker), ladder: listOf(row), notInserted: flag, candidates: orNull(candidates), spread: orNull(spread), codes: orNull(codes),
 });
 
 /** A message from the host; null where it is none. */
@@ -59,7 +67,9 @@ const toHost: Decoder<ToHost> = byType<ToHost>({
   'set value': shape({ type: oneOf('set value'), document: text, version: whole, elementId: text, text }),
   'preview candidate': shape({ type: oneOf('preview candidate'), document: text, version: whole, request: whole, candidate: whole }),
   'insert candidate': shape({ type: oneOf('insert candidate'), document: text, version: whole, candidate: whole }),
-  copy: shape({ type: oneOf('copy'), document: text, what: oneOf('chart svg', 'ladder csv', 'ladder markdown'), text }),
+  'write firmware': shape({ type: oneOf('write firmware'), document: text, version: whole }),
+  'save report': shape({ type: oneOf('save report'), document: text }),
+  copy: shape({ type: oneOf('copy'), document: text, what: oneOf('chart svg', 'ladder csv', 'ladder markdown', 'codes csv'), text }),
   save: shape({ type: oneOf('save'), document: text, what: oneOf('chart svg', 'chart png'), base64: text }),
   pin: shape({ type: oneOf('pin'), document: text, pinned: flag }),
   failure: shape({ type: oneOf('failure'), message: text }),

@@ -168,6 +168,61 @@ export interface SpreadView {
   readonly cloud: readonly PointList[];
 }
 
+/** One channel with its codes. */
+export interface ChannelView {
+  readonly frequencyHz: number;
+  /** `902.75 MHz` */
+  readonly text: string;
+  /** By tunable. */
+  readonly codes: readonly number[];
+  readonly margin: string;
+  /** Null where not known or infinite. */
+  readonly marginDb: number | null;
+  readonly holds: boolean;
+  readonly returnLoss: string;
+  readonly gain: string;
+}
+
+/** Where the firmware's table stands. */
+export interface FirmwareView {
+  /** As written in the description. */
+  readonly path: string;
+  /** `up to date` */
+  readonly text: string;
+  readonly ok: boolean;
+  /** True where it can be written from here. */
+  readonly writable: boolean;
+}
+
+/** The loads that some code brings to the goals at one channel, on a grid over the chart. */
+export interface CoverageView {
+  /** `some code brings 16 % of the chart to the goals at 915.3 MHz` */
+  readonly text: string;
+  /** Points across, −1 … 1 in both directions. */
+  readonly across: number;
+  /** By point, row by row from the lowest imaginary part; null outside of the chart and where no code helps. */
+  readonly marginDb: readonly (number | null)[];
+  readonly cases: readonly { readonly caseName: string; readonly text: string; readonly holds: boolean; readonly reflection: { readonly re: number; readonly im: number } | null }[];
+}
+
+/** Tunable parts and their codes. */
+export interface CodesView {
+  readonly summary: string;
+  /** By tunable: least and largest code that it has. */
+  readonly tunables: readonly { readonly name: string; readonly low: number; readonly high: number }[];
+  /** Increasing in frequency. */
+  readonly channels: readonly ChannelView[];
+  /** Index of the channel whose codes traces and ladder have. */
+  readonly shown: number;
+  /** What one wrong code leaves there. */
+  readonly stepsText: string;
+  readonly proof: string;
+  readonly firmware: readonly FirmwareView[];
+  /** Null while it is not known; `coverageText` says why, or that it is being worked out. */
+  readonly coverage: CoverageView | null;
+  readonly coverageText: string;
+}
+
 /** One whole picture. Everything that a person reads is text made by the host, so panel, hover and report agree. */
 export interface PanelView {
   readonly title: string;
@@ -194,6 +249,8 @@ export interface PanelView {
   readonly candidates: CandidatesView | null;
   /** Null where no part has a tolerance, or nothing is known yet. */
   readonly spread: SpreadView | null;
+  /** Null where nothing is set by a code. */
+  readonly codes: CodesView | null;
 }
 
 export type ToPage =
@@ -220,7 +277,9 @@ export type ToHost =
   | { readonly type: 'set value'; readonly document: string; readonly version: number; readonly elementId: string; readonly text: string }
   | { readonly type: 'preview candidate'; readonly document: string; readonly version: number; readonly request: number; readonly candidate: number }
   | { readonly type: 'insert candidate'; readonly document: string; readonly version: number; readonly candidate: number }
-  | { readonly type: 'copy'; readonly document: string; readonly what: 'chart svg' | 'ladder csv' | 'ladder markdown'; readonly text: string }
+  | { readonly type: 'write firmware'; readonly document: string; readonly version: number }
+  | { readonly type: 'save report'; readonly document: string }
+  | { readonly type: 'copy'; readonly document: string; readonly what: 'chart svg' | 'ladder csv' | 'ladder markdown' | 'codes csv'; readonly text: string }
   | { readonly type: 'save'; readonly document: string; readonly what: 'chart svg' | 'chart png'; readonly base64: string }
   | { readonly type: 'pin'; readonly document: string; readonly pinned: boolean }
   | { readonly type: 'failure'; readonly message: string };

@@ -1,4 +1,4 @@
-import type { ChannelCodes } from '../study/tuning/bestCodes';
+import type { ChannelFigures } from '../study/tuning/bestCodes';
 
 /** What firmware is told, and nothing else: only this decides a written table. */
 export interface FirmwareRows {
@@ -9,7 +9,7 @@ export interface FirmwareRows {
 }
 
 /** Frequencies in whole hertz: a step like 200 kHz in binary is off by less than that. */
-export function firmwareRows(symbol: string, channels: readonly ChannelCodes[]): FirmwareRows {
+export function firmwareRows(symbol: string, channels: readonly Pick<ChannelFigures, 'frequencyHz' | 'codes'>[]): FirmwareRows {
   const tunables = [...(channels[0]?.codes.keys() ?? [])];
   return { symbol, tunables, rows: channels.map(({ frequencyHz, codes }) => ({ frequencyHz: Math.round(frequencyHz), codes: tunables.map((name) => codes.get(name) ?? 0) })) };
 }

@@ -1,6 +1,7 @@
 import type { SolveResult } from '../solve/solution';
 import { solveProblem } from '../solve/solveProblem';
 import type { Problem } from '../study/problem';
+import type { WorkAnswer } from './workQueue';
 
 /** A problem to solve away from the main thread; both sides of it are plain data. */
 export interface SolveJob {
@@ -9,10 +10,7 @@ export interface SolveJob {
   readonly top: number;
 }
 
-export type SolveAnswer =
-  | { readonly id: number; readonly type: 'progress'; readonly share: number; readonly bestMarginDb: number | null }
-  | { readonly id: number; readonly type: 'result'; readonly result: SolveResult }
-  | { readonly id: number; readonly type: 'failure'; readonly message: string };
+export type SolveAnswer = WorkAnswer<SolveResult>;
 
 /** Between two signs of life. */
 const betweenMs = 50;

@@ -1,4 +1,5 @@
 import { servePort } from '../platform/workerPort';
+import { answerCodesJob, type CodesJob } from './codesJob';
 import { answerSolveJob, type SolveJob } from './solveJob';
 import { answerSpreadJob, type SpreadJob } from './spreadJob';
 
@@ -6,9 +7,13 @@ import { answerSpreadJob, type SpreadJob } from './spreadJob';
 // spread of builds in pieces, between which a newer one is heard of.
 let latest = -1;
 
-servePort<SolveJob | SpreadJob>((job, send) => {
+servePort<SolveJob | SpreadJob | CodesJob>((job, send) => {
   if (!('type' in job)) {
     answerSolveJob(job, send);
+    return;
+  }
+  if (job.type !== 'spread') {
+    answerCodesJob(job, send);
     return;
   }
   latest = job.id;

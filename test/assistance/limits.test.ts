@@ -49,7 +49,7 @@ describe('how good a band could be', () => {
   });
 
   it('stands in the report, beside the goal and under the chart', () => {
-    const html = reportHtml([{ path: 'a', assessment: assessed(asking('return loss >= 20 dB')) }]);
+    const html = reportHtml([{ path: 'a', view: panelView(assessed(asking('return loss >= 20 dB')), { fileName: 'a', pinned: false, markerHz: null }), messages: [] }]);
     assert.match(html, /<td class="left" colspan="5">out of reach without loss: /);
     assert.match(html, /<circle class="limit"/);
     assert.match(html, /dashed ring: Bode–Fano, wide: \|Γ\| 0\.14/);

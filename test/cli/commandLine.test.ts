@@ -336,6 +336,24 @@ describe('command line', () => {
     assert.equal(code, 0);
     const html = readFileSync('deep/report.html', 'utf8');
     assert.match(html, /Orchard frost sensor, antenna port/);
-    assert.doesNotMatch(html, /<script|https?:\/\/|src=|@import|url\(/);
+    assert.doesNotMatch(html, /<script|https?:\/\/|src=|@import|url\((?!#)/);
+    // Everything that the panel shows of the three samples.
+    for (const heading of ['Verdict: all 5 hold', 'Codes by channel', 'Coverage', 'Spread of builds']) assert.ok(html.includes(heading), heading);
+    assert.match(html, /Table firmware\/gate_codes\.h: up to date/);
+    assert.equal(html.match(/<path class="covered"/g)?.length, 1);
+    assert.match(html, /<path class="cloud"/);
+    // Names of patterns belong to one picture each.
+    const ids = [...html.matchAll(/ id="([^"]+)"/g)].map(([, id]) => id);
+    assert.equal(new Set(ids).size, ids.length);
+  });
+
+  it('reports the best candidate of what is left to solve, and that it is not in the text', async () => {
+    change('10 nH from coils', 'solve from coils');
+    const { code } = await run('report', 'orchard', '-o', 'report.html');
+    assert.equal(code, 1);
+    const html = readFileSync('report.html', 'utf8');
+    assert.match(html, /<p class="not-inserted">/);
+    assert.match(html, /<h2>Candidates<\/h2>.*<td>L1 [\d.]+ nH<\/td>/s);
+    assert.match(html, /proved: none of/);
   });
 });

@@ -15,6 +15,11 @@ const view: PanelView = {
   notInserted: true,
   spread: { stale: false, share: 1, yieldText: '97 %', goalsText: 'by goal', cornerText: 'worst corner', remedyText: '', cornerDb: -1, bars: [{ fromDb: 0, toDb: 1, count: 3 }], cloud: [{ re: [0.1, null], im: [0.2, null] }] },
   candidates: { stale: false, message: '', notes: ['an invented remark'], candidates: [{ id: 0, values: 'L1 13 nH', holds: true, margin: '1 dB', returnLoss: '15 dB', gain: '−0.5 dB', parts: '1', response: 'low-pass', directCurrent: 'passes', proof: 'proved', note: '' }] },
+  codes: {
+    summary: 'every goal holds', tunables: [{ name: 'bank', low: 0, high: 3 }], channels: [{ frequencyHz: 866e6, text: '866 MHz', codes: [2], margin: '1 dB', marginDb: 1, holds: true, returnLoss: '14 dB', gain: '−0.5 dB' }], shown: 0,
+    stepsText: 'one code off', proof: 'proved', firmware: [{ path: 'codes.h', text: 'out of date', ok: false, writable: true }], coverageText: '',
+    coverage: { text: 'covered', across: 2, marginDb: [null, 1, -2, null], cases: [{ caseName: 'load', text: 'covered', holds: true, reflection: { re: 0.1, im: 0 } }] },
+  },
 };
 
 const toPage: readonly ToPage[] = [
@@ -27,6 +32,7 @@ const toHost: readonly ToHost[] = [
   { type: 'ready' }, { type: 'move marker', document: 'file:///a', request: 1, frequencyHz: 868e6 }, { type: 'type marker', document: 'file:///a', request: 1, text: '868 MHz' }, { type: 'reveal line', document: 'file:///a', line: 0 }, { type: 'point at element', document: 'file:///a', elementId: null },
   { type: 'step value', document: 'file:///a', version: 3, elementId: 'L1', direction: 'up' }, { type: 'set value', document: 'file:///a', version: 3, elementId: 'L1', text: '12 nH' }, { type: 'copy', document: 'file:///a', what: 'ladder csv', text: 'a,b' }, { type: 'save', document: 'file:///a', what: 'chart png', base64: 'AAAA' },
   { type: 'preview candidate', document: 'file:///a', version: 3, request: 1, candidate: 2 }, { type: 'insert candidate', document: 'file:///a', version: 3, candidate: 0 },
+  { type: 'write firmware', document: 'file:///a', version: 3 }, { type: 'save report', document: 'file:///a' }, { type: 'copy', document: 'file:///a', what: 'codes csv', text: 'a,b' },
   { type: 'pin', document: 'file:///a', pinned: true }, { type: 'failure', message: 'an invented failure' },
 ];
 

@@ -3,7 +3,7 @@ import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import type { ToHost } from '../../src/messages/panel';
 import { openPage, startPages, stopPages, type ServedPage } from './servedPage';
-import { sampleView, spreadSample, unsolvedView, viewMessage } from './sampleView';
+import { codesSample, sampleView, spreadSample, unsolvedView, viewMessage } from './sampleView';
 import { bodyClass, type ThemeKind } from './themes';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
@@ -149,6 +149,40 @@ describe('the panel’s page', function () {
     await served.page.close();
   });
 
+  it('lists codes by channel, moves the marker to the one that is chosen, and has the table written', async () => {
+    const served = await openPage('dark', 580);
+    const view = codesSample();
+    await served.post(viewMessage(view, 2));
+    const { channels, shown } = view.codes!;
+    assert.equal(await served.page.locator('table.codes tbody tr').count(), channels.length);
+    assert.match(await served.page.locator('table.codes tr.current').innerText(), new RegExp(channels[shown].text));
+    assert.equal(await served.page.locator('table.codes [aria-current=true]').count(), 1);
+    await served.page.locator('table.codes tbody button').nth(3).click();
+    const moved = await last(served, 'move marker');
+    assert.ok(moved?.type === 'move marker' && moved.frequencyHz === channels[3].frequencyHz);
+    await served.page.locator('svg.stairs-plot').press('End');
+    const ended = await last(served, 'move marker');
+    assert.ok(ended?.type === 'move marker' && ended.frequencyHz === channels[channels.length - 1].frequencyHz);
+    const box = (await served.page.locator('svg.stairs-plot').boundingBox())!;
+    await served.page.mouse.click(box.x + box.width * 0.09, box.y + 60);
+    const clicked = await last(served, 'move marker');
+    assert.ok(clicked?.type === 'move marker' && clicked.frequencyHz === channels[0].frequencyHz);
+    await served.page.getByText('Write table').click();
+    assert.deepEqual(await last(served, 'write firmware'), { type: 'write firmware', document, version: 2 });
+    await served.page.getByText('Save report').click();
+    assert.deepEqual(await last(served, 'save report'), { type: 'save report', document });
+    await served.page.getByText('Copy codes as CSV').click();
+    const copied = await last(served, 'copy');
+    assert.ok(copied?.type === 'copy' && copied.text.split('\r\n').length === channels.length + 2);
+    assert.match(copied.text, /^frequency_hz,antcap,bank,margin_db\r\n902750000,/);
+    assert.equal(await served.page.locator('svg.coverage-chart .covered').count(), 1);
+    assert.equal(await served.page.locator('svg.coverage-chart .marker-dot').count(), 3);
+    assert.deepEqual(await served.violations(), []);
+    await served.post(viewMessage(sampleView(), 3));
+    assert.ok(await served.page.locator('.codes-section').isHidden());
+    await served.page.close();
+  });
+
   it('leads from a goal and from a row to their lines', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));
@@ -264,6 +298,7 @@ describe('the panel’s page', function () {
     [theme, 'a missed goal', sampleView((text) => text.replace('rejection >= 8 dB', 'rejection >= 12 dB'))] as const,
     [theme, 'candidates', unsolvedView().view] as const,
     [theme, 'a spread of builds', spreadSample()] as const,
+    [theme, 'codes by channel', codesSample()] as const,
   ])) {
     it(`has nothing that axe finds serious in ${theme}, with ${what}`, async () => {
       const served = await openPage(theme, 580);
@@ -279,7 +314,7 @@ describe('the panel’s page', function () {
   for (const width of [320, 580, 1000]) {
     it(`fits ${width} px without scrolling the page sideways`, async () => {
       const served = await openPage('dark', width);
-      for (const [version, view] of [sampleView(), spreadSample(), unsolvedView().view].entries()) {
+      for (const [version, view] of [sampleView(), spreadSample(), unsolvedView().view, codesSample()].entries()) {
         await served.post(viewMessage(view, version + 1));
         assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
       }

@@ -1,9 +1,11 @@
 import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { assessDescription, type Assessment } from '../../src/assistance/assess';
+import { defaultMarkerHz } from '../../src/assistance/markerView';
 import { panelView } from '../../src/assistance/panelView';
 import { solvedAssessment } from '../../src/assistance/solvedAssessment';
 import { wholeSpread } from '../../src/assistance/spreadAssessment';
+import { coverage } from '../../src/study/tuning/coverage';
 import { toleranceCloud } from '../../src/study/spread/toleranceCloud';
 import { traceView } from '../../src/assistance/traceViews';
 import { loadFiles } from '../../src/cli/loadFiles';
@@ -36,6 +38,22 @@ export function spreadSample(stale = false): PanelView {
   const { problem } = assessment.model;
   const spread = wholeSpread({ ...problem!, spread: { ...problem!.spread, builds: 400 } })!;
   return panelView(assessment, { fileName: 'frost.match.yaml', pinned: false, markerHz: null, spread: { spread, stale, cloud: toleranceCloud(problem!) } })!;
+}
+
+const gateFolder = fileURLToPath(new URL('../../media/samples/gate-reader/', import.meta.url));
+
+/** The sample with tunable parts, at the marker or at a channel, with coverage and with a table that is out of date. */
+export function codesSample(markerHz: number | null = null): PanelView {
+  const description = readDescription(readFileSync(`${gateFolder}gate.match.yaml`, 'utf8'), { expressions: true });
+  const assessment = assessDescription(description, loadFiles(description, [gateFolder]));
+  const problem = assessment.model.problem!;
+  return panelView(assessment, {
+    fileName: 'gate.match.yaml', pinned: false, markerHz,
+    codes: {
+      coverage: coverage(problem, { frequencyHz: markerHz ?? defaultMarkerHz(problem)! }),
+      firmware: [{ path: 'firmware/gate_codes.h', text: 'out of date', ok: false, writable: true }],
+    },
+  })!;
 }
 
 export const viewMessage = (view: PanelView, version = 1): ToPage => ({ type: 'view', document: 'file:///orchard/frost.match.yaml', version, view });

@@ -3,13 +3,15 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { chartBox, chartSummary, nearestTracePoint, smithChart } from '../../src/picture/smithChart';
 import { chartRadius, conductanceCircle, reflectionOfNormalised, resistanceCircle } from '../../src/picture/chartGrid';
 import { frequencyPlot, frequencyScale, frequencyUnit, plotSize } from '../../src/picture/frequencyPlot';
+import { codeStairs, channelAt, stairsSize } from '../../src/picture/codeStairs';
+import { coverageChart } from '../../src/picture/coverageChart';
 import { goalBar } from '../../src/picture/goalBar';
 import { ladderSymbol } from '../../src/picture/ladderSymbol';
 import { placeLabels } from '../../src/picture/placeLabels';
 import { standaloneStyle } from '../../src/picture/standaloneStyle';
 import { escapeText, polyline, tag } from '../../src/picture/svg';
 import type { LadderSymbol } from '../../src/messages/panel';
-import { sampleView } from '../page/sampleView';
+import { codesSample, sampleView } from '../page/sampleView';
 
 const rewrite = process.env.UPDATE_EXPECTED === '1' && !process.env.CI;
 
@@ -43,6 +45,64 @@ describe('pictures', () => {
     for (const plot of ['reflection', 'gain'] as const) {
       expectFile(`${plot}.svg`, `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${plotSize.width} ${plotSize.height}"><style>${standaloneStyle('dark')}</style><rect class="paper" width="${plotSize.width}" height="${plotSize.height}"/>${frequencyPlot({ ...view, plot, markerHz: view.marker!.frequencyHz })}</svg>\n`);
     }
+  });
+
+  describe('of codes', () => {
+    const codes = codesSample().codes!;
+
+    it('the staircase of the sample', () => {
+      const { width, height } = stairsSize(codes);
+      expectFile('stairs.svg', `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${width} ${height}"><style>${standaloneStyle('light')}</style><rect class="paper" width="${width}" height="${height}"/>${codeStairs(codes)}</svg>\n`);
+    });
+
+    it('the coverage of the sample', () => {
+      const { x, y, width, height } = chartBox;
+      expectFile('coverage.svg', `<svg xmlns="http://www.w3.org/2000/svg" viewBox="${x} ${y} ${width} ${height}"><style>${standaloneStyle('dark')}</style><rect class="paper" x="${x}" y="${y}" width="${width}" height="${height}"/>${coverageChart(codes.coverage!, 'a')}</svg>\n`);
+    });
+
+    it('stand at the level of each channel’s code, and a place on them is that channel', () => {
+      const [, ...lanes] = codeStairs(codes).split('class="stairs');
+      assert.equal(lanes.length, 2);
+      const points = numbersOf(/d="([^"]+)"/.exec(lanes[0])![1]);
+      assert.equal(points.length, 2 * codes.channels.length);
+      codes.channels.forEach(({ codes: [first] }, at) => {
+        const [[from, level], [to, same]] = points.slice(2 * at, 2 * at + 2);
+        assert.equal(level, same);
+        assert.ok(Math.abs(level - points[0][1] - ((codes.channels[0].codes[0] - first) / 31) * 64) < 0.02);
+        assert.equal(channelAt(codes, (from + to) / 2), at);
+      });
+      assert.equal(channelAt(codes, -100), 0);
+      assert.equal(channelAt(codes, 1e4), codes.channels.length - 1);
+    });
+
+    it('need no more than one channel, one code and no margin', () => {
+      const alone = { tunables: [{ name: 'bank', low: 3, high: 3 }], channels: [{ ...codes.channels[0], codes: [3], marginDb: null }], shown: 0 };
+      assert.doesNotMatch(codeStairs(alone), /NaN|Infinity|undefined/);
+      assert.equal(channelAt(alone, 300), 0);
+      assert.equal(codeStairs({ ...alone, channels: [] }), ' ');
+    });
+
+    it('hatch what is covered, and nothing else', () => {
+      // A disc of radius 0.5 around 0.2 + 0.1j, as margins that fall off evenly from its middle.
+      const across = 41;
+      const marginDb = Array.from({ length: across * across }, (_, at) => {
+        const [re, im] = [-1 + (2 * (at % across)) / (across - 1), -1 + (2 * Math.floor(at / across)) / (across - 1)];
+        return Math.hypot(re, im) > 1 ? null : 10 * (0.5 - Math.hypot(re - 0.2, im - 0.1));
+      });
+      const drawn = coverageChart({ text: '', across, marginDb, cases: [] }, 'a');
+      const rim = numbersOf(/class="covered" d="([^"]+)"/.exec(drawn)![1]);
+      assert.ok(rim.length > 40);
+      for (const [x, y] of rim) assert.ok(Math.abs(Math.hypot(x / chartRadius - 0.2, -y / chartRadius - 0.1) - 0.5) < 0.02, `${x} ${y}`);
+      assert.ok(!coverageChart({ text: '', across: 3, marginDb: new Array<null>(9).fill(null), cases: [] }, 'a').includes('class="covered"'));
+    });
+
+    it('mark a load that is covered otherwise than one that is not', () => {
+      const reflection = { re: 0.1, im: 0.2 };
+      const drawn = coverageChart({ text: '', across: 2, marginDb: [null, null, null, null], cases: [{ caseName: 'a', text: '', holds: true, reflection }, { caseName: 'b', text: '', holds: false, reflection }, { caseName: 'c', text: '', holds: false, reflection: null }] }, 'a');
+      assert.equal(drawn.match(/marker-dot case-0/g)?.length, 1);
+      assert.equal(drawn.match(/case-cross case-1/g)?.length, 1);
+      assert.ok(!drawn.includes('case-2'));
+    });
   });
 
   it('arcs lead from the load through each element to the input', () => {

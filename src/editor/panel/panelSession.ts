@@ -1,7 +1,7 @@
 import * as vscode from 'vscode';
 import { listedSolutions, progressText } from '../../assistance/candidates';
 import { elementAt } from '../../assistance/elementAt';
-import { markerView } from '../../assistance/markerView';
+import { defaultMarkerHz, markerView } from '../../assistance/markerView';
 import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
 import { readMarkerText } from '../../assistance/readMarkerText';
 import { shownProblem, solvedAssessment, type SolvedUnknowns } from '../../assistance/solvedAssessment';
@@ -10,9 +10,13 @@ import { traceView } from '../../assistance/traceViews';
 import { decodeToHost } from '../../messages/decodePanel';
 import { pageHtml } from '../../messages/pageHtml';
 import type { ToHost, ToPage } from '../../messages/panel';
+import { nearestChannel } from '../../study/tuning/channelProblems';
+import type { DocumentCoverages } from '../coverages';
 import type { DocumentStudies, Study } from '../documentStudies';
+import type { FirmwareTables } from '../firmwareTables';
 import { insertSolved } from '../insertSolved';
 import type { Log } from '../log';
+import type { Reports } from '../reports';
 import type { DocumentSpreads } from '../spreads';
 import type { DocumentSolver } from '../solver';
 import { PROGRESS_AFTER_MS } from '../limits';
@@ -25,6 +29,9 @@ export interface PanelServices {
   readonly studies: DocumentStudies;
   readonly solver: DocumentSolver;
   readonly spreads: DocumentSpreads;
+  readonly coverages: DocumentCoverages;
+  readonly firmware: FirmwareTables;
+  readonly reports: Reports;
   readonly edits: ValueEdits;
   readonly highlight: ElementHighlight;
   readonly log: Log;
@@ -71,7 +78,7 @@ async function revealLine(document: vscode.TextDocument, line: number): Promise<
 }
 
 export function createPanelSession(panel: vscode.WebviewPanel, services: PanelServices, initial: PanelState): PanelSession {
-  const { studies, solver, spreads, edits, highlight, log } = services;
+  const { studies, solver, spreads, coverages, firmware, reports, edits, highlight, log } = services;
   const state: PanelState = { ...initial };
   const changed = new vscode.EventEmitter<void>();
   let shown: vscode.TextDocument | null = null;
@@ -95,10 +102,19 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     const studied = spreads.latest(document);
     return studied && { spread: studied.spread, cloud: studied.cloud, stale: studied.study.version !== version };
   };
+  const codesFor = ({ document, assessment }: Study) => {
+    const problem = shownProblem(assessment.model.problem, null);
+    const markerHz = problem && (state.markerHz ?? defaultMarkerHz(problem));
+    const tuned = problem && markerHz !== null && assessment.evaluation?.tuning;
+    return { coverage: tuned ? coverages.at(document, problem, markerHz) : 'values are left to solve', firmware: firmware.view(document) };
+  };
   const sendStudy = (study: Study) => {
     clearTimeout(staleTimer);
     const { document, version, assessment } = study;
-    const view = panelView(assessment, { fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study), solving: solver.isSolving(document), spread: spreadFor(study) });
+    const view = panelView(assessment, {
+      fileName: fileNameOf(document), pinned: state.pinned, markerHz: state.markerHz, solved: solvedFor(study), solving: solver.isSolving(document),
+      spread: spreadFor(study), codes: codesFor(study),
+    });
     // What can still be computed is shown, unless a better picture of the same description stands there.
     if (view !== null && (pictured !== idOf(document) || isDrawable(assessment))) {
       if (isDrawable(assessment)) pictured = idOf(document);
@@ -151,11 +167,15 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
     } else {
       const problem = study && shownProblem(study.assessment.model.problem, solvedFor(study));
       const marker = problem && markerView(problem, frequencyHz);
+      const before = state.markerHz ?? (problem && defaultMarkerHz(problem));
       if (marker) {
         state.markerHz = frequencyHz;
         changed.fire();
       }
       answer(marker, marker ? null : 'Nothing is known at this frequency.');
+      // Another channel has other codes: everything that is drawn follows.
+      const channelsHz = marker && problem?.channelsHz;
+      if (study && channelsHz && (before === null || nearestChannel(before, channelsHz) !== nearestChannel(frequencyHz, channelsHz))) sendStudy(study);
     }
   };
 
@@ -205,6 +225,12 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
         if (message.version !== versionOf(document.version)) break;
         await insertSolved(document, solver, message.candidate);
         break;
+      case 'write firmware':
+        if (message.version === versionOf(document.version)) await vscode.commands.executeCommand('ohmward.writeFirmware', document.uri);
+        break;
+      case 'save report':
+        await reports.save(document, null);
+        break;
       case 'copy':
         await copyText(message.text);
         break;
@@ -248,10 +274,10 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
       if (document !== shown || studies.latest(document)?.version !== version) return;
       send({ type: 'solving', document: idOf(document), version: versionOf(version), share, text: progressText({ share, bestMarginDb }) });
     }),
-    spreads.onDidChange((document) => {
+    ...[spreads.onDidChange, coverages.onDidChange, firmware.onDidChange].map((more) => more((document) => {
       const study = document === shown ? studies.latest(document) : null;
       if (study && study.version === document.version) sendStudy(study);
-    }),
+    })),
     studies.onDidFail(({ document, message }) => {
       if (document === shown) send({ type: 'stale', document: idOf(document), version: versionOf(document.version), reason: message, problems: [] });
     }),

@@ -8,8 +8,13 @@ import type { TunableCodes } from '../tunableCodes';
 import { usedTunables } from './codeSpace';
 import { tuneChannels, type OnProgress, type TunedChannel } from './tuneChannels';
 
+/** The best codes of one channel, what they leave, and what a wrong one costs. */
+export interface ChannelCodes extends ChannelFigures {
+  readonly steps: readonly CodeStep[];
+}
+
 /** The best codes of one channel, and what they leave. */
-export interface ChannelCodes {
+export interface ChannelFigures {
   readonly frequencyHz: number;
   /** By the tunable's name, in the order of the description. */
   readonly codes: TunableCodes;
@@ -27,8 +32,6 @@ export interface ChannelCodes {
   /** |Γ| at the channel, worst over the cases, and the least gain in dB (may be −∞); null where a case is not known there. */
   readonly worstReflection: number | null;
   readonly worstGainDb: number | null;
-  /** What a wrong code costs. */
-  readonly steps: readonly CodeStep[];
   /** True where every combination of codes was looked at. */
   readonly proved: boolean;
   readonly reason: string | null;
@@ -59,20 +62,31 @@ export function bestCodes(problem: Problem, onProgress?: OnProgress): readonly C
   return tuneChannels(problem, onProgress).map(channelCodes);
 }
 
-export function channelCodes(tuned: TunedChannel): ChannelCodes {
-  const { channel: { frequencyHz, problem }, codes, proved, results, score } = tuned;
-  const blind = results.find(({ goal, value, reason }) => !isCondition(goal) && value === null && reason !== null);
+/** Why the margin of a channel is not known; null where it is. */
+export function channelObstacle(tuned: TunedChannel): string | null {
+  const blind = tuned.results.find(({ goal, value, reason }) => !isCondition(goal) && value === null && reason !== null);
+  return blind?.reason ?? (isByGain(tuned) ? worstAt(tuned).reason : null);
+}
+
+const isByGain = ({ results }: TunedChannel): boolean => results.every(({ goal }) => isCondition(goal));
+
+export const channelCodes = (tuned: TunedChannel): ChannelCodes => ({ ...channelFigures(tuned), steps: codeSteps(tuned) });
+
+/** What each tunable's next codes would leave, the others standing. */
+export function codeSteps({ channel: { problem }, stepScore }: TunedChannel): readonly CodeStep[] {
+  return usedTunables(problem).map(({ name }) => ({ tunable: name, lowerDb: stepScore(name, -1)?.marginDb ?? null, higherDb: stepScore(name, 1)?.marginDb ?? null }));
+}
+
+export function channelFigures(tuned: TunedChannel): ChannelFigures {
+  const { channel: { frequencyHz }, codes, proved, results, score } = tuned;
   const own = worstAt(tuned);
-  const byGain = results.every(({ goal }) => isCondition(goal));
-  const reason = blind?.reason ?? (byGain ? own.reason : null);
+  const byGain = isByGain(tuned);
+  const reason = channelObstacle(tuned);
   return {
     frequencyHz, codes, proved, byGain, holds: reason === null && results.every(({ ok }) => ok),
     marginDb: reason === null ? score.marginDb : null,
     conditionsMissed: score.missed,
     worstReflection: own.reflection, worstGainDb: own.gainDb,
-    steps: usedTunables(problem).map(({ name }) => ({
-      tunable: name, lowerDb: tuned.stepScore(name, -1)?.marginDb ?? null, higherDb: tuned.stepScore(name, 1)?.marginDb ?? null,
-    })),
     reason: reason ?? own.reason,
   };
 }

@@ -45,6 +45,28 @@ export function tuneChannels(problem: Problem, onProgress: OnProgress = () => un
   return tuned;
 }
 
+/** What the search takes, in evaluations of one point: a lower bound, from the numbers of codes, channels and cases alone. */
+export function tuningPoints(problem: Problem): number {
+  const space = codeSpace(problem);
+  return space.tunables.length === 0 ? 0 : space.count * (problem.channelsHz?.length ?? 0) * problem.cases.length;
+}
+
+/**
+ * Takes the codes of every channel as found elsewhere, in a worker for example, so that they are not sought here again. Codes that do not belong to
+ * the problem's channels and tunables are refused with a `RangeError`.
+ */
+export function giveCodes(problem: Problem, found: readonly { readonly frequencyHz: number; readonly codes: TunableCodes; readonly proved: boolean }[]): void {
+  const space = codeSpace(problem);
+  const channels = channelProblems(problem);
+  if (channels.length !== found.length) throw new RangeError('codes of other channels');
+  known.set(problem, channels.map((channel, at) => {
+    const { frequencyHz, codes, proved } = found[at];
+    const states = Int32Array.from(space.tunables, ({ name, states: own }) => own.findIndex(({ code }) => code === codes.get(name)));
+    if (frequencyHz !== channel.frequencyHz || states.includes(-1)) throw new RangeError('codes of other channels or tunables');
+    return tunedChannel(problem, space, channel, states, proved);
+  }));
+}
+
 function search(problem: Problem, onProgress: OnProgress): readonly TunedChannel[] {
   const space = codeSpace(problem);
   const channels = channelProblems(problem);
@@ -54,7 +76,7 @@ function search(problem: Problem, onProgress: OnProgress): readonly TunedChannel
     tuned.push(tunedChannel(problem, space, channel, states, proved));
     previous = states;
   };
-  if (isExhaustive(problem, space, channels)) {
+  if (isExhaustive(problem, space)) {
     const trials = Math.max(wholeJudgementsAtLeast, Math.floor(wholeJudgementsAtMost / channels.length));
     const together = Math.max(1, Math.floor(heldMarginsAtMost / space.count));
     for (let at = 0; at < channels.length; at += together) {
@@ -85,10 +107,10 @@ function search(problem: Problem, onProgress: OnProgress): readonly TunedChannel
   return tuned;
 }
 
-function isExhaustive(problem: Problem, space: CodeSpace, channels: readonly ChannelProblem[]): boolean {
+function isExhaustive(problem: Problem, space: CodeSpace): boolean {
   if (space.count > codeCombinationsAtMost) return false;
   // At least one point a channel and case: enough to tell whether there would be far too many.
-  return space.count * channels.length * problem.cases.length <= codePointsAtMost;
+  return tuningPoints(problem) <= codePointsAtMost;
 }
 
 /** By channel: the excess of each combination. */

@@ -1,7 +1,7 @@
 import assert from 'node:assert/strict';
 import { symlink } from 'node:fs/promises';
 import * as vscode from 'vscode';
-import { openSample, openText, sampleUri } from '../descriptions';
+import { openSample, openText, placeOf, sampleUri } from '../descriptions';
 import { page } from '../page';
 import { closeAll, errors, eventually, marksThat } from '../waiting';
 
@@ -33,6 +33,15 @@ describe('a workspace that is not trusted', () => {
     await symlink(vscode.Uri.joinPath(sampleUri('x'), '..', '..', 'outside.s1p').fsPath, sampleUri('fixtures/inside.s1p').fsPath);
     const { document } = await openText('fixtures/linked.match.yaml', description('inside.s1p'));
     await marksThat(document, 'a refusal', () => errors(document).some(({ message }) => /not trusted|trust/.test(message)));
+  });
+
+  it('writes no firmware’s table', async () => {
+    const { document } = await openText('gate-reader/gate.match.yaml', new TextDecoder().decode(await vscode.workspace.fs.readFile(sampleUri('gate-reader/gate.match.yaml'))).replace('firmware/gate_codes.h', 'firmware/other.h'));
+    await marksThat(document, 'that there is none yet', (all) => all.some(({ code }) => code === 'firmware-missing'));
+    const fixes = await vscode.commands.executeCommand<vscode.CodeAction[]>('vscode.executeCodeActionProvider', document.uri, placeOf(document, 'firmware/other.h'), vscode.CodeActionKind.QuickFix.value);
+    assert.ok(!fixes.some(({ title }) => /table/.test(title)));
+    await vscode.commands.executeCommand('ohmward.writeFirmware', document.uri);
+    await assert.rejects(async () => vscode.workspace.fs.stat(sampleUri('gate-reader/firmware/other.h')));
   });
 
   it('evaluates no expression', async () => {

@@ -4,7 +4,7 @@ import type { WorkerListeners } from '../../src/platform/startWorker';
 import type { SolveResult } from '../../src/solve/solution';
 import type { Problem } from '../../src/study/problem';
 import type { SolveJob } from '../../src/worker/solveJob';
-import { createSolverQueue } from '../../src/worker/solverQueue';
+import { createWorkQueue } from '../../src/worker/workQueue';
 
 const problem = {} as Problem; // the queue does not look into it
 const result: SolveResult = { solutions: [], byParts: [], reason: 'an invented reason', hints: [], outOfReach: [] };
@@ -18,7 +18,7 @@ interface FakeWorker extends WorkerListeners {
 function queueOf({ graceMs = 10_000, hangingMs = 10_000, cannotStart = () => false }: { graceMs?: number; hangingMs?: number; cannotStart?: () => boolean } = {}) {
   const workers: FakeWorker[] = [];
   const events: string[] = [];
-  const queue = createSolverQueue<string>({
+  const queue = createWorkQueue<string, Omit<SolveJob, 'id'>, SolveResult>({
     async start(listeners) {
       if (cannotStart()) throw new Error('no workers here');
       const worker: FakeWorker = { ...listeners, jobs: [], ended: false };
@@ -29,7 +29,7 @@ function queueOf({ graceMs = 10_000, hangingMs = 10_000, cannotStart = () => fal
     graceMs, hangingMs,
   });
   const ask = (key: string, name: string) => queue.ask(key, {
-    problem, top: 3,
+    job: { problem, top: 3 },
     started: () => void events.push(`${name} started`),
     progress: (share) => void events.push(`${name} ${share}`),
     done: (answer) => void events.push(`${name} ${answer === result ? 'solved' : String(answer)}`),
@@ -42,7 +42,7 @@ function queueOf({ graceMs = 10_000, hangingMs = 10_000, cannotStart = () => fal
 /** Long enough for promises that are settled already; the clock of the test stands still meanwhile. */
 const soon = () => new Promise<void>((resolve) => { setImmediate(resolve); });
 
-describe('a queue of problems for the solver', () => {
+describe('a queue of jobs for a worker', () => {
   beforeEach(() => mock.timers.enable({ apis: ['setTimeout'] }));
   afterEach(() => mock.timers.reset());
 

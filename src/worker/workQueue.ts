@@ -1,26 +1,27 @@
 import type { WorkerHandle, WorkerListeners } from '../platform/startWorker';
-import type { SolveResult } from '../solve/solution';
-import type { Problem } from '../study/problem';
-import type { SolveAnswer, SolveJob } from './solveJob';
+/** What a worker says of a job: it ends with a result or a failure. */
+export type WorkAnswer<Result> =
+  | { readonly id: number; readonly type: 'progress'; readonly share: number; readonly bestMarginDb: number | null }
+  | { readonly id: number; readonly type: 'result'; readonly result: Result }
+  | { readonly id: number; readonly type: 'failure'; readonly message: string };
 
-/** What is asked of the solver. Either `done` is called once, or `dropped`. */
-export interface SolverRequest {
-  readonly problem: Problem;
-  /** Solutions that are wanted. */
-  readonly top: number;
+/** What is asked of a worker. Either `done` is called once, or `dropped`. */
+export interface WorkRequest<Job, Result> {
+  /** Posted to the worker with an `id` in it. */
+  readonly job: Job;
   /** Its turn has come. */
   readonly started: () => void;
   /** `share`: 0 … 1. `bestMarginDb`: null where nothing has been found yet. */
   readonly progress: (share: number, bestMarginDb: number | null) => void;
   /** Null where it was cut short: superseded, or the worker died or hung. */
-  readonly done: (result: SolveResult | null) => void;
+  readonly done: (result: Result | null) => void;
   /** A newer one took its place before its turn came. */
   readonly dropped: () => void;
 }
 
-/** One worker that solves one problem after another. `Key`: whose problem it is; a newer one of the same owner supersedes the older. */
-export interface SolverQueue<Key> {
-  ask(key: Key, request: SolverRequest): void;
+/** One worker that does one job after another. `Key`: whose job it is; a newer one of the same owner supersedes the older. */
+export interface WorkQueue<Key, Job, Result> {
+  ask(key: Key, request: WorkRequest<Job, Result>): void;
   /** Drops what waits for an owner, and gives what runs for it a moment to finish. True where something waiting was dropped. */
   supersede(key: Key): boolean;
   /** True where something of this owner waits or runs. */
@@ -28,7 +29,7 @@ export interface SolverQueue<Key> {
   dispose(): void;
 }
 
-export interface SolverQueueOptions {
+export interface WorkQueueOptions {
   readonly start: (listeners: WorkerListeners) => Promise<WorkerHandle>;
   /** The worker died, hung or could not start; the next request gets a new one. */
   readonly failed: (reason: string) => void;
@@ -38,15 +39,15 @@ export interface SolverQueueOptions {
   readonly hangingMs: number;
 }
 
-interface Job<Key> {
+interface Waiting<Key, Job, Result> {
   readonly id: number;
   readonly key: Key;
-  readonly request: SolverRequest;
+  readonly request: WorkRequest<Job, Result>;
 }
 
-export function createSolverQueue<Key>({ start, failed, graceMs, hangingMs }: SolverQueueOptions): SolverQueue<Key> {
-  let waiting: Job<Key>[] = [];
-  let running: Job<Key> | null = null;
+export function createWorkQueue<Key, Job extends object, Result>({ start, failed, graceMs, hangingMs }: WorkQueueOptions): WorkQueue<Key, Job, Result> {
+  let waiting: Waiting<Key, Job, Result>[] = [];
+  let running: Waiting<Key, Job, Result> | null = null;
   let worker: WorkerHandle | null = null;
   let nextId = 1;
   let disposed = false;
@@ -57,7 +58,7 @@ export function createSolverQueue<Key>({ start, failed, graceMs, hangingMs }: So
     worker?.end();
     worker = null;
   };
-  const settle = (result: SolveResult | null) => {
+  const settle = (result: Result | null) => {
     clearTimeout(graceTimer);
     clearTimeout(hangTimer);
     graceTimer = undefined;
@@ -76,7 +77,7 @@ export function createSolverQueue<Key>({ start, failed, graceMs, hangingMs }: So
     hangTimer = setTimeout(() => fail('it gave no sign for a long time'), hangingMs);
   };
   const hear = (raw: unknown) => {
-    const answer = raw as SolveAnswer;
+    const answer = raw as WorkAnswer<Result>;
     if (running === null || answer.id !== running.id) return;
     watch();
     switch (answer.type) {
@@ -100,7 +101,7 @@ export function createSolverQueue<Key>({ start, failed, graceMs, hangingMs }: So
       worker = ready;
       watch();
       job.request.started();
-      worker.post({ id: job.id, problem: job.request.problem, top: job.request.top } satisfies SolveJob);
+      worker.post({ ...job.request.job, id: job.id });
     } catch (error) {
       const reason = error instanceof Error ? error.message : String(error);
       if (running === job) fail(reason);
