@@ -19,7 +19,7 @@ export async function check(paths: readonly string[], options: CallOptions, arou
   const earlier = (path: string): Assessment | undefined =>
     options.since === undefined ? undefined : assessFile(options.since, [dirname(options.since), dirname(path)]);
   const files: CheckedFile[] = assessed.map(({ shown, path, assessment }) => ({ path: shown, assessment, earlier: earlier(path) }));
-  for (const file of files) writeDiagnostics(file.path, file.assessment, around);
+  for (const file of files) writeDiagnostics(file.path, file.assessment, around, { goals: true });
   if (format === 'json') {
     around.out(`${JSON.stringify(checkJson(files), null, 2)}\n`);
   } else if (format === 'sarif') {

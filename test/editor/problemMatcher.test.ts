@@ -57,6 +57,16 @@ describe('the problem matchers', () => {
     });
   }
 
+  it('find a missed goal on its own line', async () => {
+    writeFileSync('valve.match.yaml', 'ohmward: 1\nload: 18 - j37 Ω\nbands:\n  main: 863 .. 870 MHz\nladder:\n  - series L1: 3.9 nH\ngoals:\n  - parts <= 3\n  - return loss >= 20 dB in main\n');
+    const { code, error } = await run('check', '.');
+    assert.equal(code, 1);
+    const [missed, ...others] = matched('ohmward', error).filter((mistake) => mistake?.severity === 'error');
+    assert.equal(others.length, 0);
+    assert.deepEqual({ ...missed, message: '' }, { file: 'valve.match.yaml', line: '9', column: '5', severity: 'error', message: '', code: 'goal-missed' });
+    assert.match(missed?.message ?? '', /^return loss >= 20 dB in main: [\d.]+ dB/);
+  });
+
   it('take file, place, severity, message and code', async () => {
     writeFileSync('valve.match.yaml', faulty);
     const { error } = await run('check', 'valve.match.yaml');
