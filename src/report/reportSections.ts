@@ -25,7 +25,7 @@ const paragraphs = (texts: readonly string[]): string => texts.filter((text) => 
 
 export function goalsTable({ goals }: Pick<PanelView, 'goals'>): string {
   const rows = goals.map(({ ok, title, place, bar, valueText, marginText, detail, note }) =>
-    `<tr>${cell(`${ok ? '✓' : '✗'} ${title}`, ok ? 'ok' : 'no')}${cell(place, 'left')}<td>${picture('bar', `0 0 ${barSize.width} ${barSize.height}`, goalBar(bar), marginText)}</td>${cell(valueText)}${cell(marginText)}${cell(detail)}</tr>${note && `<tr class="soft"><td></td><td class="left" colspan="5">${escapeText(note)}</td></tr>`}`);
+    `<tr>${cell(`${ok ? '✓' : '✗'} ${title}`, ok ? 'ok' : 'no')}${cell(place, 'left')}<td><svg class="bar" viewBox="0 0 ${barSize.width} ${barSize.height}" aria-hidden="true">${goalBar(bar)}</svg></td>${cell(valueText)}${cell(marginText)}${cell(detail)}</tr>${note && `<tr class="soft"><td></td><td class="left" colspan="5">${escapeText(note)}</td></tr>`}`);
   return goals.length === 0 ? '<p class="soft">The description states no goals.</p>' : table([{ head: 'goal' }, { head: 'where', left: true }, { head: 'margin' }, { head: 'value' }, { head: '' }, { head: 'worst' }], rows);
 }
 

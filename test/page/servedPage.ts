@@ -66,3 +66,6 @@ export async function openPage(theme: ThemeKind, width: number, controls: 'toolk
     violations: () => page.evaluate(() => (window as unknown as { violations: string[] }).violations),
   };
 }
+
+/** A page of its own, for a file. */
+export const openBlank = (width: number): Promise<Page> => browser!.newPage({ viewport: { width, height: 900 } });
