@@ -7,5 +7,8 @@ const words = new Set((
   'static_cast template this thread_local throw true try typeid typename using virtual wchar_t xor xor_eq'
 ).split(' '));
 
-/** True for a name that a header for C and C++ may use. */
-export const isNameInC = (name: string): boolean => /^[A-Za-z_][A-Za-z0-9_]{0,62}$/.test(name) && !words.has(name);
+/** Names of <stdint.h>, which the header includes (ISO/IEC 9899:1999, 7.18), and of what compilers define by themselves. From memory. */
+const taken = /^(?:u?int(?:_least|_fast)?(?:8|16|32|64)_t|u?int(?:ptr|max)_t|U?INT(?:_LEAST|_FAST|PTR|MAX)?\d*_(?:MIN|MAX|C)|(?:PTRDIFF|SIG_ATOMIC|WCHAR|WINT|SIZE)_(?:MIN|MAX)|main|linux|unix|i386|NULL|STDINT)$/;
+
+/** True for a name that a header for C and C++ may use. What begins with an underscore belongs to compilers and their libraries. */
+export const isNameInC = (name: string): boolean => /^[A-Za-z][A-Za-z0-9_]{0,62}$/.test(name) && !words.has(name) && !taken.test(name);

@@ -2,7 +2,7 @@ import { dirname, isAbsolute, resolve } from 'node:path';
 import { codesJson, type CodedFile } from '../report/codesJson';
 import { codesText } from '../report/codesText';
 import { firmwareState } from '../report/firmwareState';
-import { firmwareTexts } from '../report/firmwareTexts';
+import { firmwareObstacle, firmwareTexts } from '../report/firmwareTexts';
 import type { Problem } from '../study/problem';
 import { bestCodes, codesObstacle } from '../study/tuning/bestCodes';
 import { readDescription } from '../description/readDescription';
@@ -64,28 +64,53 @@ function codeFile(path: string, around: Surroundings): Coded {
 
 /** True where every table is as it should be in the end. */
 function firmwareFiles(files: readonly Coded[], write: boolean, around: Surroundings): boolean {
-  const tables = files.flatMap(({ path, folder, problem, channels }) => {
-    const unknown = channels.find(({ marginDb }) => marginDb === null);
-    if (unknown) around.error(`${path}: there is no table, since not all is known: ${unknown.reason}\n`);
-    if (!problem?.firmware || channels.length === 0) return [];
-    return firmwareTexts(problem.firmware, channels).map((table) => ({ ...table, known: !unknown, target: isAbsolute(table.path) ? table.path : resolve(folder, table.path) }));
-  });
-  if (tables.length === 0) around.error('ohmward: no description here says where a firmware table goes\n');
-  let good = tables.length > 0;
-  for (const { text, target, known } of tables) {
-    const state = firmwareState(text, presentText(target));
-    if (!known) {
-      good = false;
-    } else if (state === 'foreign') {
-      around.error(`${shownPath(target)}: was not written by ohmward, so it is left as it is\n`);
-      good = false;
-    } else if (write && state !== 'current') {
-      writeWhole(target, text);
-      around.error(`${shownPath(target)}: written\n`);
-    } else if (state !== 'current') {
-      around.error(`${shownPath(target)}: ${state === 'missing' ? 'the table is missing' : 'the table is out of date'}; «ohmward codes --write» writes it\n`);
-      good = false;
+  let asked = false;
+  let good = true;
+  const fail = (message: string): void => {
+    around.error(message);
+    good = false;
+  };
+  /** By place on the disk: who writes there, and what. */
+  const claimed = new Map<string, { readonly path: string; readonly text: string }>();
+  for (const { path, folder, problem, channels, reason } of files) {
+    if (!problem?.firmware) continue;
+    asked = true;
+    const unknown = channels.find(({ marginDb }) => marginDb === null)?.reason;
+    const obstacle = unknown ? `not all is known: ${unknown}` : channels.length === 0 ? reason : firmwareObstacle(channels);
+    if (obstacle !== null) {
+      fail(`${path}: there is no table: ${obstacle}\n`);
+      continue;
+    }
+    for (const table of firmwareTexts(problem.firmware, channels)) {
+      const target = isAbsolute(table.path) ? table.path : resolve(folder, table.path);
+      const other = claimed.get(target);
+      claimed.set(target, other ?? { path, text: table.text });
+      if (other && other.text !== table.text) fail(`${path}: writes another table to ${shownPath(target)} than ${other.path} does; give each its own file\n`);
+      else good = oneTable(target, table.text, write, around) && good;
     }
   }
+  if (!asked) fail('ohmward: no description here says where a firmware table goes\n');
   return good;
+}
+
+function oneTable(target: string, text: string, write: boolean, around: Surroundings): boolean {
+  const shown = shownPath(target);
+  const present = presentText(target);
+  if (present === 'folder') {
+    around.error(`${shown}: is a folder, so no table can be written there\n`);
+    return false;
+  }
+  const state = firmwareState(text, present?.text ?? null);
+  if (state === 'current') return true;
+  if (state === 'foreign') {
+    around.error(`${shown}: was not written by ohmward, so it is left as it is\n`);
+    return false;
+  }
+  if (write) {
+    writeWhole(target, text);
+    around.error(`${shown}: written\n`);
+    return true;
+  }
+  around.error(`${shown}: ${state === 'missing' ? 'the table is missing' : 'the table is out of date'}; «ohmward codes --write» writes it\n`);
+  return false;
 }

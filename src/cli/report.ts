@@ -53,7 +53,9 @@ const words = { missing: 'not written yet', foreign: 'not written by Ohmward', '
 function firmwareViews(problem: Problem, folder: string): FirmwareView[] {
   return firmwareOf(problem).map(({ path, text, reason }) => {
     const target = resolve(folder, path);
-    const state = firmwareState(text ?? '', presentText(target));
+    const present = presentText(target);
+    if (present === 'folder') return { path, text: 'a folder, no file', ok: false, writable: false };
+    const state = firmwareState(text ?? '', present?.text ?? null);
     return { path, text: text === null ? reason : words[state], ok: text !== null && state === 'current', writable: false };
   });
 }

@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto';
-import { mkdirSync, realpathSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
-import { dirname } from 'node:path';
+import { lstatSync, mkdirSync, readlinkSync, realpathSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { dirname, resolve } from 'node:path';
 import { CallError } from './callError';
 
 /**
@@ -10,10 +10,16 @@ import { CallError } from './callError';
 export function writeWhole(path: string, text: string): void {
   try {
     mkdirSync(dirname(path), { recursive: true });
-    writeAt(statSync(path, { throwIfNoEntry: false }) ? realpathSync(path) : path, text);
+    writeAt(placeOf(path), text);
   } catch (error) {
     throw new CallError(`${path}: cannot be written (${(error as NodeJS.ErrnoException).code ?? String(error)})`);
   }
+}
+
+/** Where a link leads, also one to a file that is not there yet; else the path itself. */
+function placeOf(path: string): string {
+  if (statSync(path, { throwIfNoEntry: false })) return realpathSync(path);
+  return lstatSync(path, { throwIfNoEntry: false })?.isSymbolicLink() === true ? resolve(dirname(path), readlinkSync(path)) : path;
 }
 
 function writeAt(path: string, text: string): void {

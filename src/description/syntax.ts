@@ -244,7 +244,7 @@ export interface DescriptionSyntax {
   readonly lets: readonly { readonly name: Located<string>; readonly span: Span }[];
   readonly goals: readonly GoalSyntax[];
   readonly tunables: readonly TunableSyntax[];
-  readonly channels: { readonly span: Span; readonly band: Located<string> | null; readonly ranges: readonly RangeSyntax[]; readonly frequenciesHz: readonly Quantity[] } | null;
+  readonly channels: { readonly span: Span; readonly isEmpty: boolean; readonly band: Located<string> | null; readonly ranges: readonly RangeSyntax[]; readonly frequenciesHz: readonly Quantity[] } | null;
   readonly firmware: { readonly span: Span; readonly header: Located<string> | null; readonly json: Located<string> | null; readonly symbol: Located<string> | null } | null;
   readonly spread: Located<'uniform' | 'normal'> | null;
   readonly builds: Quantity | null;

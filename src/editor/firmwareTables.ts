@@ -58,7 +58,7 @@ export function createFirmwareTables(studies: DocumentStudies, store: FileStore,
     await store.revalidate();
     const files = await look(study);
     const unknown = files.find(({ text }) => text === null);
-    if (unknown) throw new Error(`there is no table, since not all is known: ${unknown.reason}.`);
+    if (unknown) throw new Error(`there is no table: ${unknown.reason}.`);
     const written: string[] = [];
     for (const { path, text, state, reason } of files) {
       if (state === 'foreign') throw new Error(`«${path}» was not written by Ohmward, so it is left as it is.`);
@@ -97,8 +97,8 @@ export function createFirmwareTables(studies: DocumentStudies, store: FileStore,
     }, { providedCodeActionKinds: [vscode.CodeActionKind.QuickFix] }),
   );
   return {
-    view: (document) => (looked.get(document)?.files ?? []).map(({ path, state, text }) => ({
-      path, text: text === null ? 'not all is known' : words[state], ok: state === 'current' && text !== null,
+    view: (document) => (looked.get(document)?.files ?? []).map(({ path, state, text, reason }) => ({
+      path, text: text === null ? reason : words[state], ok: state === 'current' && text !== null,
       writable: vscode.workspace.isTrusted && text !== null && (state === 'missing' || state === 'out of date'),
     })),
     write,

@@ -25,7 +25,7 @@ export function firmwareDiagnostics({ firmware }: Pick<DescriptionSyntax, 'firmw
     const warn = (code: string, message: string): Diagnostic[] => [{ code, severity: 'warning', message, span }];
     if (state === 'unreadable') return [{ code: 'firmware-not-read', severity: 'info', message: `Whether «${path}» is up to date is not known: ${reason}`, span }];
     if (state === 'foreign') return warn('firmware-foreign', `«${path}» was not written by Ohmward, so it is never overwritten. Name another file, or move this one away.`);
-    if (text === null) return warn('firmware-not-known', `There is no table to write to «${path}», since not all is known: ${reason}.`);
+    if (text === null) return warn('firmware-not-known', `There is no table to write to «${path}»: ${reason}.`);
     if (state === 'missing') return warn('firmware-missing', `The firmware's table «${path}» has not been written yet.`);
     return state === 'current' ? [] : warn('firmware-out-of-date', `The firmware's table «${path}» no longer agrees with this description.`);
   });

@@ -51,7 +51,7 @@ const literal = (value: number, type: CType): string => `${value}${type === 'uin
 function fieldNames(tunables: readonly string[]): string[] {
   const taken = new Set(['frequency_hz']);
   return tunables.map((name) => {
-    const plain = name.toLowerCase().replace(/[^a-z0-9_]/g, '_').replace(/^(?=\d)/, '_').slice(0, 56);
+    const plain = name.toLowerCase().replace(/[^a-z0-9_]/g, '_').replace(/^(?=[\d_])/, 't').slice(0, 56);
     const stem = isNameInC(plain) ? plain : `${plain}_`;
     let field = stem;
     for (let n = 2; taken.has(field); n++) field = `${stem}_${n}`;

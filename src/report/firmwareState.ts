@@ -5,13 +5,15 @@ export type FirmwareState = 'missing' | 'foreign' | 'out of date' | 'current';
 const marker = /^\s*(?:\* ohmward-table 1 [0-9a-f]{16}|"ohmward-table": "1 [0-9a-f]{16}",)\s*$/m;
 
 /**
- * `presentText` is null where there is no such file. Blanks and line ends do not count, as formatters and version control
- * change them; anything else does.
+ * `presentText` is null where there is no such file. Blanks between words and beside punctuation do not count, nor do line ends
+ * but for those of the preprocessor, as formatters and version control change them; anything else does.
  */
 export function firmwareState(expectedText: string, presentText: string | null): FirmwareState {
   if (presentText === null) return 'missing';
   if (!marker.test(presentText)) return 'foreign';
-  return withoutBlanks(presentText) === withoutBlanks(expectedText) ? 'current' : 'out of date';
+  return inEssence(presentText) === inEssence(expectedText) ? 'current' : 'out of date';
 }
 
-const withoutBlanks = (text: string): string => text.replace(/^\uFEFF|\s+/g, '');
+const inEssence = (text: string): string => text.replace(/^\uFEFF/, '').split(/\r\n?|\n/)
+  .map((line) => line.trim()).map((line) => (line.startsWith('#') ? `\n${line}\n` : ` ${line} `)).join('')
+  .replace(/[^\S\n]+/g, ' ').replace(/ ?([{}()[\],;:=]) ?/g, '$1').replace(/ ?\n+ ?/g, '\n').trim();

@@ -14,11 +14,19 @@ export function firmwareTexts({ header, json, symbol }: FirmwareTable, channels:
   ];
 }
 
+/** Why channels make no table; null where they do. */
+export function firmwareObstacle(channels: readonly Pick<ChannelFigures, 'frequencyHz'>[]): string | null {
+  const hertz = new Set(channels.map(({ frequencyHz }) => Math.round(frequencyHz)));
+  return hertz.size < channels.length ? 'two channels are less than 1 Hz apart, and the table counts in whole hertz' : null;
+}
+
 /** The same for a whole problem: no text, with a reason, where not all is known that decides the codes. Empty without tunables or `firmware`. */
 export function firmwareOf(problem: Problem): { readonly path: string; readonly text: string | null; readonly reason: string }[] {
   if (!problem.firmware || codesObstacle(problem) !== null) return [];
   const tuned = tuneChannels(problem);
-  const reason = tuned.map(channelObstacle).find((each) => each !== null) ?? null;
-  return firmwareTexts(problem.firmware, tuned.map(({ channel: { frequencyHz }, codes }) => ({ frequencyHz, codes })))
+  const channels = tuned.map(({ channel: { frequencyHz }, codes }) => ({ frequencyHz, codes }));
+  const unknown = tuned.map(channelObstacle).find((each) => each !== null) ?? null;
+  const reason = unknown === null ? firmwareObstacle(channels) : `not all is known: ${unknown}`;
+  return firmwareTexts(problem.firmware, channels)
     .map(({ path, text }) => (reason === null ? { path, text, reason: '' } : { path, text: null, reason }));
 }

@@ -5,7 +5,8 @@ import { impedanceOf, reflectionOf, type Immittance } from '../network/immittanc
 import { identityOf } from './elementIdentity';
 import type { ElementResult } from './evaluation';
 import { orientationOf } from './orientation';
-import { firstMiddle, placeOfBand, stressedBands } from './place';
+import { firstMiddle } from './place';
+import { stressedPlaces } from './stressedPlaces';
 import { sampleLoad } from './sampleCase';
 import type { Sampler } from './sampler';
 import { uncoveredElement } from './uncoveredElement';
@@ -14,9 +15,9 @@ import { worstStress } from './worstStress';
 
 /**
  * The ladder as a table, from the load to the source: what each element is, and what is seen just after it in the first
- * case at the middle of the first band; voltage, current and heat (`stress`) are the worst over the judged bands and all cases.
+ * case at the middle of the first band; voltage, current and heat (`stress`) are the worst over all bands and cases.
  */
-export function elementTable(sampler: Sampler, stress = worstStress(sampler, stressedBands(sampler.problem).map(placeOfBand))): readonly ElementResult[] {
+export function elementTable(sampler: Sampler, stress = worstStress(sampler, stressedPlaces(sampler))): readonly ElementResult[] {
   const { problem, ladder } = sampler;
   const frequencyHz = firstMiddle(problem);
   const point = Float64Array.of(frequencyHz);

@@ -41,6 +41,8 @@ export interface SourcePort {
   readonly impedance: Impedance;
   /** By band name; a frequency in no band takes the band nearest to it on a logarithmic scale. */
   readonly byBand: ReadonlyMap<string, Impedance>;
+  /** The bands among which the nearest is sought, where those of the problem are cut to a channel; absent, the problem's own. */
+  readonly nearestAmong?: readonly Band[];
 }
 
 export interface Band {

@@ -24,7 +24,7 @@ export function sampleSource(source: SourcePort, bands: readonly Band[], frequen
   if (band !== null) return sampleImpedance(source.byBand.get(band) ?? source.impedance, frequencyHz);
   const owners: Impedance[] = [];
   for (let k = 0; k < frequencyHz.length; k++) {
-    const nearest = nearestBand(bands, frequencyHz[k]);
+    const nearest = nearestBand(source.nearestAmong ?? bands, frequencyHz[k]);
     owners.push((nearest && source.byBand.get(nearest.name)) ?? source.impedance);
   }
   return sampleEach(owners, frequencyHz);

@@ -80,7 +80,7 @@ async function main(): Promise<void> {
   const asked = process.argv.slice(2);
   // A desktop editor's window is not ours to drive: there only what the editor's own interface can show is run.
   const possible = scenarios.filter((scenario) => process.env.OHMWARD_EDITOR === undefined || !scenario.needsPage);
-  const chosen = asked.length === 0 ? possible : possible.filter(({ suite }) => asked.includes(suite));
+  const chosen = asked.length === 0 ? possible.filter(({ onlyAsked }) => onlyAsked !== true) : possible.filter(({ suite }) => asked.includes(suite));
   if (chosen.length === 0) throw new Error(`No such suite. There are: ${possible.map(({ suite }) => suite).join(', ')}`);
   await bundle();
   await mkdir(out, { recursive: true });

@@ -10,6 +10,8 @@ export interface Scenario {
   readonly needsPage: boolean;
   /** In the editor's web build, whose extension host has no Node. */
   readonly web?: boolean;
+  /** Runs only where it is asked for by name. */
+  readonly onlyAsked?: boolean;
 }
 
 export const scenarios: readonly Scenario[] = [
@@ -19,4 +21,5 @@ export const scenarios: readonly Scenario[] = [
   { suite: 'loose', what: 'a single file without a folder', opens: 'nothing', trusted: true, loads: 1, needsPage: false },
   { suite: 'untrusted', what: 'a folder that is not trusted', opens: 'folder', trusted: false, loads: 1, needsPage: true },
   { suite: 'web', what: 'the web build, without Node, on a virtual file system', opens: 'nothing', trusted: true, loads: 1, needsPage: true, web: true },
+  { suite: 'timing', what: 'times for the bench', opens: 'folder', trusted: true, loads: 1, needsPage: true, onlyAsked: true },
 ];

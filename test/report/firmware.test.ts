@@ -40,7 +40,7 @@ describe('the firmware table', () => {
       for (unsigned i = 0; i < GATE_CODES_COUNT; i++) {
         const struct gate_codes_row *row = &gate_codes[i];
         printf("%llu %u %u %u %u %lu %lu %u\\n", (unsigned long long)row->frequency_hz, row->antcap, row->bank_2, row->bank_2_2, row->default_,
-               (unsigned long)row->_7th, (unsigned long)row->frequency_hz_2, row->gr__e);
+               (unsigned long)row->t7th, (unsigned long)row->frequency_hz_2, row->gr__e);
       }`);
     assert.deepEqual(printed.trim().split('\n'), table.rows.map(({ frequencyHz, codes }) => [frequencyHz, ...codes].join(' ')));
   });

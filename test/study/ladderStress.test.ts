@@ -217,11 +217,19 @@ describe('stress in goals and in the table', () => {
     const heat = judge(problem, goalOf('dissipation', '<=', 10, { elementName: 'load' })).value;
     assert.equal(found.load?.dissipationW, heat);
   });
-  it('watched bands count only where there is no other', () => {
-    const watched = { ...problem, bands: [problem.bands[2]] };
-    const expected = judge(watched, goalOf('current', '<=', 1, { elementName: 'L1', place: { form: 'band', band: 'seen' } })).value;
-    assert.equal(evaluate(watched).elements[1].rmsCurrentA, expected);
-    assert.notEqual(evaluate(problem).elements[1].rmsCurrentA, expected);
+  it('is the worst of all bands, watched ones too', () => {
+    const inBand = (band: string) => judge(problem, goalOf('current', '<=', 1, { elementName: 'L1', place: { form: 'band', band } })).value!;
+    const worst = Math.max(...problem.bands.map(({ name }) => inBand(name)));
+    assert.equal(worst, inBand('seen'));
+    assert.ok(problem.bands[2].watch);
+    assert.equal(evaluate(problem).elements[1].rmsCurrentA, worst);
+  });
+  it('leaves out a watched band that is not known', () => {
+    const seen = { ...problem, bands: [...problem.bands.slice(0, 2), { ...problem.bands[2], frequencyHz: Float64Array.of(5e9) }] };
+    const file = fileOf(onePort(evenly(0.5e9, 2e9, 16), () => ({ re: 0.1, im: 0 })));
+    const partly = problemOf({ load: { one: file }, ladder, bands: seen.bands });
+    assert.equal(evaluate(partly).elements[1].rmsCurrentA, evaluate({ ...partly, bands: seen.bands.slice(0, 2) }).elements[1].rmsCurrentA);
+    assert.notEqual(evaluate(partly).elements[1].rmsCurrentA, null);
   });
   it('where a case is not known in a band there is no worst, with the reason', () => {
     const partly = problemOf({ load: { one: ohms(80), two: fileOf(onePort(evenly(0.7e9, 0.9e9, 5), () => ({ re: 0.1, im: 0 }))) }, ladder, bands: problem.bands });

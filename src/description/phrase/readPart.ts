@@ -145,7 +145,7 @@ function wordSlip(s: Scanner, kinds: readonly QuantityKind[]): boolean {
   const word = nextWord(s);
   if (!word || word.value.length < 3 || literalAt(s.text, s.at, dimensionsOf(kinds))) return false;
   const near = nearestWord(word.value, ['solve', 'coil', 'tunable', 'pair']);
-  if (!near) return false;
+  if (!near || near === word.value) return false;
   complain(s, 'word-unknown', `«${word.value}» is no value; ${near} was probably meant.`, word.span, [replaceBy(word.span, near)]);
   return true;
 }

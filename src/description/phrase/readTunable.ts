@@ -43,7 +43,12 @@ export function readTunablePhrase(name: Located<string>, phrase: Phrase, context
 export function readTunableRow(code: Phrase, value: Phrase, kind: PartKind | null, context: PhraseContext): { code: Located<number>; part: PartSyntax } | null {
   const number = readCode(code, context);
   const part = readPartPhrase(value, kind, context);
-  return number && part.value.form === 'known' ? { code: number, part } : null;
+  if (part.value.form === 'known') return number && { code: number, part };
+  // What is faulty has been told.
+  if (part.value.form !== 'faulty') {
+    context.report({ code: 'tunable-value', severity: 'error', message: 'A code stands for one value: what is to be solved, another tunable or a winding cannot stand here.', span: part.value.span });
+  }
+  return null;
 }
 
 const codeAtMost = 0xffff_ffff;

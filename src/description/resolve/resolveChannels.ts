@@ -20,6 +20,9 @@ export function resolveChannels(syntax: DescriptionSyntax, bands: readonly Band[
     if (!named || !bands.some((band) => band.name === value)) return increasing(all);
     return increasing(bands.filter((band) => band.name === value).flatMap((band) => [...band.frequencyHz]));
   }
+  const below = [...channels.frequenciesHz, ...channels.ranges.map(({ min }) => min)].filter(({ value }) => !(value > 0));
+  for (const { span } of below) report(problemAt('not-physical', 'A channel lies above 0 Hz.', span));
+  if (channels.isEmpty) report(problemAt('no-channels', 'A list without a channel in it. Name channels, or leave the key out: then the points of all bands are channels.', channels.span));
   const stated = [...channels.frequenciesHz.map((frequency) => frequency.value), ...channels.ranges.flatMap((range) => [...rangePoints(range, 21)])];
   const good = increasing(stated.filter((frequency) => frequency > 0));
   if (good.length > channelsAtMost) {

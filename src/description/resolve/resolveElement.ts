@@ -138,7 +138,7 @@ function resolveTunableBranch(
   }
   const kind = kindOfDesignator(name);
   if (kind && kind !== tunable.kind) {
-    resolution.report(problemAt('kind-mismatch', `«${tunable.name}» is a tunable ${tunable.kind}, and ${name} stands for a ${kind}.`, branch.value.name.span));
+    resolution.report(problemAt('kind-mismatch', `«${tunable.name}» is a tunable ${tunable.kind}, and ${name} stands for ${kind === 'inductor' ? 'an' : 'a'} ${kind}.`, branch.value.name.span));
     return null;
   }
   const element: Element = { form: 'branch', name, orientation, branch: { form: 'part', part: tunable.states[0].part }, pair };

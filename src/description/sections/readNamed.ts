@@ -81,6 +81,7 @@ export function readChannels(entry: TreeEntry, context: SectionContext): Descrip
   }
   return {
     span: node.span,
+    isEmpty: node.form === 'list' && node.items.length === 0,
     band: node.form === 'scalar' ? bands[0] ?? null : null,
     ranges: read.flatMap((channel) => channel?.range ?? []),
     frequenciesHz: read.flatMap((channel) => channel?.frequencyHz ?? []),

@@ -87,11 +87,16 @@ export function readFirmware(entry: TreeEntry, context: SectionContext): Descrip
     if (!node) continue;
     const value = located(node);
     if (name === 'symbol' && !isNameInC(value.value)) {
-      context.report(mistake('bad-symbol', `«${value.value}» cannot be a name in C: letters, digits and _ without a digit first, and no word of the language.`, value.span));
+      context.report(mistake('bad-symbol', `«${value.value}» cannot name the table in C: letters, digits and _, a letter first, and no word of the language or of <stdint.h>.`, value.span));
+      continue;
+    }
+    if (name !== 'symbol' && !/[^./\\\s]/.test(value.value.split(/[/\\]/).at(-1) ?? '')) {
+      context.report(mistake('bad-path', `«${value.value}» names no file that a table could be written to.`, value.span));
       continue;
     }
     found[name] = value;
   }
+  if (found.header && found.header.value === found.json?.value) context.report(mistake('duplicate-file', 'Header and JSON table cannot be one file.', found.json.span));
   if (!found.header && !found.json) context.report(mistake('missing-key', '«firmware» needs «header» or «json»: where the table goes.', entry.key.span));
   return { span: mapping.span, ...found };
 }

@@ -4,7 +4,7 @@ import { readTunablePhrase, readTunableRow } from '../phrase/readTunable';
 import type { FiguresSyntax, TunableSyntax } from '../syntax';
 import type { PartKind } from '../../network/part';
 import type { MappingNode, TreeEntry } from '../tree/treeNode';
-import { atMost, expectMapping, expectScalar, located, reportShape, type SectionContext } from './sectionContext';
+import { atMost, expectMapping, expectScalar, located, mistake, reportShape, type SectionContext } from './sectionContext';
 
 const noFigures: FiguresSyntax = {
   tolerance: null, q: null, qAtHz: null, esrOhm: null, eslH: null, srfHz: null, ratedVoltageV: null, ratedCurrentA: null, ratedPowerW: null,
@@ -25,6 +25,7 @@ export function readTunables(entry: TreeEntry, context: SectionContext): Tunable
 
 function readTable(name: TunableSyntax['name'], node: MappingNode, context: SectionContext): TunableSyntax {
   let kind: PartKind | null = null;
+  if (node.entries.length === 0) context.report(mistake('missing-value', `«${name.value}» has no codes: write a value for each, as in «{0: 1.1 pF, 1: 2.3 pF}».`, node.span));
   const rows = atMost(node.entries, tunableStatesAtMost, 'codes', context).flatMap((entry) => {
     const value = expectScalar(entry, context);
     const row = value && readTunableRow(entry.key.phrase, value.phrase, kind, context);

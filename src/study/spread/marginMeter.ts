@@ -20,6 +20,8 @@ export interface Meter {
   readonly worstDb: number;
   /** The case in which that is; null for a single load. */
   readonly worstCase: string | null;
+  /** Of a tuned ladder: the values of the parts at the channel that is worst. */
+  readonly valuesAtWorst?: Float64Array;
   /** `values` in the order of the tolerated parts. */
   measure(values: Float64Array): void;
 }

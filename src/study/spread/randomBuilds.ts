@@ -28,12 +28,12 @@ export function randomBuilds(parts: readonly ToleratedPart[], { distribution, se
     return radius * Math.cos(angle);
   };
   return (into) => {
-    for (let i = 0; i < parts.length; i++) into[i] = valueAt(parts[i], distribution === 'normal' ? normal() / sigmas : evenly(parts[i], uniform()));
+    for (let i = 0; i < parts.length; i++) into[i] = valueAt(parts[i], distribution === 'normal' ? normal() / sigmas : evenlyAt(parts[i], uniform()));
   };
 }
 
 /** A deviation for which the value, not the side, is uniform over the whole tolerance. */
-function evenly({ tolerance: { up, down } }: ToleratedPart, share: number): number {
+export function evenlyAt({ tolerance: { up, down } }: Pick<ToleratedPart, 'tolerance'>, share: number): number {
   const shift = -down + share * (up + down);
   return shift >= 0 ? (up === 0 ? 0 : shift / up) : shift / down;
 }

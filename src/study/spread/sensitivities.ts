@@ -3,11 +3,10 @@ import { ladderDerivatives } from '../../network/ladderDerivative';
 import { isCondition } from '../marginDb';
 import type { Problem } from '../problem';
 import { studiedLadder } from '../studiedLadder';
-import { codesObstacle } from '../tuning/bestCodes';
 import { aimedGoals } from '../tuning/channelJudgement';
-import { tuneChannels } from '../tuning/tuneChannels';
 import { excessOf } from './excess';
 import { marginMeter } from './marginMeter';
+import { isTuned, tunedWith } from './tunedParts';
 
 /** The change of value that a sensitivity is stated for. */
 const changes = [0.01, -0.01];
@@ -37,9 +36,9 @@ interface ChangedMargins {
 }
 
 function marginsWithChanges(problem: Problem, ladder: readonly Element[]): ChangedMargins[] {
-  if (codesObstacle({ ...problem, ladder }) !== null) return [marginsOf(problem, ladder)];
+  if (!isTuned(problem, ladder)) return [marginsOf(problem, ladder)];
   const isRanked = problem.goals.some((goal) => !isCondition(goal));
-  return tuneChannels({ ...problem, ladder }).flatMap(({ channel, samples }) => {
+  return tunedWith(problem, ladder).flatMap(({ channel, samples }) => {
     const goals = isRanked ? channel.problem.goals : aimedGoals(channel);
     return goals.every(isCondition) ? [] : [marginsOf({ ...channel.problem, goals }, samples.ladder)];
   });

@@ -3,7 +3,7 @@ import { studiedLadder } from '../studiedLadder';
 import { ladderObstacle } from '../obstacles';
 import { meterOf } from './meterOf';
 import { randomBuilds } from './randomBuilds';
-import { toleratedParts } from './toleratedParts';
+import { partsOfBuilds } from './tunedParts';
 import { wilsonInterval } from './wilson';
 
 /** What random builds of one ladder do, as far as they have been made. */
@@ -30,12 +30,12 @@ export interface SpreadRun {
 /** Why there is no spread: something is unsolved or unreadable, or no part has a tolerance. */
 export function spreadObstacle(problem: Problem): string | null {
   const ladder = studiedLadder(problem);
-  return ladderObstacle(ladder) ?? (toleratedParts(ladder).length === 0 ? 'no part has a tolerance' : null);
+  return ladderObstacle(ladder) ?? (partsOfBuilds(problem, ladder).length === 0 ? 'no part has a tolerance' : null);
 }
 
 /** Random builds of the problem's ladder, as many and with the seed that the problem says. Only where there is no `spreadObstacle`. */
 export function spreadOfBuilds(problem: Problem, ladder = studiedLadder(problem)): SpreadRun {
-  const parts = toleratedParts(ladder);
+  const parts = partsOfBuilds(problem, ladder);
   const { builds: wanted, seed } = problem.spread;
   const draw = randomBuilds(parts, problem.spread);
   const meter = meterOf(problem, ladder, parts);

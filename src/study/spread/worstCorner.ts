@@ -2,11 +2,12 @@ import type { PartKind } from '../../network/part';
 import type { Problem } from '../problem';
 import { studiedLadder } from '../studiedLadder';
 import { meterOf } from './meterOf';
-import { toleratedParts, valueAt } from './toleratedParts';
+import { valueAt } from './toleratedParts';
+import { partsOfBuilds } from './tunedParts';
 
 /** The worst of the builds in which every part lies at one end of its tolerance. The worst inside may be worse still. */
 export interface WorstCorner {
-  /** By part, from the load on. */
+  /** By part, from the load on; of a tuned part that at the channel where the margin is worst. */
   readonly values: readonly { readonly name: string; readonly kind: PartKind; readonly value: number }[];
   readonly marginDb: number;
   readonly caseName: string | null;
@@ -19,7 +20,7 @@ export const exactUpTo = 16;
 
 /** Only where there is no `spreadObstacle`. Ties go to the first corner, parts at their lower end counting first. */
 export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): WorstCorner {
-  const parts = toleratedParts(ladder);
+  const parts = partsOfBuilds(problem, ladder);
   const meter = meterOf(problem, ladder, parts);
   const ends = parts.map((part) => [valueAt(part, -1), valueAt(part, 1)]);
   const values = new Float64Array(parts.length);
@@ -31,7 +32,8 @@ export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): 
   const proved = parts.length <= exactUpTo;
   const worst = proved ? worstOfAll(parts.length, at) : worstByFlips(parts.length, at);
   const marginDb = at(worst);
-  return { values: parts.map(({ name, part }, i) => ({ name, kind: part.kind, value: values[i] })), marginDb, caseName: meter.worstCase, proved };
+  const there = meter.valuesAtWorst ?? values;
+  return { values: parts.map(({ name, part }, i) => ({ name, kind: part.kind, value: there[i] })), marginDb, caseName: meter.worstCase, proved };
 }
 
 function worstOfAll(count: number, at: (corner: Uint8Array) => number): Uint8Array {

@@ -4,6 +4,7 @@ import type { Problem } from '../problem';
 import { studiedLadder } from '../studiedLadder';
 import { spreadOfBuilds } from './spreadOfBuilds';
 import { toleratedParts } from './toleratedParts';
+import { setByCodes } from './tunedParts';
 
 /** One part with a tighter tolerance, and the yield that it makes. */
 export interface YieldRemedy {
@@ -21,7 +22,8 @@ const buildsTried = 2_000;
  */
 export function yieldRemedy(problem: Problem, wanted: number, ladder = studiedLadder(problem)): YieldRemedy | null {
   let best: (YieldRemedy & { readonly width: number }) | null = null;
-  const elements = [...new Set(toleratedParts(ladder).map(({ elementIndex }) => elementIndex))];
+  const set = setByCodes(problem);
+  const elements = [...new Set(toleratedParts(ladder).map(({ elementIndex }) => elementIndex))].filter((at) => !set.has(ladder[at].name));
   for (const at of elements) {
     const element = ladder[at];
     if (element.form !== 'branch' || element.branch.form !== 'part') continue;

@@ -27,6 +27,8 @@ const slack = 1e-9;
  */
 export function channelProblems(problem: Problem): readonly ChannelProblem[] {
   const channelsHz = problem.channelsHz ?? new Float64Array(0);
+  // Which band's source a frequency outside of all bands has does not depend on the channel.
+  const source = { ...problem.source, nearestAmong: problem.source.nearestAmong ?? problem.bands };
   const bandsAt = problem.bands.map((band) => pointsByChannel(band.frequencyHz, channelsHz));
   const goalsAt = problem.goals.map(({ place }) =>
     place.form === 'range' ? pointsByChannel(place.frequencyHz, channelsHz)
@@ -43,7 +45,7 @@ export function channelProblems(problem: Problem): readonly ChannelProblem[] {
       if (own) goalIndices.push(g);
       return own ? [own] : [];
     });
-    return { frequencyHz, goalIndices, problem: { ...problem, bands, goals, channelsHz: Float64Array.of(frequencyHz) } };
+    return { frequencyHz, goalIndices, problem: { ...problem, source, bands, goals, channelsHz: Float64Array.of(frequencyHz) } };
   });
 }
 

@@ -4,9 +4,10 @@ import type { Evaluation } from '../evaluation';
 import type { Goal, GoalResult } from '../goal';
 import { judgeGoal } from '../judgeGoal';
 import type { YieldAnswer } from '../judgeYield';
-import { placeOfBand, stressedBands, sweepPlace } from '../place';
+import { sweepPlace } from '../place';
 import type { Problem } from '../problem';
 import { sampler } from '../sampler';
+import { stressedPlaces } from '../stressedPlaces';
 import { traceCase } from '../traceCase';
 import { ladderAtCodes, type TunableCodes } from '../tunableCodes';
 import { notKnown } from '../verdict';
@@ -29,9 +30,8 @@ export function evaluateTuned(problem: Problem, answer: YieldAnswer, markerHz: n
   const samples = sampler(problem, ladderAtCodes(problem, tuned[shown].codes));
   const goals = problem.goals.map((goal, g) => (isJudgedOnce(goal) ? judgeGoal(goal, samples, answer) : overChannels(goal, g, tuned)));
   const sweep = sweepPlace(problem);
-  const stressed = new Set(stressedBands(problem).map(({ name }) => name));
-  const stress = tuned.flatMap(({ channel, samples: own }) => {
-    const places = channel.problem.bands.filter(({ name }) => stressed.has(name)).map(placeOfBand);
+  const stress = tuned.flatMap(({ samples: own }) => {
+    const places = stressedPlaces(own);
     return places.length === 0 ? [] : [worstStress(own, places)];
   });
   return {
