@@ -1,6 +1,8 @@
 import { evaluate } from '../study/evaluate';
+import { tuningInPlacePoints } from '../study/limits';
 import { unsolvedElements } from '../study/obstacles';
 import type { Problem } from '../study/problem';
+import { tuningPoints } from '../study/tuning/tuneChannels';
 import type { Solution, SolveResult } from '../solve/solution';
 import { withLadder } from '../solve/solutionOf';
 import type { Assessment } from './assess';
@@ -14,8 +16,11 @@ export interface SolvedUnknowns {
 /** The solution that stands in for what is left to solve, as long as it is not in the text; null where there is none. */
 export function shownSolution(problem: Problem | null, solved: SolvedUnknowns | null): Solution | null {
   if (problem === null || solved === null || solved.stale || unsolvedElements(problem).length === 0) return null;
-  return solved.result.solutions[0] ?? null;
+  return isQuick(problem) ? solved.result.solutions[0] ?? null : null;
 }
+
+/** False where codes of tunable parts would take so long to seek that nobody who types could wait for the picture of a solution. */
+export const isQuick = (problem: Problem): boolean => tuningPoints(problem) <= tuningInPlacePoints;
 
 /** The problem whose numbers are shown: with the best solution in it where values are left to solve. */
 export function shownProblem(problem: Problem | null, solved: SolvedUnknowns | null): Problem | null {

@@ -2,6 +2,7 @@ import type { Element } from '../network/element';
 import type { Part } from '../network/part';
 import { evaluate } from '../study/evaluate';
 import type { GoalResult } from '../study/goal';
+import { tuningInPlacePoints } from '../study/limits';
 import { isCondition, marginDb } from '../study/marginDb';
 import type { Problem } from '../study/problem';
 import { tuningPoints } from '../study/tuning/tuneChannels';
@@ -13,12 +14,10 @@ export function worstMarginDb(results: readonly GoalResult[]): number | null {
   return known.length === 0 || known.length < margins.length ? null : Math.min(...known);
 }
 
-/** Codes would have to be sought anew for every value: past so many evaluations of one point a hover would take too long. */
-const tuningPointsAtMost = 30_000;
-
 /** The least margin with another part in the place of the one part of an element; null where that cannot be told. */
 export function worstMarginWith(problem: Problem, elementName: string, part: Part): number | null {
-  if (tuningPoints(problem) > tuningPointsAtMost) return null;
+  // Codes would have to be sought anew for every value.
+  if (tuningPoints(problem) > tuningInPlacePoints) return null;
   const ladder = problem.ladder.map((element): Element =>
     element.form === 'branch' && element.name === elementName && element.branch.form === 'part'
       ? { ...element, branch: { form: 'part', part } }

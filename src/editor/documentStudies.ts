@@ -4,11 +4,12 @@ import { latestRunner, type LatestRunner } from '../base/latestRunner';
 import { buildModel } from '../description/buildModel';
 import type { LoadedFile } from '../description/files';
 import { readDescription } from '../description/readDescription';
+import { tuningInPlacePoints } from '../study/limits';
 import { codesObstacle } from '../study/tuning/bestCodes';
 import { giveCodes, tuningPoints } from '../study/tuning/tuneChannels';
 import { fileScope } from './fileAccess';
 import type { FileStore } from './fileStore';
-import { CODES_IN_PLACE_POINTS, MAX_FILES, MAX_LOADING_ROUNDS, MAX_STUDY_DELAY_MS, SMOOTH_STUDY_MS } from './limits';
+import { MAX_FILES, MAX_LOADING_ROUNDS, MAX_STUDY_DELAY_MS, SMOOTH_STUDY_MS } from './limits';
 import type { Log } from './log';
 import { isDescription } from './ranges';
 import type { Tuner } from './tuner';
@@ -70,7 +71,7 @@ export function createDocumentStudies(store: FileStore, tuner: Tuner, log: Log):
     let evaluating = performance.now();
     const model = buildModel(description, files);
     tookMs += performance.now() - evaluating;
-    if (model.problem && tuningPoints(model.problem) > CODES_IN_PLACE_POINTS && codesObstacle(model.problem) === null) {
+    if (model.problem && tuningPoints(model.problem) > tuningInPlacePoints && codesObstacle(model.problem) === null) {
       const codes = await tuner.codes(document, model.problem);
       if (superseded()) return null;
       if (codes === null) throw new Error('the search for codes was stopped');

@@ -40,9 +40,6 @@ export const CANDIDATES = 10;
 /** Builds are studied once nothing has been typed for so long. */
 export const SPREAD_DELAY_MS = 250;
 
-/** Codes that take more evaluations of one point than this (some ten milliseconds) are sought off the extension host's thread. */
-export const CODES_IN_PLACE_POINTS = 30_000;
-
 /** Channels whose coverage is kept for one version of a description. */
 export const COVERAGES_KEPT = 64;
 

@@ -27,7 +27,7 @@ export interface CatalogueTask {
 }
 
 /** A form with fewer items: those of some kinds, which decide what conditions it misses. */
-interface Variant {
+export interface Variant {
   readonly form: Form;
   readonly order: number;
   readonly keep: readonly Int32Array[];
@@ -103,7 +103,7 @@ function withKnownItems(form: Form, slots: SlotTable): Form {
 }
 
 /** The form as a whole where its kinds make no difference to the conditions, else cut by them. */
-function variantsOf(form: Form, order: number, conditions: Conditions): Variant[] {
+export function variantsOf(form: Form, order: number, conditions: Conditions): Variant[] {
   const positions = positionsOf(form);
   const groups = positions.map(({ groups: own }) => [...new Set(own)]);
   const combinations = groups.reduce<number[][]>((all, own) => all.flatMap((each) => own.map((group) => [...each, group])), [[]]);
@@ -141,7 +141,7 @@ function searchVariants(
 }
 
 /** A part that is out is not chosen again; a pair takes two. */
-function isInStock(items: ReturnType<typeof itemsAt>): boolean {
+export function isInStock(items: readonly Item[]): boolean {
   const used = new Map<string, number>();
   for (const { stock, element } of items) {
     if (!stock) continue;

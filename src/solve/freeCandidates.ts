@@ -90,7 +90,7 @@ const trialOfLadder = (ladder: readonly Element[], points: TrialPoints) =>
 const sameValue = 0.01;
 
 /** Of several that ended at the same values the first. */
-function distinct(candidates: readonly Candidate[]): Candidate[] {
+export function distinct(candidates: readonly Candidate[]): Candidate[] {
   const kept: Candidate[] = [];
   for (const each of candidates) if (!kept.some((other) => isSame(each, other))) kept.push(each);
   return kept;

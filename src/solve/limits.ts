@@ -46,3 +46,10 @@ export const localNodes = 10_000_000;
 export const wholeFreeElementsAtMost = 4;
 /** So many places that may stay empty are tried in all combinations; of more, those that leave out, or fit, two at most. */
 export const omissionsAtMost = 8;
+/** With tunable parts in the ladder: evaluations of one point for trying all ladders with all codes … */
+export const tunedPointsAtMost = 200_000_000;
+/** … and starts, and points, of a search that goes one unknown at a time, where that would be more. */
+export const tunedStarts = 8;
+export const tunedLocalPoints = 40_000_000;
+/** Steps of a free value end at this share of it. */
+export const tunedLeastStep = 1e-4;

@@ -24,8 +24,8 @@ export interface Proof {
 
 /** All figures of a ladder that was found, from a whole evaluation of it. */
 export function solutionOf(problem: Problem, solved: readonly SolvedElement[], ladder: readonly Element[], proof: Proof): Solution {
-  // One point is enough of the sweep: only goals and bands are asked for. Tunables stand where the search had them.
-  const evaluation = evaluate({ ...withLadder(problem, ladder), sweepHz: problem.sweepHz.slice(0, 1) }, { codes: new Map() });
+  // One point is enough of the sweep: only goals and bands are asked for.
+  const evaluation = evaluate({ ...withLadder(problem, ladder), sweepHz: problem.sweepHz.slice(0, 1) });
   const { worstReflection, worstGain } = worstOf(problem, evaluation);
   const path = directCurrent('dc path', ladder).met;
   const judgedGoals = evaluation.goals.filter(({ goal }) => goal.quantity !== 'yield');

@@ -1,7 +1,9 @@
 import { decibels } from '../network/figures';
 import type { Goal } from '../study/goal';
 import type { Problem } from '../study/problem';
+import { codeCombinationsAtMost } from '../study/limits';
 import { studiedLadder } from '../study/studiedLadder';
+import { codeSpace, usedTunables } from '../study/tuning/codeSpace';
 import { aimOf, isLossless, type Aim } from './aim';
 import { catalogueCandidates, type Candidate, type CatalogueTask } from './catalogueCandidates';
 import { formsOfChosenQ } from './chosenQ';
@@ -14,6 +16,7 @@ import { twoElementFormsOutOfReach } from './outOfReach';
 import { compareRanked, exactExcess } from './ranking';
 import { defaultTop, type Solution, type SolveOptions, type SolveResult } from './solution';
 import { solutionOf } from './solutionOf';
+import { tunedCandidates } from './tunedCandidates';
 import { betterBuild, withYields } from './yieldOfSolutions';
 
 /**
@@ -43,7 +46,7 @@ export function solveProblem(problem: Problem, options: SolveOptions = {}): Solv
     forms, points: aim.points, conditions: conditionsOf(problem), size: top, nodeLimit: searchNodes,
     onProgress: (share, excess) => options.onProgress?.(share, excess === null ? null : -decibels(excess)),
   };
-  const found = hasFreeValue(forms) ? freeCandidates(search, aim.byDefault) : catalogueCandidates(search);
+  const found = isTuned(problem) ? tunedCandidates(problem, search) : hasFreeValue(forms) ? freeCandidates(search, aim.byDefault) : catalogueCandidates(search);
   // What follows from a chosen Q is not the best of all ladders, unless it matches exactly.
   const candidates = chosen ? found.map((each) => ({ ...each, proved: each.excess <= exactExcess })) : found;
   if (candidates.length === 0) return { ...nothing('no ladder can be built from what is left of the parts'), outOfReach };
@@ -81,6 +84,9 @@ function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, to
   const chosen = yields.filter(({ ladder }) => listed.some((each) => each.ladder === ladder)).slice(0, top);
   return { solutions: chosen, byParts: bests.map((each) => found.get(each.ladder) as Solution) };
 }
+
+/** True where codes set some of the ladder's parts, in a number of combinations that can be tried. */
+const isTuned = (problem: Problem): boolean => usedTunables(problem).length > 0 && (problem.channelsHz?.length ?? 0) > 0 && codeSpace(problem).count <= codeCombinationsAtMost;
 
 const percent = (share: number | null): string => `${((share ?? 0) * 100).toFixed(1)} %`;
 

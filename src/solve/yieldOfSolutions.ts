@@ -1,6 +1,7 @@
 import type { Problem } from '../study/problem';
 import { spreadObstacle, spreadOfBuilds } from '../study/spread/spreadOfBuilds';
 import { checkedPoints } from '../study/spread/goalChecks';
+import { shareCodes } from '../study/tuning/tuneChannels';
 import { quickBuilds, slowBuilds } from './limits';
 import type { Solution } from './solution';
 import { withLadder } from './solutionOf';
@@ -16,7 +17,7 @@ export function withYields(problem: Problem, solutions: readonly Solution[]): So
     const own = withLadder(problem, solution.ladder);
     if (spreadObstacle(own) !== null) return wanted === null ? solution : { ...solution, holds: false, conditionsMissed: solution.conditionsMissed + 1 };
     const builds = Math.min(problem.spread.builds, slow ? slowBuilds : quickBuilds);
-    const run = spreadOfBuilds({ ...own, spread: { ...own.spread, builds } });
+    const run = spreadOfBuilds(shareCodes(own, { ...own, spread: { ...own.spread, builds } }));
     run.more(builds);
     const share = run.result().yield;
     const missed = wanted !== null && share < wanted;

@@ -31,3 +31,5 @@ export const codeSearchStarts = 8;
 export const codeSearchRounds = 50;
 /** Evaluations of one point in a search for the codes of all channels. */
 export const codePointsAtMost = 1 << 26;
+/** Codes that take more evaluations of one point than this (some ten milliseconds) are not sought where somebody types. */
+export const tuningInPlacePoints = 30_000;

@@ -4,7 +4,7 @@ import { elementAt } from '../../assistance/elementAt';
 import { defaultMarkerHz, markerView } from '../../assistance/markerView';
 import { isDrawable, panelView, problemViews } from '../../assistance/panelView';
 import { readMarkerText } from '../../assistance/readMarkerText';
-import { shownProblem, solvedAssessment, type SolvedUnknowns } from '../../assistance/solvedAssessment';
+import { isQuick, shownProblem, solvedAssessment, type SolvedUnknowns } from '../../assistance/solvedAssessment';
 import { setValue, steppedValue } from '../../assistance/steppedValue';
 import { traceView } from '../../assistance/traceViews';
 import { decodeToHost } from '../../messages/decodePanel';
@@ -216,7 +216,7 @@ export function createPanelSession(panel: vscode.WebviewPanel, services: PanelSe
         const solved = solver.latest(document);
         const study = studies.latest(document);
         const solution = solved && study && solved.study.version === study.version ? listedSolutions(solved.result)[message.candidate] : undefined;
-        const traces = solution && study ? (solvedAssessment(study.assessment, solution).evaluation?.traces ?? []).map(traceView) : null;
+        const traces = solution && study?.assessment.model.problem && isQuick(study.assessment.model.problem) ? (solvedAssessment(study.assessment, solution).evaluation?.traces ?? []).map(traceView) : null;
         send({ type: 'preview', document: idOf(document), version: versionOf(study?.version ?? document.version), request: message.request, traces });
         break;
       }

@@ -8,6 +8,8 @@ import type { CodeSpace } from './codeSpace';
 /** A `LadderKernel` that is set by codes: states by the tunables of a code space. */
 export interface CodeKernel extends Pick<LadderKernel, 'reflectionMagnitude' | 'gain'> {
   evaluate(states: Int32Array): void;
+  /** Another element in the place of one that no code sets. */
+  setElement(index: number, element: Element): void;
 }
 
 export function codeKernel(problem: Problem, space: CodeSpace, frequencyHz: Float64Array, source: Immittance, load: Immittance): CodeKernel {
@@ -17,6 +19,7 @@ export function codeKernel(problem: Problem, space: CodeSpace, frequencyHz: Floa
   return {
     reflectionMagnitude: kernel.reflectionMagnitude,
     gain: kernel.gain,
+    setElement: (index, element) => kernel.setElement(index, element),
     evaluate(states) {
       knobs.forEach(({ elementIndices, elements, sameLaw, tunable }, t) => {
         if (current[t] === states[t]) return;

@@ -1,3 +1,4 @@
+import type { Element } from '../../network/element';
 import type { Goal } from '../goal';
 import type { Problem } from '../problem';
 import { excessOf } from '../spread/excess';
@@ -18,6 +19,8 @@ export interface CodeMeter {
    * −10 log10 of it. Infinite where one is not known.
    */
   measure(states: Int32Array, into: Float64Array): void;
+  /** Another element in the place of one that no code sets. */
+  setElement(index: number, element: Element): void;
 }
 
 export function codeMeter(problem: Problem, space: CodeSpace, channels: readonly ChannelProblem[]): CodeMeter {
@@ -36,6 +39,7 @@ export function codeMeter(problem: Problem, space: CodeSpace, channels: readonly
   return {
     others: own.map(({ others }) => others),
     points: frequencyHz.length,
+    setElement: (index, element) => kernel.setElement(index, element),
     measure(states, into) {
       kernel.evaluate(states);
       for (let c = 0; c < views.length; c++) {

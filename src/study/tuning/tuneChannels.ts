@@ -45,6 +45,13 @@ export function tuneChannels(problem: Problem, onProgress: OnProgress = () => un
   return tuned;
 }
 
+/** Takes the codes of a problem that differs in nothing that codes depend on: in its sweep, say, or in how many builds are made. */
+export function shareCodes(from: Problem, to: Problem): Problem {
+  const tuned = known.get(from);
+  if (tuned) known.set(to, tuned);
+  return to;
+}
+
 /** What the search takes, in evaluations of one point: a lower bound, from the numbers of codes, channels and cases alone. */
 export function tuningPoints(problem: Problem): number {
   const space = codeSpace(problem);
