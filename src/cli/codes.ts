@@ -21,6 +21,7 @@ import { writeWhole } from './writeWhole';
 
 interface Coded extends CodedFile {
   readonly folder: string;
+  readonly descriptionText: string;
   readonly problem: Problem | null;
   readonly faulty: boolean;
 }
@@ -59,7 +60,7 @@ function codeFile(path: string, around: Surroundings): Coded {
   around.progress?.('');
   // With values left to solve, tunables in the ladder are waited for in vain; without tunables there is nothing to ask.
   const faulty = problem === null || diagnostics.some(isError) || (reason !== null && problem.tunables.some(({ elements }) => elements.length > 0));
-  return { path: shown, channels, reason, folder: dirname(path), problem, faulty };
+  return { path: shown, channels, reason, folder: dirname(path), descriptionText: description.syntax.text, problem, faulty };
 }
 
 /** True where every table is as it should be in the end. */
@@ -72,7 +73,7 @@ function firmwareFiles(files: readonly Coded[], write: boolean, around: Surround
   };
   /** By place on the disk: who writes there, and what. */
   const claimed = new Map<string, { readonly path: string; readonly text: string }>();
-  for (const { path, folder, problem, channels, reason } of files) {
+  for (const { path, folder, problem, channels, reason, descriptionText } of files) {
     if (!problem?.firmware) continue;
     asked = true;
     const unknown = channels.find(({ marginDb }) => marginDb === null)?.reason;
@@ -81,11 +82,11 @@ function firmwareFiles(files: readonly Coded[], write: boolean, around: Surround
       fail(`${path}: there is no table: ${obstacle}\n`);
       continue;
     }
-    for (const table of firmwareTexts(problem.firmware, channels)) {
+    for (const table of firmwareTexts(problem.firmware, channels, descriptionText)) {
       const target = isAbsolute(table.path) ? table.path : resolve(folder, table.path);
       const other = claimed.get(target);
       claimed.set(target, other ?? { path, text: table.text });
-      if (other && other.text !== table.text) fail(`${path}: writes another table to ${shownPath(target)} than ${other.path} does; give each its own file\n`);
+      if (other && firmwareState(other.text, table.text) !== 'current') fail(`${path}: writes another table to ${shownPath(target)} than ${other.path} does; give each its own file\n`);
       else good = oneTable(target, table.text, write, around) && good;
     }
   }

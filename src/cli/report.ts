@@ -35,7 +35,7 @@ export async function report(paths: readonly string[], options: CallOptions, aro
   return files.every(({ assessment }) => isOk(assessment)) ? 0 : 1;
 }
 
-function contextOf({ model: { problem }, spread, diagnostics }: Assessment, path: string, shown: string, around: Surroundings): PanelContext {
+function contextOf({ description, model: { problem }, spread, diagnostics }: Assessment, path: string, shown: string, around: Surroundings): PanelContext {
   const bare = { fileName: shown, pinned: false, markerHz: null };
   if (!problem) return bare;
   const faulty = diagnostics.some(({ severity, code }) => severity === 'error' && code !== 'unsolved');
@@ -44,14 +44,14 @@ function contextOf({ model: { problem }, spread, diagnostics }: Assessment, path
   return {
     ...bare,
     spread: spread ? { spread, stale: false, cloud: toleranceCloud(problem) } : null,
-    codes: { coverage: markerHz === null || codesObstacle(problem) !== null ? null : coverage(problem, { frequencyHz: markerHz }), firmware: firmwareViews(problem, dirname(path)) },
+    codes: { coverage: markerHz === null || codesObstacle(problem) !== null ? null : coverage(problem, { frequencyHz: markerHz }), firmware: firmwareViews(problem, description.syntax.text, dirname(path)) },
   };
 }
 
 const words = { missing: 'not written yet', foreign: 'not written by Ohmward', 'out of date': 'out of date', current: 'up to date' } as const;
 
-function firmwareViews(problem: Problem, folder: string): FirmwareView[] {
-  return firmwareOf(problem).map(({ path, text, reason }) => {
+function firmwareViews(problem: Problem, descriptionText: string, folder: string): FirmwareView[] {
+  return firmwareOf(problem, descriptionText).map(({ path, text, reason }) => {
     const target = resolve(folder, path);
     const present = presentText(target);
     if (present === 'folder') return { path, text: 'a folder, no file', ok: false, writable: false };

@@ -29,11 +29,11 @@ export function createFirmwareTables(studies: DocumentStudies, store: FileStore,
   const looked = new Map<vscode.TextDocument, { readonly version: number; readonly files: readonly FirmwareFile[] }>();
   const changed = new vscode.EventEmitter<vscode.TextDocument>();
 
-  const look = async ({ document, assessment }: Study): Promise<readonly FirmwareFile[]> => {
+  const look = async ({ document, text: descriptionText, assessment }: Study): Promise<readonly FirmwareFile[]> => {
     const { problem } = assessment.model;
     if (!problem || assessment.diagnostics.some(({ severity, code }) => severity === 'error' && code !== 'unsolved')) return [];
     const scope = fileScope(document);
-    return Promise.all(firmwareOf(problem).map(async ({ path, text, reason }): Promise<FirmwareFile> => {
+    return Promise.all(firmwareOf(problem, descriptionText).map(async ({ path, text, reason }): Promise<FirmwareFile> => {
       const present = await store.loadText(scope, path);
       if (present.form === 'missing') return { path, text, reason, state: text === null ? 'missing' : firmwareState(text, null) };
       if (present.form === 'csv') return { path, text, reason, state: firmwareState(text ?? '', present.text) };

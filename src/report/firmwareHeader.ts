@@ -18,6 +18,7 @@ export function firmwareHeader(table: FirmwareRows): string {
     ' * what is changed by hand here is lost.',
     ' *',
     ` * ohmward-table 1 ${contentOf(table)}`,
+    ...(table.description === null ? [] : [` * ohmward-description ${table.description}`]),
     ' */',
     `#ifndef ${upper}_H`,
     `#define ${upper}_H`,

@@ -8,6 +8,7 @@ export function firmwareJson(table: FirmwareRows): string {
   return [
     '{',
     `  "ohmward-table": "1 ${contentOf(table)}",`,
+    ...(table.description === null ? [] : [`  "ohmward-description": "${table.description}",`]),
     '  "comment": "Codes of the tunable parts by channel; frequencies in Hz. What is changed by hand here is lost.",',
     `  "symbol": ${JSON.stringify(symbol)},`,
     '  "channels": [',

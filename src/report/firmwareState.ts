@@ -1,6 +1,9 @@
 /** How a written table stands to what the description asks for now. */
 export type FirmwareState = 'missing' | 'foreign' | 'out of date' | 'current';
 
+/** Which text of the description it was made from: a text that moves no code leaves the table as it is. */
+const madeFrom = /^\s*(?:\* ohmward-description [0-9a-f]{16}|"ohmward-description": "[0-9a-f]{16}",)\s*$/;
+
 /** The line by which a table is known as written by this tool; only a file with it may be overwritten. */
 const marker = /^\s*(?:\* ohmward-table 1 [0-9a-f]{16}|"ohmward-table": "1 [0-9a-f]{16}",)\s*$/m;
 
@@ -15,5 +18,5 @@ export function firmwareState(expectedText: string, presentText: string | null):
 }
 
 const inEssence = (text: string): string => text.replace(/^\uFEFF/, '').split(/\r\n?|\n/)
-  .map((line) => line.trim()).map((line) => (line.startsWith('#') ? `\n${line}\n` : ` ${line} `)).join('')
+  .map((line) => line.trim()).filter((line) => !madeFrom.test(line)).map((line) => (line.startsWith('#') ? `\n${line}\n` : ` ${line} `)).join('')
   .replace(/[^\S\n]+/g, ' ').replace(/ ?([{}()[\],;:=]) ?/g, '$1').replace(/ ?\n+ ?/g, '\n').trim();

@@ -11,7 +11,7 @@ import { bestCodes } from '../../src/study/tuning/bestCodes';
 import { bankProblem } from '../study/tuning/bank';
 
 const table: FirmwareRows = {
-  symbol: 'gate_codes', tunables: ['antcap', 'Bank 2', 'bank-2', 'default', '7th', 'frequency_hz', 'Größe'],
+  symbol: 'gate_codes', description: '0123456789abcdef', tunables: ['antcap', 'Bank 2', 'bank-2', 'default', '7th', 'frequency_hz', 'Größe'],
   rows: [{ frequencyHz: 863_100_000, codes: [0, 255, 256, 65_535, 65_536, 4_294_967_295, 3] }, { frequencyHz: 5_800_000_000, codes: [31, 0, 0, 0, 0, 0, 0] }],
 };
 
@@ -74,6 +74,8 @@ describe('the firmware table', () => {
       assert.equal(firmwareState(text, text), 'current');
       assert.equal(firmwareState(text, `\uFEFF${text.replace(/\n/g, '\r\n').replace(/ {4}/g, '\t')}`), 'current');
       assert.equal(firmwareState(text, text.replace('65535', '65534')), 'out of date');
+      assert.equal(firmwareState(text, text.replace('0123456789abcdef', 'fedcba9876543210')), 'current');
+      assert.equal(firmwareState(text, text.replace('0123456789abcdef', 'no content')), 'out of date');
       assert.equal(firmwareState(text, text.replace(/ohmward-table/g, 'table')), 'foreign');
       assert.equal(firmwareState(text, ''), 'foreign');
       assert.equal(firmwareState(text, `/* see the ohmward-table 1 ${contentOf(table)} */`), 'foreign');

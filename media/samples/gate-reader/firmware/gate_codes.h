@@ -3,6 +3,7 @@
  * what is changed by hand here is lost.
  *
  * ohmward-table 1 bdedc51c8726f965
+ * ohmward-description 4d0c0c9acebcb521
  */
 #ifndef GATE_CODES_H
 #define GATE_CODES_H
