@@ -16,14 +16,14 @@ export function editDistance(a: string, b: string): number {
 const longestWord = 60;
 
 /**
- * The candidate that was probably meant by `word`: differing in case only, or by about one slip in three characters. Null
+ * The candidate that was probably meant by `word`: differing in case only, or by about one slip in three characters, begun ones counted. Null
  * where none is that near. Of equally near ones the first.
  */
 export function nearestWord(word: string, candidates: readonly string[]): string | null {
   if (word.length > longestWord) return null;
   const lower = word.toLowerCase();
   let best: string | null = null;
-  let least = Math.max(1, Math.floor(word.length / 3)) + 1;
+  let least = Math.max(1, Math.floor((word.length + 2) / 3)) + 1;
   for (const candidate of candidates) {
     if (candidate.length > longestWord) continue;
     const distance = candidate.toLowerCase() === lower ? 0 : editDistance(lower, candidate.toLowerCase());

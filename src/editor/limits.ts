@@ -45,3 +45,6 @@ export const COVERAGES_KEPT = 64;
 
 /** A report waits so long for builds that are being made. */
 export const REPORT_WAITS_MS = 60_000;
+
+/** Files that are offered while one writes where a file's name may stand, and folders that are looked into for them. */
+export const MAX_FILES_NEARBY = 200;

@@ -1,5 +1,6 @@
 import * as vscode from 'vscode';
 import { completionsAt } from '../../assistance/completion';
+import { filesNearby } from '../filesNearby';
 import { guarded, type Assistance } from '../guarded';
 import { DESCRIPTIONS, rangeOf } from '../ranges';
 
@@ -7,9 +8,10 @@ export function registerCompletion(assistance: Assistance): vscode.Disposable {
   return vscode.languages.registerCompletionItemProvider(
     DESCRIPTIONS,
     {
-      provideCompletionItems: (document, position, token) =>
-        guarded(assistance, 'completion', document, token, ({ assessment }) =>
-          completionsAt(assessment, document.offsetAt(position)).map((found, i) => {
+      async provideCompletionItems(document, position, token) {
+        const paths = await filesNearby(document);
+        return guarded(assistance, 'completion', document, token, ({ assessment }) =>
+          completionsAt(assessment, document.offsetAt(position), paths).map((found, i) => {
             const item = new vscode.CompletionItem(found.label);
             item.detail = found.detail;
             item.documentation = new vscode.MarkdownString(found.documentation);
@@ -19,7 +21,8 @@ export function registerCompletion(assistance: Assistance): vscode.Disposable {
             item.sortText = String(i).padStart(5, '0');
             return item;
           }),
-        ),
+        );
+      },
     },
     ' ', ':', '-',
   );

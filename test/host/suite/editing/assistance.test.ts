@@ -139,6 +139,14 @@ describe('what an editor tells about a description', () => {
     }
   });
 
+  it('completes the names of files in the folder', async () => {
+    const editor = await openText('orchard/names.match.yaml', 'ohmward: 1\nbands:\n  up: 863 .. 870 MHz\nload: $0\nladder:\n  - series L1: 3.9 nH\n');
+    await eventually('the files', async () => {
+      const { items } = await ask<vscode.CompletionList>('vscode.executeCompletionItemProvider', editor.document.uri, editor.selection.active);
+      return ['frost-free-air.s1p', 'frost-wet-bark.s1p'].every((name) => items.some(({ label }) => (typeof label === 'string' ? label : label.label) === name));
+    });
+  });
+
   it('completes what may stand at a place', async () => {
     const editor = await openText('orchard/half.match.yaml', 'ohmward: 1\nload: 18 - j37 Ω\nbands:\n  up: 863 .. 870 MHz\nladder:\n  - series L1: 3.9 nH\ngo$0\n');
     // The editor adds words of the text by itself; only ours come with an explanation.
