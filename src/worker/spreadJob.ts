@@ -2,7 +2,7 @@ import { remedyFor, type Spread } from '../assistance/spreadAssessment';
 import type { Problem } from '../study/problem';
 import { spreadOfBuilds } from '../study/spread/spreadOfBuilds';
 import { toleranceCloud, type CloudTrace } from '../study/spread/toleranceCloud';
-import { worstCorner } from '../study/spread/worstCorner';
+import { cornerRun } from '../study/spread/worstCorner';
 
 /** A spread to work out away from the main thread. A newer job takes the place of an older one. */
 export interface SpreadJob {
@@ -17,6 +17,8 @@ export type SpreadAnswer =
   | { readonly type: 'failure'; readonly id: number; readonly message: string };
 
 const firstBuilds = 200;
+/** All corners of a dozen parts are tried before the first answer. */
+const firstCorners = 1 << 12;
 const chunkMs = 20;
 const betweenAnswersMs = 250;
 
@@ -32,23 +34,28 @@ export function answerSpreadJob({ id, problem }: SpreadJob, send: (answer: Sprea
   attempt(() => {
     const run = spreadOfBuilds(problem);
     let more = run.more(firstBuilds);
-    const corner = worstCorner(problem);
+    const corners = cornerRun(problem);
+    let moreCorners = corners.more(firstCorners);
     const cloud = toleranceCloud(problem);
     const tell = (done: boolean) => {
       const builds = run.result();
-      send({ type: 'spread', id, done, spread: { builds, corner, remedy: done ? remedyFor(problem, builds) : null }, cloud });
+      send({ type: 'spread', id, done, spread: { builds, corner: corners.result(), remedy: done ? remedyFor(problem, builds) : null }, cloud });
     };
     let told = performance.now();
     const step = (): void => attempt(() => {
       if (!isLatest()) return;
-      for (const end = performance.now() + chunkMs; more && performance.now() < end;) more = run.more(50);
-      if (!more || performance.now() - told > betweenAnswersMs) {
-        tell(!more);
+      for (const end = performance.now() + chunkMs; (more || moreCorners) && performance.now() < end;) {
+        if (more) more = run.more(50);
+        else moreCorners = corners.more(250);
+      }
+      const done = !more && !moreCorners;
+      if (done || performance.now() - told > betweenAnswersMs) {
+        tell(done);
         told = performance.now();
       }
-      if (more) later(step);
+      if (!done) later(step);
     });
-    tell(!more);
-    if (more) later(step);
+    tell(!more && !moreCorners);
+    if (more || moreCorners) later(step);
   });
 }

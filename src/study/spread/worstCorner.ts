@@ -16,10 +16,21 @@ export interface WorstCorner {
 }
 
 /** All corners are tried up to so many parts. */
-export const exactUpTo = 16;
+export const exactUpTo = 20;
+
+/** Corners tried between two looks at the clock, where nobody waits. */
+const atOnce = 1 << 14;
+
+/** The search for the worst corner, piece by piece: with many parts all corners take seconds. */
+export interface CornerRun {
+  /** Tries so many more corners; false where nothing is left to try. */
+  more(corners: number): boolean;
+  /** Until all have been tried, the worst that going from corner to corner found, or that was tried. */
+  result(): WorstCorner;
+}
 
 /** Only where there is no `spreadObstacle`. Ties go to the first corner, parts at their lower end counting first. */
-export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): WorstCorner {
+export function cornerRun(problem: Problem, ladder = studiedLadder(problem)): CornerRun {
   const parts = partsOfBuilds(problem, ladder);
   const meter = meterOf(problem, ladder, parts);
   const ends = parts.map((part) => [valueAt(part, -1), valueAt(part, 1)]);
@@ -29,26 +40,39 @@ export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): 
     meter.measure(values);
     return meter.worstDb;
   };
-  const proved = parts.length <= exactUpTo;
-  const worst = proved ? worstOfAll(parts.length, at) : worstByFlips(parts.length, at);
-  const marginDb = at(worst);
-  const there = meter.valuesAtWorst ?? values;
-  return { values: parts.map(({ name, part }, i) => ({ name, kind: part.kind, value: there[i] })), marginDb, caseName: meter.worstCase, proved };
+  const all = parts.length <= exactUpTo ? 2 ** parts.length : 0;
+  const corner = new Uint8Array(parts.length);
+  let tried = 0;
+  let worst: Uint8Array | null = null;
+  let least = Infinity;
+  let guess: Uint8Array | null = null;
+  return {
+    more(corners) {
+      for (const end = Math.min(all, tried + corners); tried < end; tried++) {
+        for (let i = 0; i < parts.length; i++) corner[i] = (tried >> (parts.length - 1 - i)) & 1;
+        const margin = at(corner);
+        if (worst !== null && !(margin < least)) continue;
+        least = margin;
+        worst = corner.slice();
+      }
+      return tried < all;
+    },
+    result() {
+      const proved = all > 0 && tried === all;
+      if (!proved) guess ??= worstByFlips(parts.length, at);
+      const chosen = proved || (worst && guess && at(worst) < at(guess)) ? worst : guess;
+      const marginDb = at(chosen ?? corner.fill(0));
+      const there = meter.valuesAtWorst ?? values;
+      return { values: parts.map(({ name, part }, i) => ({ name, kind: part.kind, value: there[i] })), marginDb, caseName: meter.worstCase, proved };
+    },
+  };
 }
 
-function worstOfAll(count: number, at: (corner: Uint8Array) => number): Uint8Array {
-  const corner = new Uint8Array(count);
-  let worst = corner.slice();
-  let least = Infinity;
-  for (let number = 0; number < 2 ** count; number++) {
-    for (let i = 0; i < count; i++) corner[i] = (number >> (count - 1 - i)) & 1;
-    const margin = at(corner);
-    if (margin < least) {
-      least = margin;
-      worst = corner.slice();
-    }
-  }
-  return worst;
+/** All of it at once. */
+export function worstCorner(problem: Problem, ladder = studiedLadder(problem)): WorstCorner {
+  const run = cornerRun(problem, ladder);
+  while (run.more(atOnce));
+  return run.result();
 }
 
 /** From both extreme corners, one part after the other to its worse end, until nothing gets worse. */

@@ -11,7 +11,7 @@ import { sensitivities } from '../../../src/study/spread/sensitivities';
 import { spreadObstacle, spreadOfBuilds, type SpreadOfBuilds } from '../../../src/study/spread/spreadOfBuilds';
 import { toleratedParts, withPartValue } from '../../../src/study/spread/toleratedParts';
 import { wilsonInterval } from '../../../src/study/spread/wilson';
-import { worstCorner } from '../../../src/study/spread/worstCorner';
+import { cornerRun, worstCorner } from '../../../src/study/spread/worstCorner';
 import { yieldRemedy } from '../../../src/study/spread/yieldRemedy';
 
 function problemOf(text: string): Problem {
@@ -169,11 +169,34 @@ describe('the worst corner', () => {
     assert.ok(found.marginDb <= Math.min(...spread({ ...problem, spread: { ...problem.spread, builds: 50 } }).marginsDb));
   });
 
+  const many = (count: number) => problemOf(`load: 40 Ω
+bands:
+  one: 1 GHz
+ladder:
+${Array.from({ length: count }, (_, i) => `  - ${i % 2 ? 'shunt' : 'series'} ${i % 2 ? 'C' : 'L'}${i + 1}: ${i % 2 ? '0.5 pF' : '0.5 nH'} ±5 %`).join('\n')}
+goals:
+  - return loss >= 10 dB
+`);
+
   it('says that it is not proved where there are too many parts to try all', () => {
-    const many = Array.from({ length: 18 }, (_, i) => `  - ${i % 2 ? 'shunt' : 'series'} ${i % 2 ? 'C' : 'L'}${i + 1}: ${i % 2 ? '0.5 pF' : '0.5 nH'} ±5 %`).join('\n');
-    const found = worstCorner(problemOf(`load: 40 Ω\nbands:\n  one: 1 GHz\nladder:\n${many}\ngoals:\n  - return loss >= 10 dB\n`));
+    const found = worstCorner(many(21));
     assert.equal(found.proved, false);
     assert.ok(Number.isFinite(found.marginDb));
+  });
+
+  it('is known piece by piece, never better than it turns out in the end', () => {
+    const run = cornerRun(many(10));
+    const seen: number[] = [];
+    do {
+      const { marginDb: margin, proved } = run.result();
+      assert.equal(proved, false);
+      seen.push(margin);
+    } while (run.more(100));
+    const found = run.result();
+    assert.equal(found.proved, true);
+    assert.deepEqual(found, worstCorner(many(10)));
+    assert.ok(seen.length > 9 && seen.every((margin) => margin >= found.marginDb - 1e-12));
+    assert.equal(run.more(100), false);
   });
 });
 
