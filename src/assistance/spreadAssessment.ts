@@ -16,13 +16,16 @@ export interface Spread {
 }
 
 /** All of it at once: for where nobody waits at a keyboard. Null where there is none (`spreadObstacle`). */
-export function wholeSpread(problem: Problem): Spread | null {
+export function wholeSpread(problem: Problem, onProgress: (share: number) => void = () => undefined): Spread | null {
   if (spreadObstacle(problem) !== null) return null;
   const run = spreadOfBuilds(problem);
-  while (run.more(problem.spread.builds));
+  for (let made = buildsAtOnce; run.more(buildsAtOnce); made += buildsAtOnce) onProgress(made / problem.spread.builds);
   const builds = run.result();
   return { builds, corner: worstCorner(problem), remedy: remedyFor(problem, builds) };
 }
+
+/** Builds between two reports. */
+const buildsAtOnce = 100;
 
 /** The remedy where a lower limit on yield is missed. */
 export function remedyFor(problem: Problem, builds: SpreadOfBuilds): YieldRemedy | null {
@@ -38,9 +41,9 @@ export function wantedYield({ goals }: Pick<Problem, 'goals'>): number | null {
 }
 
 /** With everything, for the command line. */
-export function assessWithSpread(assessment: Assessment): Assessment {
+export function assessWithSpread(assessment: Assessment, onProgress?: (share: number) => void): Assessment {
   const { problem } = assessment.model;
-  return problem ? withSpread(assessment, wholeSpread(problem)) : assessment;
+  return problem ? withSpread(assessment, wholeSpread(problem, onProgress)) : assessment;
 }
 
 /** The assessment with its goals on yield judged by a spread, or with the reason why there is none. */

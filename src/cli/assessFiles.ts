@@ -6,6 +6,7 @@ import { readText } from './assessFile';
 import { assessInWorkers } from './assessInWorkers';
 import { findDescriptions, shownPath } from './findDescriptions';
 import { loadFiles } from './loadFiles';
+import { progressLine } from './progressLine';
 import type { Surroundings } from './runCommandLine';
 
 export interface AssessedFile {
@@ -27,15 +28,19 @@ export async function assessFiles(paths: readonly string[], around: Surroundings
   };
   // The bundle is its own worker; the source, as tests run it, is not.
   const worker = found.length >= worthWorkers && __filename.endsWith('.cjs') ? __filename : null;
+  const report = progressLine(`${found.length} descriptions`, around);
   const assessments = worker === null
     ? found.map((path) => {
         const { description, files } = prepared(path);
         const assessment = assessDescription(description, files);
-        return spread ? assessWithSpread(assessment) : assessment;
+        const report = progressLine(shownPath(path), around);
+        return spread ? assessWithSpread(assessment, (share) => report(share, null)) : assessment;
       })
     : await assessInWorkers(worker, found.length, (index) => {
         const { description, files } = prepared(found[index]);
+        report(index / found.length, null);
         return { text: description.syntax.text, files, expressions: true, spread };
       });
+  around.progress?.('');
   return found.map((path, index) => ({ path, shown: shownPath(path), assessment: assessments[index] }));
 }
