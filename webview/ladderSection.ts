@@ -10,10 +10,22 @@ const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'l
 /** Which columns give way first in a narrow panel. */
 const columnClass = (name: (typeof columns)[number]) => (name === 'current' || name === 'loss' ? 'number widest-only' : name === 'dB per %' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
 
+/** A hand's way for one step of a value. */
+const dragStepPx = 12;
+
 /** Element by element from the load down to the source. Values are typed over or stepped; a row leads to its line. */
 export function ladderSection(controls: Controls, actions: Actions) {
   const fields = new WeakMap<HTMLElement, TextField>();
   let rows: readonly LadderRowView[] = [];
+  /** A value that is being dragged: one step at a time, so that each rests on what the one before made of the text. */
+  let dragged: { readonly id: string; atY: number; wantedSteps: number; isAsked: boolean } | null = null;
+  const stepDragged = () => {
+    if (!dragged || dragged.isAsked || dragged.wantedSteps === 0) return;
+    const direction = dragged.wantedSteps > 0 ? 'up' : 'down';
+    dragged.wantedSteps += direction === 'up' ? -1 : 1;
+    dragged.isAsked = true;
+    actions.stepValue(dragged.id, direction);
+  };
   const mark = notInsertedMark();
   const body = element('tbody');
   const table = element('table', { class: 'ladder' },
@@ -36,6 +48,21 @@ export function ladderSection(controls: Controls, actions: Actions) {
       element('th', { scope: 'row' }, reveal),
       element('td', { class: 'number value' }, element('span', { class: 'shown' }), field.root),
       ...columns.slice(1).map((name) => element('td', { class: columnClass(name) })));
+    const handle = row.querySelector('td.symbol')!;
+    handle.addEventListener('pointerdown', (event) => {
+      if (!(event instanceof PointerEvent) || !row.classList.contains('editable')) return;
+      event.preventDefault();
+      handle.setPointerCapture(event.pointerId);
+      dragged = { id: id(), atY: event.clientY, wantedSteps: 0, isAsked: false };
+    });
+    handle.addEventListener('pointermove', (event) => {
+      if (!(event instanceof PointerEvent) || !dragged || !handle.hasPointerCapture(event.pointerId)) return;
+      const steps = Math.trunc((dragged.atY - event.clientY) / dragStepPx);
+      dragged.atY -= steps * dragStepPx;
+      dragged.wantedSteps += steps;
+      stepDragged();
+    });
+    for (const end of ['pointerup', 'pointercancel']) handle.addEventListener(end, () => { dragged = null; });
     const elementId = () => (row.classList.contains('end') ? null : id());
     row.addEventListener('pointerenter', () => actions.pointAt(elementId()));
     row.addEventListener('pointerleave', () => actions.pointAt(null));
@@ -47,6 +74,7 @@ export function ladderSection(controls: Controls, actions: Actions) {
     const field = fields.get(row)!;
     row.dataset.element = data.id;
     row.classList.toggle('end', data.orientation === 'end');
+    row.classList.toggle('editable', data.editable);
     row.title = data.note;
     setMarkup(row.querySelector('svg')!, ladderSymbol(data));
     setText(row.querySelector('.designator')!, data.name);
@@ -64,6 +92,8 @@ export function ladderSection(controls: Controls, actions: Actions) {
     root,
     update(view: PanelView) {
       rows = view.ladder;
+      if (dragged) dragged.isAsked = false;
+      stepDragged();
       syncList(body, view.ladder, makeRow, updateRow);
       root.hidden = view.ladder.length === 0;
       mark.show(view.notInserted);

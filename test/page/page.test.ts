@@ -193,6 +193,30 @@ describe('the panel’s page', function () {
     await served.page.close();
   });
 
+  it('steps a value by dragging its symbol, one step after each answer', async () => {
+    const served = await openPage('dark', 580);
+    await served.post(viewMessage(sampleView()));
+    const steps = async () => (await served.said()).filter((message) => message.type === 'step value').map((message) => (message.type === 'step value' ? `${message.elementId} ${message.direction}` : ''));
+    const symbol = served.page.locator('tr[data-element="C1"] td.symbol');
+    await symbol.scrollIntoViewIfNeeded();
+    const box = (await symbol.boundingBox())!;
+    await served.page.mouse.move(box.x + 20, box.y + 20);
+    await served.page.mouse.down();
+    await served.page.mouse.move(box.x + 20, box.y - 10);
+    assert.deepEqual(await steps(), ['C1 up']);
+    await served.post(viewMessage(sampleView(), 2));
+    assert.deepEqual(await steps(), ['C1 up', 'C1 up']);
+    await served.post(viewMessage(sampleView(), 3));
+    assert.equal((await steps()).length, 2);
+    await served.page.mouse.move(box.x + 20, box.y + 12);
+    assert.deepEqual((await steps()).at(-1), 'C1 down');
+    await served.page.mouse.up();
+    await served.page.mouse.move(box.x + 20, box.y + 90);
+    await served.post(viewMessage(sampleView(), 4));
+    assert.equal((await steps()).length, 3);
+    await served.page.close();
+  });
+
   it('lets row and arc stand out together, whichever is pointed at', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));
