@@ -3,6 +3,7 @@ import type { Actions } from './actions';
 import type { Controls } from './controls';
 import { element, setText, syncList } from './dom';
 import { previewPicture } from './previewPicture';
+import { reachList } from './reachList';
 
 /** What could be put in the place of the unknown values, best first. A row that is pointed at or has the focus shows its trace. */
 export function candidatesSection(controls: Controls, actions: Actions) {
@@ -16,7 +17,8 @@ export function candidatesSection(controls: Controls, actions: Actions) {
   const picture = previewPicture();
   const list = element('ol', { class: 'candidates' });
   const notes = element('ul', { class: 'candidate-notes', 'aria-label': 'Remarks on the solutions' });
-  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, picture.root, list, notes);
+  const reach = reachList();
+  const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, picture.root, list, notes, reach.root);
   const makeRow = () => {
     const id = () => Number(row.dataset.candidate);
     const insert = controls.button({ label: 'Insert', onPress: () => actions.insertCandidate(id()) });
@@ -63,6 +65,7 @@ export function candidatesSection(controls: Controls, actions: Actions) {
       list.hidden = candidates.candidates.length === 0;
       syncList(notes, candidates.notes, () => element('li'), (item, text) => setText(item, text));
       notes.hidden = candidates.notes.length === 0;
+      reach.update(candidates.outOfReach);
     },
     /** Which candidate's traces are shown beside those of the best. */
     preview: (traces: readonly TraceView[] | null, candidate: number | null) => picture.show(traces ?? [], candidate),

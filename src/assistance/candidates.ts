@@ -1,7 +1,8 @@
-import type { CandidateView, CandidatesView } from '../messages/panel';
+import type { CandidateView, CandidatesView, CoverageView } from '../messages/panel';
 import { decibels, returnLossDb } from '../network/figures';
 import { printNumber } from '../quantity/printQuantity';
-import type { Solution, SolveResult } from '../solve/solution';
+import { depthIn } from '../solve/formReach';
+import type { OutOfReach, Solution, SolveResult } from '../solve/solution';
 import { solvedValue } from './insertSolution';
 
 const dB = (value: number): string => `${printNumber(value, 3)} dB`;
@@ -33,8 +34,21 @@ export function candidatesView(result: SolveResult, options: { readonly stale: b
   return {
     stale: options.stale,
     message: result.reason === null ? '' : `No solution: ${result.reason}.`,
-    notes: [...result.hints, ...result.outOfReach.map(({ form, reason }) => `${form}: out of reach, ${reason}.`)],
+    notes: result.hints,
+    outOfReach: result.outOfReach.map(({ form, reason, reach }) => ({ form, text: `${form}: out of reach, ${reason}.`, reach: reach ? reachView(form, reach) : null })),
     candidates: [...solutions, ...others].map((solution, id) => candidateView(solution, id, byParts.includes(solution))),
+  };
+}
+
+/** Grid over the chart, as coverage has it; what counts is where it passes 0. */
+const reachAcross = 41;
+
+function reachView(form: string, { region, load }: NonNullable<OutOfReach['reach']>): CoverageView {
+  const at = (i: number): number => -1 + (2 * i) / (reachAcross - 1);
+  return {
+    text: `Loads that ${form} matches`, across: reachAcross,
+    marginDb: Array.from({ length: reachAcross ** 2 }, (_, i) => Math.round(1e3 * depthIn(region, { re: at(i % reachAcross), im: at(Math.floor(i / reachAcross)) })) / 1e3),
+    cases: [{ caseName: 'load', text: 'out of reach', holds: false, reflection: load }],
   };
 }
 

@@ -80,7 +80,7 @@ function candidatesOf({ diagnostics }: Assessment, { solved, solving }: PanelCon
   const message = solving ? 'The values are being worked out …'
     : diagnostics.some(({ severity }) => severity === 'error') ? 'The values are worked out as soon as the text has no errors.'
       : 'The solver stopped before it had an answer; the log says why.';
-  return { ...(solved ? candidatesView(solved.result, { stale: true }) : { stale: true, notes: [], candidates: [] }), message };
+  return { ...(solved ? candidatesView(solved.result, { stale: true }) : { stale: true, notes: [], outOfReach: [], candidates: [] }), message };
 }
 
 function goalView(result: GoalResult, id: number, problem: Problem): GoalView {

@@ -23,15 +23,17 @@ const row = shape<LadderRowView>({
 const candidate = shape<CandidateView>({
   id: whole, values: text, holds: flag, margin: text, returnLoss: text, gain: text, parts: text, response: text, directCurrent: text, proof: text, note: text,
 });
-const candidates = shape<CandidatesView>({ stale: flag, message: text, notes: listOf(text), candidates: listOf(candidate) });
+const coverage = shape<CoverageView>({
+  text, across: whole, marginDb: maybeNumbers, cases: listOf(shape<CoverageView['cases'][number]>({ caseName: text, text, holds: flag, reflection: orNull(point) })),
+});
+const candidates = shape<CandidatesView>({
+  stale: flag, message: text, notes: listOf(text), outOfReach: listOf(shape<CandidatesView['outOfReach'][number]>({ form: text, text, reach: orNull(coverage) })), candidates: listOf(candidate),
+});
 const spread = shape<SpreadView>({
   stale: flag, share: number, yieldText: text, goalsText: text, cornerText: text, remedyText: text, cornerDb: orNull(number),
   bars: listOf(shape<SpreadView['bars'][number]>({ fromDb: number, toDb: number, count: whole })), cloud: listOf(points),
 });
 const channel = shape<ChannelView>({ frequencyHz: number, text, codes: listOf(whole), margin: text, marginDb: orNull(number), holds: flag, returnLoss: text, gain: text });
-const coverage = shape<CoverageView>({
-  text, across: whole, marginDb: maybeNumbers, cases: listOf(shape<CoverageView['cases'][number]>({ caseName: text, text, holds: flag, reflection: orNull(point) })),
-});
 const codes = shape<CodesView>({
   summary: text, tunables: listOf(shape<CodesView['tunables'][number]>({ name: text, low: whole, high: whole })), channels: listOf(channel), shown: whole, stepsText: text, proof: text,
   firmware: listOf(shape<FirmwareView>({ path: text, text, ok: flag, writable: flag })), coverage: orNull(coverage), coverageText: text,

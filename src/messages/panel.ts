@@ -147,6 +147,8 @@ export interface CandidatesView {
   /** Why there is none, or that it is being solved; empty otherwise. */
   readonly message: string;
   readonly notes: readonly string[];
+  /** Forms that cannot make the match: why, and the loads that they do match where that can be drawn. */
+  readonly outOfReach: readonly { readonly form: string; readonly text: string; readonly reach: CoverageView | null }[];
   readonly candidates: readonly CandidateView[];
 }
 

@@ -12,9 +12,9 @@ const highestDb = 12;
 
 /**
  * The loads that some code brings to the goals, hatched, with the load cases, as the content of an SVG with `chartViewBox`. `id` keeps the
- * names of its patterns apart from those of other pictures on the page.
+ * names of its patterns apart from those of other pictures on the page; `markRadius` is in the chart's units.
  */
-export function coverageChart({ across, marginDb, cases }: CoverageView, id: string): string {
+export function coverageChart({ across, marginDb, cases }: CoverageView, id: string, markRadius = 5): string {
   const levels = marginDb.map((margin) => Math.min(Math.max(margin ?? deepestDb, deepestDb), highestDb));
   const [covered] = contours().size([across, across]).thresholds([0])(levels);
   const defs = tag('defs', {}, tag('pattern', { id: `${id}-hatch`, width: 7, height: 7, patternUnits: 'userSpaceOnUse', patternTransform: 'rotate(45)' }, tag('line', { class: 'hatch', x1: 0, y1: 0, x2: 0, y2: 7 }))
@@ -25,15 +25,15 @@ export function coverageChart({ across, marginDb, cases }: CoverageView, id: str
   const region = border === '' ? '' : tag('g', { 'clip-path': `url(#${id}-rim)` },
     tag('path', { class: 'covered', d: border, fill: `url(#${id}-hatch)`, 'fill-rule': 'evenodd' }));
   const known = cases.flatMap(({ caseName, text, holds, reflection }, at) => (reflection ? [{ caseName, text, holds, reflection, at }] : []));
-  const marks = known.map(({ caseName, text, holds, reflection: { re, im }, at }) => caseMark(chartX(re), chartY(im), holds, caseClass(at), `${caseName}: ${text}`));
+  const marks = known.map(({ caseName, text, holds, reflection: { re, im }, at }) => caseMark(chartX(re), chartY(im), holds, caseClass(at), `${caseName}: ${text}`, markRadius));
   const labels = placeLabels(known.map(({ caseName, reflection: { re, im } }) => ({ x: chartX(re), y: chartY(im), text: caseName })), chartBox, [])
     .map(({ x, y, anchor, text }) => textTag({ class: 'designator', x, y, 'text-anchor': anchor }, text));
   return defs + chartGrid() + region + marks.join('') + labels.join('');
 }
 
 /** A dot where the load is covered, a cross where it is not. */
-function caseMark(x: number, y: number, holds: boolean, name: string, title: string): string {
+function caseMark(x: number, y: number, holds: boolean, name: string, title: string, r: number): string {
   const content = tag('title', {}, escapeText(title));
-  return holds ? tag('circle', { class: `marker-dot ${name}`, cx: x, cy: y, r: 5 }, content)
-    : tag('path', { class: `case-cross ${name}`, d: `M${round(x - 5)} ${round(y - 5)}l10 10m0 -10l-10 10` }, content);
+  return holds ? tag('circle', { class: `marker-dot ${name}`, cx: x, cy: y, r }, content)
+    : tag('path', { class: `case-cross ${name}`, d: `M${round(x - r)} ${round(y - r)}l${2 * r} ${2 * r}m0 ${-2 * r}l${-2 * r} ${2 * r}` }, content);
 }

@@ -42,10 +42,16 @@ export function ladderTable(rows: readonly LadderRowView[]): string {
   return table([{ head: '' }, { head: 'element', left: true }, { head: '' }, ...['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'loss', 'dB per %'].map((head) => ({ head }))], body);
 }
 
-export function candidatesTable({ message, notes, candidates }: CandidatesView): string {
+export function candidatesTable({ message, notes, outOfReach, candidates }: CandidatesView, id: string): string {
   const rows = candidates.map(({ values, holds, margin, returnLoss, gain, parts, response, directCurrent, note, proof }) =>
     `<tr>${cell(values)}${cell(`${holds ? '✓' : '✗'} ${margin}`, holds ? 'ok' : 'no')}${[returnLoss, gain, parts, response, directCurrent].map((text) => cell(text)).join('')}${cell([note, proof].filter((text) => text !== '').join(' · '), 'left')}</tr>`);
-  return `<h2>Candidates</h2>${paragraphs([message])}${rows.length === 0 ? '' : table([{ head: 'values' }, ...['margin', 'worst return loss', 'worst gain', 'parts', 'response', 'direct current'].map((head) => ({ head })), { head: 'remark', left: true }], rows)}${notes.length === 0 ? '' : `<ul class="soft">${notes.map((text) => `<li>${escapeText(text)}</li>`).join('')}</ul>`}`;
+  return `<h2>Candidates</h2>${paragraphs([message])}${rows.length === 0 ? '' : table([{ head: 'values' }, ...['margin', 'worst return loss', 'worst gain', 'parts', 'response', 'direct current'].map((head) => ({ head })), { head: 'remark', left: true }], rows)}${notes.length === 0 ? '' : `<ul class="soft">${notes.map((text) => `<li>${escapeText(text)}</li>`).join('')}</ul>`}${reachOf(outOfReach, id)}`;
+}
+
+function reachOf(forms: CandidatesView['outOfReach'], id: string): string {
+  const items = forms.map(({ text, reach }, at) =>
+    `<li>${reach ? picture('reach', chartViewBox, coverageChart(reach, `${id}-reach-${at}`, 18), `Smith chart. ${reach.text}, hatched; the load lies outside.`) : ''}<span>${escapeText(text)}</span></li>`);
+  return items.length === 0 ? '' : `<h3>Forms out of reach; hatched are the loads that each does match</h3><ul class="reaches">${items.join('')}</ul>`;
 }
 
 export function codesSection(codes: CodesView, id: string): string {

@@ -20,7 +20,7 @@ export function solveJson(files: readonly SolvedFile[]): object {
       solutions: result.solutions.map(solutionJson),
       ...(result.reason === null ? {} : { reason: result.reason }),
       ...(result.hints.length === 0 ? {} : { hints: result.hints }),
-      ...(result.outOfReach.length === 0 ? {} : { outOfReach: result.outOfReach }),
+      ...(result.outOfReach.length === 0 ? {} : { outOfReach: result.outOfReach.map(({ form, reason }) => ({ form, reason })) }),
     })),
   };
 }

@@ -20,14 +20,16 @@ export function formReach({ first, kinds }: TwoElementForm, source: Complex, z0O
 }
 
 /** True for points of the chart (|w| ≤ 1) inside. */
-export function inReach(reach: Reach, point: Complex): boolean {
-  return reach.some((piece) => piece.every((region) => inRegion(region, point)));
-}
+export const inReach = (reach: Reach, point: Complex): boolean => depthIn(reach, point) >= 0;
 
-function inRegion(region: Region, { re, im }: Complex): boolean {
-  if (region.form === 'half-plane') return re * region.normal.re + im * region.normal.im <= region.offset;
+/** How deep a point lies inside, 0 on the border and below it outside; near the border the distance from it. */
+export const depthIn = (reach: Reach, point: Complex): number =>
+  reach.reduce((most, piece) => Math.max(most, piece.reduce((least, region) => Math.min(least, depthInRegion(region, point)), Infinity)), -Infinity);
+
+function depthInRegion(region: Region, { re, im }: Complex): number {
+  if (region.form === 'half-plane') return region.offset - re * region.normal.re - im * region.normal.im;
   const distance = Math.hypot(re - region.centre.re, im - region.centre.im);
-  return region.form === 'inside' ? distance <= region.radius : distance >= region.radius;
+  return region.form === 'inside' ? region.radius - distance : distance - region.radius;
 }
 
 /** `y` is the source's admittance times z0. */

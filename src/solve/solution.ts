@@ -1,6 +1,8 @@
+import type { Complex } from '../network/complex';
 import type { Element, Orientation } from '../network/element';
 import type { Part } from '../network/part';
 import type { Response } from './response';
+import type { Reach } from './formReach';
 
 /** What was put in the place of one unknown, or of one position of a ladder that was found as a whole. */
 export interface SolvedElement {
@@ -52,6 +54,8 @@ export interface Solution {
 export interface OutOfReach {
   readonly form: string;
   readonly reason: string;
+  /** For two elements: the loads that the form does match at that frequency, and where the load lies, on the chart against z0. */
+  readonly reach?: { readonly region: Reach; readonly load: Complex };
 }
 
 export interface SolveResult {

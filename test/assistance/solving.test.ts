@@ -103,7 +103,8 @@ describe('solving in the editor', () => {
     assert.match(String(one?.note), /best of 1 part/);
     const none = candidatesView({ ...result, solutions: [], byParts: [], reason: 'an invented reason', hints: ['An invented hint.'], outOfReach: [{ form: 'series C, shunt C', reason: 'an invented one' }] }, { stale: true });
     assert.equal(none.message, 'No solution: an invented reason.');
-    assert.deepEqual(none.notes, ['An invented hint.', 'series C, shunt C: out of reach, an invented one.']);
+    assert.deepEqual(none.notes, ['An invented hint.']);
+    assert.deepEqual(none.outOfReach, [{ form: 'series C, shunt C', text: 'series C, shunt C: out of reach, an invented one.', reach: null }]);
   });
 
   it('says how far it is', () => {

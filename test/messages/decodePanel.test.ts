@@ -14,7 +14,7 @@ const view: PanelView = {
   ladder: [{ id: 'L1', name: 'L1', orientation: 'series', symbol: 'inductor', value: '13 nH', reactance: '+j70.8 Ω', impedanceAfter: '18.0 + j2.0 Ω', voltage: '1 V', current: '20 mA', heat: '1 mW', loss: '4 %', sensitivity: '0.1', note: '', line: 20, editable: true }],
   notInserted: true,
   spread: { stale: false, share: 1, yieldText: '97 %', goalsText: 'by goal', cornerText: 'worst corner', remedyText: '', cornerDb: -1, bars: [{ fromDb: 0, toDb: 1, count: 3 }], cloud: [{ re: [0.1, null], im: [0.2, null] }] },
-  candidates: { stale: false, message: '', notes: ['an invented remark'], candidates: [{ id: 0, values: 'L1 13 nH', holds: true, margin: '1 dB', returnLoss: '15 dB', gain: '−0.5 dB', parts: '1', response: 'low-pass', directCurrent: 'passes', proof: 'proved', note: '' }] },
+  candidates: { stale: false, message: '', notes: ['an invented remark'], outOfReach: [{ form: 'series L, shunt C', text: 'out of reach', reach: { text: 'loads', across: 2, marginDb: [null, 1, -2, null], cases: [] } }], candidates: [{ id: 0, values: 'L1 13 nH', holds: true, margin: '1 dB', returnLoss: '15 dB', gain: '−0.5 dB', parts: '1', response: 'low-pass', directCurrent: 'passes', proof: 'proved', note: '' }] },
   codes: {
     summary: 'every goal holds', tunables: [{ name: 'bank', low: 0, high: 3 }], channels: [{ frequencyHz: 866e6, text: '866 MHz', codes: [2], margin: '1 dB', marginDb: 1, holds: true, returnLoss: '14 dB', gain: '−0.5 dB' }], shown: 0,
     stepsText: 'one code off', proof: 'proved', firmware: [{ path: 'codes.h', text: 'out of date', ok: false, writable: true }], coverageText: '',

@@ -3,7 +3,7 @@ import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import type { ToHost } from '../../src/messages/panel';
 import { openPage, startPages, stopPages, type ServedPage } from './servedPage';
-import { codesSample, sampleView, spreadSample, unsolvedView, viewMessage } from './sampleView';
+import { codesSample, sampleView, spreadSample, unsolvedView, viewMessage, wholeLadderView } from './sampleView';
 import { bodyClass, type ThemeKind } from './themes';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
@@ -193,6 +193,22 @@ describe('the panel’s page', function () {
     await served.page.close();
   });
 
+  it('draws what forms out of reach do match', async () => {
+    const served = await openPage('light', 580);
+    const view = wholeLadderView();
+    await served.post(viewMessage(view));
+    const forms = view.candidates!.outOfReach;
+    assert.ok(forms.length > 0 && forms.length < 8);
+    await served.page.locator('.reach summary').click();
+    assert.equal(await served.page.locator('svg.reach-chart .covered').count(), forms.length);
+    assert.equal(await served.page.locator('svg.reach-chart .case-cross').count(), forms.length);
+    assert.deepEqual(await served.page.locator('.out-of-reach li span').allInnerTexts(), forms.map(({ text }) => text));
+    assert.deepEqual(await served.violations(), []);
+    await served.post(viewMessage(unsolvedView().view, 2));
+    assert.ok(await served.page.locator('.reach').isHidden());
+    await served.page.close();
+  });
+
   it('steps a value by dragging its symbol, one step after each answer', async () => {
     const served = await openPage('dark', 580);
     await served.post(viewMessage(sampleView()));
@@ -338,7 +354,7 @@ describe('the panel’s page', function () {
   for (const width of [320, 580, 1000]) {
     it(`fits ${width} px without scrolling the page sideways`, async () => {
       const served = await openPage('dark', width);
-      for (const [version, view] of [sampleView(), spreadSample(), unsolvedView().view, codesSample()].entries()) {
+      for (const [version, view] of [sampleView(), spreadSample(), unsolvedView().view, codesSample(), wholeLadderView()].entries()) {
         await served.post(viewMessage(view, version + 1));
         assert.ok((await served.page.evaluate(() => globalThis.document.documentElement.scrollWidth)) <= width);
       }

@@ -6,7 +6,7 @@ import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { reportHtml } from '../../src/report/reportHtml';
 import { openBlank, startPages, stopPages } from './servedPage';
-import { codesSample, spreadSample, unsolvedView } from './sampleView';
+import { codesSample, spreadSample, unsolvedView, wholeLadderView } from './sampleView';
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
 
@@ -24,7 +24,7 @@ describe('the report in a browser', function () {
   });
 
   it('opens from the disk, asks for nothing else, and has nothing that axe finds serious', async () => {
-    const views = [codesSample(), spreadSample(), unsolvedView().view];
+    const views = [codesSample(), spreadSample(), unsolvedView().view, wholeLadderView()];
     const file = join(folder, 'report.html');
     writeFileSync(file, reportHtml([...views.map((view) => ({ path: view.fileName, view, messages: [] })), { path: 'broken.match.yaml', view: null, messages: ['an <invented> message'] }]));
     const page = await openBlank(900);
@@ -35,7 +35,7 @@ describe('the report in a browser', function () {
     await page.goto(pathToFileURL(file).href);
     assert.deepEqual(asked, [pathToFileURL(file).href]);
     assert.deepEqual(told, []);
-    assert.equal(await page.locator('h1').count(), 4);
+    assert.equal(await page.locator('h1').count(), 5);
     assert.equal(await page.locator('script').count(), 0);
     assert.match(await page.locator('body').innerText(), /an <invented> message/);
     assert.ok(await page.evaluate(() => globalThis.document.documentElement.scrollWidth <= 900));

@@ -32,6 +32,13 @@ export function unsolvedView(stale = false): { readonly view: PanelView; readonl
   return { view, previews: solvedAssessment(assessment, result.solutions[1]).evaluation!.traces.map(traceView) };
 }
 
+/** A whole ladder of two elements, and the forms that cannot make it. */
+export function wholeLadderView(): PanelView {
+  const assessment = sampleAssessment((text) => text.replace(/ladder:\n(?: {2}-.*\n)+/, 'ladder: solve up to 2 elements from coils, caps\n'));
+  const result = solveProblem(assessment.model.problem!, { top: 3 });
+  return panelView(assessment, { fileName: 'frost.match.yaml', pinned: false, markerHz: null, solved: { result, stale: false } })!;
+}
+
 /** The sample with what its builds do. */
 export function spreadSample(stale = false): PanelView {
   const assessment = sampleAssessment((text) => text.replace('  - dc block', '  - dc block\n  - yield >= 95 %'));
