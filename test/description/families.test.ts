@@ -109,6 +109,12 @@ describe('a drawer', () => {
     assert.match(toldOf('kind,value\nL,"1" nH\n').join(), /quotation mark/);
   });
 
+  it('keeps the rows around one whose quotes are wrong', () => {
+    const content = 'kind,value\nL,1 nH\nL,"2" nH\nL,3 nH\nL,"4 nH\n';
+    assert.deepEqual(toldOf(content).map((message) => /line (\d)/.exec(message)?.[1]), ['3', '5']);
+    assert.deepEqual(model(withDrawer, drawer(content)).problem?.families[0].members.map(({ part }) => part.value), [1e-9, 3e-9]);
+  });
+
   it('finds a part by its designation, of rows with one value the first', () => {
     const text = `${head}ladder:\n  - series L1: 3.3 nH from drawer\n  - series L2: 3.3 nH from drawer part B2\n  - series L3: 3.3 nH from drawer part B3\n  - series L4: 4.7 nH from drawer part B2\nparts:\n  drawer: stock.csv\n`;
     const { problem, diagnostics } = model(text, drawer('kind,value,q,part\nL,3.3 nH,40,B1\nL,3.3 nH,60,B2\n'));

@@ -43,6 +43,7 @@ export function readDrawer(path: Located<string>, text: string, familyFigures: F
     tell(parsed.line, `${parsed.message}.`);
     return null;
   }
+  for (const { line, message } of parsed.mistakes) tell(line, `${message}.`);
   const [header, ...rows] = parsed.rows;
   const order = header && readHeader(header, tell);
   if (!order) {
