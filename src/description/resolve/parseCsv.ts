@@ -19,21 +19,24 @@ export type CsvResult = { readonly ok: true; readonly rows: readonly CsvRow[]; r
 export function parseCsv(text: string): CsvResult {
   if (text.length > csvTextAtMost) return { ok: false, message: `more than ${csvTextAtMost} characters`, line: null };
   const mistakes: CsvMistake[] = [];
-  const mistake = (error: CsvError): CsvMistake =>
-    ({ message: csvMessages[error.code] ?? 'not a row as RFC 4180 describes it', line: 'lines' in error && typeof error.lines === 'number' ? error.lines : null });
-  // An open quotation mark is found twice: at the line where it stands, and at the end.
-  const note = (found: CsvMistake): void => { if (mistakes.at(-1)?.line !== found.line) mistakes.push(found); };
-  try {
-    const records: unknown = parse(text, { bom: true, relax_column_count: true, skip_empty_lines: true, info: true, record_delimiter: ['\r\n', '\n', '\r'],
-      skip_records_with_error: true, on_skip: (error) => void (error && note(mistake(error))),
-    });
-    const rows = (records as { record: string[]; info: { lines: number } }[]).map(({ record, info }) => ({ line: info.lines, cells: record.map((cell) => cell.trim()) }));
-    return { ok: true, rows: rows.filter((row) => row.cells.some((cell) => cell !== '')), mistakes };
-  } catch (error) {
-    if (!(error instanceof CsvError)) throw error;
-    return { ok: false, ...mistake(error) };
-  }
+  const tell = (error: CsvError, line: number | null): void =>
+    void mistakes.push({ message: csvMessages[error.code] ?? 'not a row as RFC 4180 describes it', line: line ?? ('lines' in error && typeof error.lines === 'number' ? error.lines : null) });
+  // First with quotation marks wherever they stand, so that a wrong one takes no other row with it; then each row as it should be.
+  const records = parse(text, { ...form, relax_quotes: true, raw: true, skip_records_with_error: true, on_skip: (error) => { if (error) tell(error, null); } }) as unknown as { raw: string; record: string[]; info: { lines: number } }[];
+  const rows = records.flatMap(({ raw, record, info: { lines } }): CsvRow[] => {
+    try {
+      if (raw.includes('"')) parse(raw, form);
+    } catch (error) {
+      if (!(error instanceof CsvError)) throw error;
+      tell(error, lines);
+      return [];
+    }
+    return [{ line: lines, cells: record.map((cell) => cell.trim()) }];
+  });
+  return { ok: true, rows: rows.filter((row) => row.cells.some((cell) => cell !== '')), mistakes: mistakes.sort((a, b) => (a.line ?? 0) - (b.line ?? 0)) };
 }
+
+const form = { bom: true, relax_column_count: true, skip_empty_lines: true, info: true, record_delimiter: ['\r\n', '\n', '\r'] };
 
 const csvMessages: Readonly<Partial<Record<string, string>>> = {
   CSV_QUOTE_NOT_CLOSED: 'a quotation mark is never closed',
