@@ -10,7 +10,8 @@ const withSigns = (text: string) => text.replace(/>=/g, '≥').replace(/<=/g, '�
 
 /** `return loss ≥ 12 dB` */
 export function goalTitle(goal: Goal): string {
-  return withSigns(parts(goal)[0]);
+  // A comma that does not belong there is told of apart.
+  return withSigns(parts(goal)[0]).replace(/[\s,;]+$/, '');
 }
 
 /** `uplink`, `2 × uplink into 50 Ω`; empty where the goal names no place. */
