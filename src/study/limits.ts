@@ -19,7 +19,7 @@ export const bandwidthPrecision = 1e-9;
 /** |Γ| this near to 1 is a rounded 1: total reflection. */
 export const totalReflectionSlack = 1e-12;
 /** All codes are tried while a channel has at most so many combinations; past it they are searched one tunable at a time. */
-export const codeCombinationsAtMost = 1 << 20;
+export const codeCombinationsAtMost = 1 << 22;
 /** Margins that are held at once while all codes of several channels are tried. */
 export const heldMarginsAtMost = 1 << 22;
 /** Combinations of codes that are judged as a whole, over all channels, where a goal needs more than reflection and gain … */
