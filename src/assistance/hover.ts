@@ -5,6 +5,7 @@ import type { Assessment } from './assess';
 import { nameAtOffset } from './definition';
 import { goalHover, bandHover } from './hoverGoals';
 import { elementHover } from './hoverElement';
+import { channelsHover, tunableHover } from './hoverTunables';
 import { familyHover, fileHover, loadHover, sourceHover } from './hoverPorts';
 
 export interface Hover {
@@ -27,6 +28,7 @@ export function hoverAt(assessment: Assessment, offset: number): Hover | null {
   const named = nameAtOffset(assessment.description, offset);
   if (named?.kind === 'band') return bandHover(assessment, named.name, spanAt(named, offset));
   if (named?.kind === 'family') return familyHover(assessment, named.name, spanAt(named, offset));
+  if (named?.kind === 'tunable') return tunableHover(assessment, named.name, spanAt(named, offset));
   if (goal) return goalHover(assessment, goal);
   const element = syntax.ladder?.elements.find(({ span }) => contains(span, offset));
   if (element) return elementHover(assessment, element);
@@ -37,7 +39,10 @@ export function hoverAt(assessment: Assessment, offset: number): Hover | null {
   const band = syntax.bands.find(({ span }) => contains(span, offset));
   if (band) return bandHover(assessment, band.name.value, band.span);
   const family = syntax.families.find(({ span }) => contains(span, offset));
-  return family ? familyHover(assessment, family.name.value, family.span) : keyHover(syntax.text, offset);
+  if (family) return familyHover(assessment, family.name.value, family.span);
+  const tunable = syntax.tunables.find(({ span }) => contains(span, offset));
+  if (tunable) return tunableHover(assessment, tunable.name.value, tunable.span);
+  return (syntax.channels && contains(syntax.channels.span, offset) ? channelsHover(assessment, syntax.channels.span) : null) ?? keyHover(syntax.text, offset);
 }
 
 const spanAt = ({ definition, references }: { readonly definition: Span | null; readonly references: readonly Span[] }, offset: number): Span =>

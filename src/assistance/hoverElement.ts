@@ -7,6 +7,7 @@ import type { ElementResult } from '../study/evaluation';
 import type { Problem } from '../study/problem';
 import type { Assessment } from './assess';
 import type { Hover } from './hover';
+import { codesOfElement } from './hoverTunables';
 import { lossText, sensitivityOf } from './ladderRows';
 import { plainText, rowsTable } from './markdown';
 import { partWithValue } from './partWithValue';
@@ -21,6 +22,7 @@ export function elementHover(assessment: Assessment, entry: ElementSyntax): Hove
   const head = `**${plainText(name)}**, ${entry.keyword}`;
   if (!result) return { span: entry.span, markdown: `${head}: nothing is known of it yet.` };
   const text = [`${head}${result.value !== null && result.unit ? `, ${printQuantity(result.value, result.unit, { digits: 4 })}` : ''}`];
+  for (const line of codesOfElement(assessment, name)) text.push('', line);
   const table = elementTable(result, problem);
   if (table !== '') text.push('', table);
   if (result.reason !== null) text.push('', plainText(result.reason));
