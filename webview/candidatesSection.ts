@@ -1,7 +1,7 @@
 import type { CandidateView, PanelView, TraceView } from '../src/messages/panel';
 import type { Actions } from './actions';
 import type { Controls } from './controls';
-import { element, setText, syncList } from './dom';
+import { element, setText, syncList, unbroken } from './dom';
 import { previewPicture } from './previewPicture';
 import { reachList } from './reachList';
 
@@ -21,7 +21,7 @@ export function candidatesSection(controls: Controls, actions: Actions) {
   const root = element('section', { class: 'candidates-section', 'aria-label': 'Candidates' }, heading, message, progress, picture.root, list, notes, reach.root);
   const makeRow = () => {
     const id = () => Number(row.dataset.candidate);
-    const insert = controls.button({ label: 'Insert', onPress: () => actions.insertCandidate(id()) });
+    const insert = controls.button({ label: 'Insert', primary: list.children.length === 0, onPress: () => actions.insertCandidate(id()) });
     insert.classList.add('insert');
     const row = element('li', {},
       element('div', { class: 'candidate' },
@@ -39,9 +39,9 @@ export function candidatesSection(controls: Controls, actions: Actions) {
     const find = (name: string) => row.querySelector(`.${name}`)!;
     row.dataset.candidate = String(candidate.id);
     row.className = candidate.holds ? 'held' : 'missed';
-    setText(find('values'), candidate.values);
-    setText(find('margin'), `${candidate.holds ? '✓' : '✗'} margin ${candidate.margin}`);
-    setText(find('more-figures'), `worst return loss ${candidate.returnLoss}, worst gain ${candidate.gain}`);
+    setText(find('values'), unbroken(candidate.values));
+    setText(find('margin'), unbroken(`${candidate.holds ? '✓' : '✗'} margin ${candidate.margin}`));
+    setText(find('more-figures'), unbroken(`worst return loss ${candidate.returnLoss}, worst gain ${candidate.gain}`));
     setText(find('remark'), [candidate.note, candidate.proof, candidate.response, `direct current ${candidate.directCurrent}`].filter((text) => text !== '').join(' · '));
     find('insert').setAttribute('aria-label', `Insert ${candidate.values}, margin ${candidate.margin}`);
   };

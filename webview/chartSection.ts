@@ -22,9 +22,10 @@ export function chartSection(controls: Controls, actions: Actions) {
     onArrow: (direction) => stepMarker(direction === 'up' ? 1 : -1),
   });
   const readings = element('ul', { class: 'readings' });
+  const gaps = element('p', { class: 'gaps' });
   const refusal = element('p', { class: 'refusal', role: 'alert' });
   const root = element('section', { class: 'trace-section', 'aria-label': 'Reflection trace' },
-    element('h2', { text: 'Reflection trace' }, mark.root), chart as unknown as HTMLElement, legend,
+    element('h2', { text: 'Reflection trace' }, mark.root), chart as unknown as HTMLElement, legend, gaps,
     element('div', { class: 'marker-line' }, element('span', { class: 'marker-label', text: 'marker' }), field.root, readings), refusal);
 
   const stepMarker = (points: number) => {
@@ -81,6 +82,9 @@ export function chartSection(controls: Controls, actions: Actions) {
         setText(item.lastElementChild!, text);
       });
       mark.show(next.notInserted);
+      const missing = missingOf(next);
+      setText(gaps, missing === '' ? '' : `Not drawn everywhere: ${missing}.`);
+      gaps.hidden = missing === '';
       field.setValue(next.marker?.text ?? '');
       setText(refusal, '');
       syncList(readings, next.marker?.cases ?? [], () => element('li', {}, element('span', { class: 'case-name' }), element('span')), (item, reading) => {
@@ -99,15 +103,20 @@ export function chartSection(controls: Controls, actions: Actions) {
   };
 }
 
+/** Why parts of traces are missing, each reason once and without the case that it is told of. */
+export const missingOf = ({ traces }: Pick<PanelView, 'traces'>): string =>
+  [...new Set(traces.flatMap(({ caseName, reason }) => (reason === null ? [] : [reason.replace(new RegExp(`^load(?: ${caseName.replace(/[^\w ]/g, '\\$&')})?: `), '')])))].join('; ');
+
 /** Of another text's builds nothing is drawn. */
 const cloudOf = ({ spread }: PanelView) => (spread && !spread.stale ? spread.cloud : []);
 
-function legendOf({ traces, bands, discs, limits, marker }: PanelView): { className: string; text: string }[] {
+function legendOf({ traces, bands, discs, limits, marker, spread }: PanelView): { className: string; text: string }[] {
   return [
-    ...traces.map(({ caseName, reason }, i) => ({ className: `trace ${caseClass(i)}`, text: `${caseName}${reason === null ? '' : ` (${reason})`}` })),
+    ...traces.map(({ caseName }, i) => ({ className: `trace ${caseClass(i)}`, text: caseName })),
     ...(bands.length > 0 ? [{ className: '', text: 'thick: in band' }] : []),
     ...discs.map(({ label }) => ({ className: '', text: `disc: ${label}` })),
     ...limits.map(({ label }) => ({ className: '', text: `dashed ring: ${label}` })),
+    ...(spread && !spread.stale && spread.cloud.length > 0 ? [{ className: '', text: `thin: builds${traces.length > 1 ? `, ${traces[0].caseName}` : ''}` }] : []),
     ...(marker && marker.cases.length > 1 && marker.cases[0].steps.length > 0 ? [{ className: '', text: `arcs: ${marker.cases[0].caseName}` }] : []),
   ];
 }

@@ -13,6 +13,8 @@ const rowsAtMost = 400;
 export function codesSection(controls: Controls, actions: Actions) {
   let codes: PanelView['codes'] = null;
   let offset = 0;
+  /** True where the arrow keys moved on: the row of the next view gets the focus. */
+  let keepsFocus = false;
   const [summary, steps, proof] = ['summary-line', 'soft-line', 'soft-line'].map((name) => element('p', { class: name }));
   const stairs = picture('0 0 540 200', { class: 'plot stairs-plot', role: 'slider', tabindex: '0', 'aria-orientation': 'horizontal' });
   const head = element('tr');
@@ -53,6 +55,15 @@ export function codesSection(controls: Controls, actions: Actions) {
     choose(Math.min(Math.max(codes.shown + by, 0), codes.channels.length - 1));
   });
 
+  // One stop for the Tab key; the arrow keys go from channel to channel.
+  body.addEventListener('keydown', (event) => {
+    const by = { ArrowDown: 1, ArrowUp: -1 }[event.key];
+    if (by === undefined || !codes) return;
+    event.preventDefault();
+    keepsFocus = true;
+    choose(Math.min(Math.max(codes.shown + by, 0), codes.channels.length - 1));
+  });
+
   const makeRow = () => {
     const row = element('tr');
     const button = element('button', { type: 'button', class: 'row-button', click: () => choose(Number(row.dataset.channel)) });
@@ -72,14 +83,17 @@ export function codesSection(controls: Controls, actions: Actions) {
     while (row.children.length > cells.length + 1) row.lastElementChild!.remove();
     while (row.children.length < cells.length + 1) row.append(element('td', { class: 'number' }));
     cells.forEach((content, i) => setText(row.children[i + 1], content));
-    row.children[own.length + 1].classList.toggle('margin-cell', true);
+    row.children[own.length + 1].className = 'number margin-cell';
+    row.children[own.length + 2].className = 'number loss-cell';
+    row.children[own.length + 3].className = 'number gain-cell';
+    button.tabIndex = isShown ? 0 : -1;
   };
   /** The row of the channel that is shown is in sight, without moving the page around it. */
   const showRow = (row: Element | undefined) => {
     if (!(row instanceof HTMLElement)) return;
     const header = head.offsetHeight;
-    if (row.offsetTop - header < frame.scrollTop) frame.scrollTop = row.offsetTop - header;
-    else if (row.offsetTop + row.offsetHeight > frame.scrollTop + frame.clientHeight) frame.scrollTop = row.offsetTop + row.offsetHeight - frame.clientHeight;
+    const hidden = row.offsetTop - header < frame.scrollTop || row.offsetTop + row.offsetHeight > frame.scrollTop + frame.clientHeight;
+    if (hidden) frame.scrollTop = row.offsetTop - (frame.clientHeight + header - row.offsetHeight) / 2;
   };
 
   return {
@@ -106,13 +120,18 @@ export function codesSection(controls: Controls, actions: Actions) {
       stairs.setAttribute('aria-valuetext', said);
       syncList(head, ['channel', ...tunables.map(({ name }) => name), 'margin', 'return loss', 'gain'], () => element('th', { scope: 'col' }), (cell, text, i) => {
         setText(cell, text);
-        cell.classList.toggle('number', i > 0);
+        const own = i - 1 - tunables.length;
+        cell.className = i === 0 ? '' : `number ${['margin-cell', 'loss-cell', 'gain-cell'][own] ?? ''}`;
       });
       offset = Math.min(Math.max(0, shown - rowsAtMost / 2), Math.max(0, channels.length - rowsAtMost));
       syncList(body, channels.slice(offset, offset + rowsAtMost), makeRow, updateRow);
       cut.hidden = channels.length <= rowsAtMost;
       setText(cut, `${rowsAtMost} of ${channels.length} channels, around the one that is shown.`);
-      if (shown !== wasShown) showRow(body.children[shown - offset]);
+      if (shown !== wasShown) {
+        showRow(body.children[shown - offset]);
+        if (keepsFocus) body.children[shown - offset]?.querySelector('button')?.focus({ preventScroll: true });
+        keepsFocus = false;
+      }
       syncList(tables, codes.firmware, () => element('li'), (item, { path, text, ok }) => {
         setText(item, `${path}: ${text}`);
         item.classList.toggle('out-of-date', !ok);

@@ -48,6 +48,10 @@ function field(input: ValueElement, label: string, onSubmit: (text: string) => v
   let shown = '';
   let busy = false;
   input.setAttribute('aria-label', label);
+  // The toolkit puts a name of its own over it when the field comes into the page.
+  new MutationObserver(() => {
+    if (input.getAttribute('aria-label') === 'Text field') input.setAttribute('aria-label', label);
+  }).observe(input, { attributes: true, attributeFilter: ['aria-label'] });
   input.setAttribute('spellcheck', 'false');
   const leave = () => {
     busy = false;

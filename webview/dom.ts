@@ -52,3 +52,6 @@ export function syncList<T, E extends HTMLElement>(parent: HTMLElement, items: r
   while (parent.children.length < items.length) parent.append(make());
   items.forEach((item, index) => update(parent.children[index] as E, item, index));
 }
+
+/** No number is torn from its unit at the end of a line. */
+export const unbroken = (text: string): string => text.replace(/(\d) (?=[%°λΩ]|[pnµmkMG]?(?:dB|dBm|Hz|Ω|H|F|S|m|W|V|A)\b)/g, '$1\u00a0');

@@ -13,12 +13,12 @@ export function exportSection(controls: Controls, actions: Actions) {
   const withView = (work: (shown: PanelView) => void) => () => { if (view) work(view); };
   const codesButton = controls.button({ label: 'Copy codes as CSV', onPress: withView((shown) => { if (shown.codes) actions.copy('codes csv', codesCsv(shown.codes)); }) });
   const buttons = [
-    controls.button({ label: 'Save report', onPress: actions.saveReport }),
+    controls.button({ label: 'Save report', primary: true, onPress: actions.saveReport }),
     controls.button({ label: 'Copy chart as SVG', onPress: withView((shown) => actions.copy('chart svg', chartSvg(shown))) }),
     controls.button({ label: 'Save chart as SVG', onPress: withView((shown) => actions.save('chart svg', toBase64(new TextEncoder().encode(chartSvg(shown))))) }),
     controls.button({ label: 'Save chart as PNG', onPress: withView((shown) => void chartPng(shown).then((base64) => actions.save('chart png', base64))) }),
-    controls.button({ label: 'Copy table as CSV', onPress: withView((shown) => actions.copy('ladder csv', ladderCsv(shown.ladder, shown.notInserted))) }),
-    controls.button({ label: 'Copy table as Markdown', onPress: withView((shown) => actions.copy('ladder markdown', ladderMarkdown(shown.ladder, shown.notInserted))) }),
+    controls.button({ label: 'Copy ladder as CSV', onPress: withView((shown) => actions.copy('ladder csv', ladderCsv(shown.ladder, shown.notInserted))) }),
+    controls.button({ label: 'Copy ladder as Markdown', onPress: withView((shown) => actions.copy('ladder markdown', ladderMarkdown(shown.ladder, shown.notInserted))) }),
     codesButton,
   ];
   return {
@@ -57,7 +57,7 @@ function toBase64(bytes: Uint8Array): string {
   return btoa(binary);
 }
 
-const head = ['element', 'orientation', 'value', 'X or B', 'Z after', 'peak', 'current', 'heat', 'loss', 'dB per %'];
+const head = ['element', 'orientation', 'value', 'X or B', 'Z after', 'peak', 'current', 'heat', 'loss', 'dB per 1 %'];
 const cellsOf = (row: LadderRowView) => [row.name, row.orientation === 'end' ? '' : row.orientation, row.value, row.reactance, row.impedanceAfter, row.voltage, row.current, row.heat, row.loss, row.sensitivity];
 
 /** What is said where the values come from the best candidate. */

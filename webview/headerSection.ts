@@ -16,7 +16,7 @@ export function headerSection(controls: Controls, actions: Actions) {
     update(view: PanelView) {
       pinned = view.pinned;
       setText(title, view.title);
-      setText(file, view.fileName);
+      setText(file, view.fileName === view.title ? '' : view.fileName);
       setText(pin, pinned ? 'Unpin' : 'Pin');
       pin.setAttribute('aria-label', pinned ? 'Unpin: follow the active description' : 'Pin: keep showing this description');
     },

@@ -5,10 +5,11 @@ import type { Controls, TextField } from './controls';
 import { element, picture, setMarkup, setText, syncList } from './dom';
 import { notInsertedMark } from './notInsertedMark';
 
-const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'loss', 'dB per %'] as const;
+const columns = ['value', 'X or B', 'Z after, Ω', 'peak', 'current', 'heat', 'loss', 'dB per 1 %'] as const;
 
-/** Which columns give way first in a narrow panel. */
-const columnClass = (name: (typeof columns)[number]) => (name === 'current' || name === 'loss' ? 'number widest-only' : name === 'dB per %' ? 'number wide-only' : name === 'peak' || name === 'heat' ? 'number middle-only' : 'number');
+/** Which columns give way in a narrow panel: current first, then loss, heat, peak, and last what a per cent costs. */
+const givesWay: Readonly<Partial<Record<(typeof columns)[number], string>>> = { current: 'current-only', loss: 'loss-only', heat: 'heat-only', peak: 'peak-only', 'dB per 1 %': 'sensitivity-only' };
+const columnClass = (name: (typeof columns)[number]) => (givesWay[name] === undefined ? 'number' : `number ${givesWay[name]}`);
 
 /** A hand's way for one step of a value. */
 const dragStepPx = 12;

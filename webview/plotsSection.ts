@@ -1,5 +1,5 @@
 import type { PanelView, TraceView } from '../src/messages/panel';
-import { frequencyPlot, frequencyScale, frequencyUnit, plotSize } from '../src/picture/frequencyPlot';
+import { frequencyPlot, frequencyScale, frequencyUnit, plotSize, shownSpan } from '../src/picture/frequencyPlot';
 import type { Actions } from './actions';
 import { element, picture, setMarkup, setText } from './dom';
 import { notInsertedMark } from './notInsertedMark';
@@ -19,10 +19,10 @@ export function plotsSection(actions: Actions) {
   const root = element('section', { class: 'plots-section', 'aria-label': 'Over frequency' }, element('h2', {}, words, mark.root), ...pictures.map((made) => made as unknown as HTMLElement));
   for (const made of pictures) {
     const follow = (event: PointerEvent) => {
-      const x = view && frequencyScale(view.frequencyHz);
+      const x = view && frequencyScale(view.frequencyHz, shownSpan({ ...view, markerHz: view.marker?.frequencyHz ?? null }));
       if (!view || !x) return;
       const box = made.getBoundingClientRect();
-      const [low, high] = [view.frequencyHz[0], view.frequencyHz[view.frequencyHz.length - 1]];
+      const [low, high] = x.domain();
       actions.moveMarker(Math.min(Math.max(x.invert(((event.clientX - box.left) / box.width) * plotSize.width), low), high));
     };
     made.addEventListener('pointerdown', (event) => {

@@ -14,7 +14,7 @@ export function spreadSection() {
       root.hidden = spread === null;
       if (spread === null) return;
       root.classList.toggle('old', spread.stale);
-      setText(heading, spread.stale ? 'Spread of builds (before the last change)' : spread.share < 1 ? `Spread of builds, ${Math.floor(100 * spread.share)} % made` : 'Spread of builds');
+      setText(heading, spread.stale ? 'Spread of builds (before the last change)' : spread.share < 1 ? 'Spread of builds, more being made' : 'Spread of builds');
       [spread.yieldText, spread.goalsText, spread.cornerText, spread.remedyText].forEach((text, i) => {
         setText(lines[i], text);
         lines[i].hidden = text === '';

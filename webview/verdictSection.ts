@@ -1,7 +1,7 @@
 import type { GoalView, PanelView } from '../src/messages/panel';
 import { barSize, goalBar } from '../src/picture/goalBar';
 import type { Actions } from './actions';
-import { element, picture, setMarkup, setText, syncList } from './dom';
+import { element, picture, setMarkup, setText, syncList, unbroken } from './dom';
 import { notInsertedMark } from './notInsertedMark';
 
 /** Goal by goal: whether it holds, its margin as a bar, its worst value and where. Each leads to its line. */
@@ -21,19 +21,21 @@ export function verdictSection(actions: Actions) {
   };
   const updateGoal = (item: HTMLElement, goal: GoalView) => {
     const button = item.firstElementChild as HTMLButtonElement;
-    item.className = goal.ok ? 'held' : 'missed';
+    item.className = goal.ok ? 'held' : goal.known ? 'missed' : 'unknown';
     item.dataset.goal = String(goal.id);
     button.dataset.line = String(goal.line);
     const find = (name: string) => button.querySelector(`.${name}`)!;
-    setText(find('sign'), goal.ok ? '✓' : '✗');
-    setText(find('hidden-text'), goal.ok ? 'holds: ' : 'missed: ');
-    setText(find('title'), goal.title);
-    setText(find('place'), goal.place);
-    setText(find('number'), goal.valueText);
+    setText(find('sign'), goal.ok ? '✓' : goal.known ? '✗' : '?');
+    setText(find('hidden-text'), goal.ok ? 'holds: ' : goal.known ? 'missed: ' : 'not known: ');
+    setText(find('title'), unbroken(goal.title));
+    setText(find('place'), unbroken(goal.place));
+    setText(find('number'), unbroken(goal.valueText));
     setText(find('detail'), goal.detail);
     // A word joiner: a line may otherwise end within |Γ|.
     setText(find('note'), goal.note.replaceAll('|Γ|', '|\u2060Γ|'));
-    setMarkup(find('bar') as SVGElement, goalBar(goal.bar));
+    const bar = find('bar') as SVGElement;
+    bar.style.visibility = goal.bar === null ? 'hidden' : '';
+    setMarkup(bar, goalBar(goal.bar));
     button.title = goal.marginText;
   };
   return {

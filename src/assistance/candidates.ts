@@ -3,6 +3,7 @@ import { decibels, returnLossDb } from '../network/figures';
 import { printNumber } from '../quantity/printQuantity';
 import { depthIn } from '../solve/formReach';
 import type { OutOfReach, Solution, SolveResult } from '../solve/solution';
+import { withSigns } from './goalText';
 import { solvedValue } from './insertSolution';
 
 const dB = (value: number): string => `${printNumber(value, 3)} dB`;
@@ -13,7 +14,7 @@ export function valuesText({ solved }: Pick<Solution, 'solved'>): string {
 }
 
 const partsText = (count: number): string => `${count} part${count === 1 ? '' : 's'}`;
-const conditions = (missed: number): string => (missed === 0 ? '' : `misses ${missed === 1 ? 'a condition' : `${missed} conditions`}`);
+const missedText = ({ missedGoals }: Solution): string => (missedGoals.length === 0 ? '' : `misses ${missedGoals.map((text) => withSigns(text)).join(', ')}`);
 
 /** What is known of ladders that are not listed, in a few words. */
 export function proofWords({ proved, boundDb, parts }: Solution): string {
@@ -65,7 +66,7 @@ function candidateView(solution: Solution, id: number, bestOfParts: boolean): Ca
     directCurrent: solution.dcPath === null ? 'not known' : solution.dcPath ? 'passes' : 'blocked',
     // Said once for each number of parts: of the others it follows.
     proof: bestOfParts ? proofWords(solution) : '',
-    note: [solution.yield === null ? '' : `${printNumber(100 * solution.yield, 3)} % of builds hold`, conditions(solution.conditionsMissed), bestOfParts ? `best of ${partsText(solution.parts)}` : ''].filter((text) => text !== '').join(' · '),
+    note: [missedText(solution), solution.yield === null ? '' : `${printNumber(100 * solution.yield, 3)} % of builds hold`, bestOfParts ? `best of ${partsText(solution.parts)}` : ''].filter((text) => text !== '').join(' · '),
   };
 }
 

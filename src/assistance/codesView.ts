@@ -7,7 +7,7 @@ import { channelFigures, codeSteps, type ChannelFigures } from '../study/tuning/
 import { usedTunables } from '../study/tuning/codeSpace';
 import type { Coverage } from '../study/tuning/coverage';
 import { tuneChannels } from '../study/tuning/tuneChannels';
-import { channelText, codesVerdict, levelText, proofText } from './codesWords';
+import { channelText, codesVerdict, proofText } from './codesWords';
 
 export interface CodesContext {
   /** Of the channel at the marker; a text where there is none, null while it is worked out. */
@@ -34,23 +34,27 @@ export function codesView(problem: Problem, { tuning }: Evaluation, { coverage, 
   };
 }
 
+/** With as many decimals in every row, so that a column can be read down. */
+const steadyText = (level: number | null): string =>
+  (level === null ? 'not known' : Number.isFinite(level) ? `${level.toFixed(2).replace('-', '−')} dB` : `${level > 0 ? '' : '−'}∞ dB`);
+
 const sentence = (text: string): string => text.slice(0, 1).toUpperCase() + text.slice(1);
 
 function channelView({ frequencyHz, codes, marginDb, holds, worstReflection, worstGainDb }: ChannelFigures): ChannelView {
   return {
     frequencyHz, text: channelText(frequencyHz), codes: [...codes.values()], holds,
-    margin: levelText(marginDb), marginDb: marginDb !== null && Number.isFinite(marginDb) ? marginDb : null,
-    returnLoss: levelText(worstReflection === null ? null : returnLossDb(worstReflection)), gain: levelText(worstGainDb),
+    margin: steadyText(marginDb), marginDb: marginDb !== null && Number.isFinite(marginDb) ? marginDb : null,
+    returnLoss: steadyText(worstReflection === null ? null : returnLossDb(worstReflection)), gain: steadyText(worstGainDb),
   };
 }
 
-/** `One code off at 915.3 MHz leaves: antcap −1 0.3 dB, +1 1.2 dB; bank +1 −4 dB` */
+/** `A wrong code at 915.3 MHz leaves a margin of: antcap one lower 0.30 dB, one higher 1.20 dB; bank one higher −4.00 dB` */
 function stepsText(frequencyHz: number, steps: ReturnType<typeof codeSteps>): string {
   const texts = steps.flatMap(({ tunable, lowerDb, higherDb }) => {
-    const sides = [...(lowerDb === null ? [] : [`−1 ${levelText(lowerDb)}`]), ...(higherDb === null ? [] : [`+1 ${levelText(higherDb)}`])];
+    const sides = [...(lowerDb === null ? [] : [`one lower ${steadyText(lowerDb)}`]), ...(higherDb === null ? [] : [`one higher ${steadyText(higherDb)}`])];
     return sides.length === 0 ? [] : [`${tunable} ${sides.join(', ')}`];
   });
-  return texts.length === 0 ? '' : `One code off at ${channelText(frequencyHz)} leaves a margin of: ${texts.join('; ')}`;
+  return texts.length === 0 ? '' : `A wrong code at ${channelText(frequencyHz)} leaves a margin of: ${texts.join('; ')}`;
 }
 
 function coverageView({ frequencyHz, across, marginDb, share, cases }: Coverage): CoverageView {
@@ -60,7 +64,7 @@ function coverageView({ frequencyHz, across, marginDb, share, cases }: Coverage)
     marginDb: Array.from(marginDb, (margin) => (Number.isFinite(margin) ? margin : null)),
     cases: cases.map(({ caseName, reflection, marginDb: margin }) => ({
       caseName: caseName ?? 'load', reflection, holds: margin !== null && margin >= 0,
-      text: margin === null ? 'not known here' : margin >= 0 ? `covered, ${levelText(margin)} to spare` : `not covered, ${levelText(-margin)} short`,
+      text: margin === null ? 'not known here' : margin >= 0 ? `covered, ${steadyText(margin)} to spare` : `not covered, ${steadyText(-margin)} short`,
     })),
   };
 }

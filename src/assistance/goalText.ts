@@ -6,7 +6,8 @@ import { isPending } from '../study/judgeYield';
 
 const placeWords = /\s(?=(?:in|at|for|into|against)\s)/;
 
-const withSigns = (text: string) => text.replace(/>=/g, '≥').replace(/<=/g, '≤').replace(/(\d)\s*x\s/g, '$1 × ').replace(/(^|\s)-(?=\d)/g, '$1−').replace(/\s+/g, ' ').trim();
+/** With the signs that the trade writes: ≥, ×, −. */
+export const withSigns = (text: string) => text.replace(/>=/g, '≥').replace(/<=/g, '≤').replace(/(\d)\s*x\s/g, '$1 × ').replace(/(^|\s)-(?=\d)/g, '$1−').replace(/\s+/g, ' ').trim();
 
 /** `return loss ≥ 12 dB` */
 export function goalTitle(goal: Goal): string {
@@ -79,6 +80,9 @@ export function goalBar({ goal, margin, reason, ok }: GoalResult): number | null
   return Math.min(1, Math.max(-1, margin / full));
 }
 
+/** False where something stands in the way of judging a goal. */
+export const isKnownResult = ({ value, reason }: Pick<GoalResult, 'value' | 'reason'>): boolean => value !== null || reason === null;
+
 /** `3 of 4 hold`; empty where there are no goals. */
 export function verdictText(results: readonly GoalResult[]): string {
   if (results.length === 0) return '';
@@ -86,6 +90,7 @@ export function verdictText(results: readonly GoalResult[]): string {
   const pending = judged.length < results.length ? 'the yield is being worked out' : '';
   if (judged.length === 0) return pending;
   const held = judged.filter((result) => result.ok).length;
-  const text = held === judged.length ? (held === 1 ? 'the goal holds' : `all ${held} hold`) : `${held} of ${judged.length} hold`;
+  const unknown = judged.filter((result) => !isKnownResult(result)).length;
+  const text = held === judged.length ? (held === 1 ? 'the goal holds' : `all ${held} hold`) : unknown === judged.length ? 'no goal can be judged' : `${held} of ${judged.length} hold${unknown === 0 ? '' : `, ${unknown === 1 ? 'one is' : `${unknown} are`} not known`}`;
   return pending === '' ? text : `${text}, ${pending}`;
 }

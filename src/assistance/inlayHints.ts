@@ -4,7 +4,7 @@ import { isPending } from '../study/judgeYield';
 import { unsolvedElements } from '../study/obstacles';
 import { printQuantity } from '../quantity/printQuantity';
 import type { Assessment } from './assess';
-import { goalDetail, goalMarginText, goalValueText } from './goalText';
+import { goalDetail, goalMarginText, goalValueText, isKnownResult } from './goalText';
 import { goalSyntaxOf } from './goalDiagnostics';
 import { reactanceText } from './ladderRows';
 
@@ -29,7 +29,7 @@ export function inlayHints({ description, model, evaluation }: Assessment, span:
     const syntax = goalSyntaxOf(description, result.goal);
     if (!syntax || !within(syntax.span.end) || isPending(result)) return [];
     const label = goalMarginText(result) || goalValueText(result);
-    return [{ offset: syntax.span.end, label: `${result.ok ? '✓' : '✗'} ${label}`, tooltip: [goalValueText(result), goalDetail(result)].filter((text) => text !== '').join(', ') }];
+    return [{ offset: syntax.span.end, label: `${result.ok ? '✓' : isKnownResult(result) ? '✗' : '?'} ${label}`, tooltip: [goalValueText(result), goalDetail(result)].filter((text) => text !== '').join(', ') }];
   });
   return [...elements, ...goals];
 }

@@ -8,7 +8,7 @@ import { unsolvedElements } from '../study/obstacles';
 import { candidatesView } from './candidates';
 import { cautions } from './cautions';
 import { codesView, type CodesContext } from './codesView';
-import { goalBar, goalDetail, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
+import { goalBar, goalDetail, isKnownResult, goalMarginText, goalPlace, goalTitle, goalValueText, verdictText } from './goalText';
 import { ladderRows } from './ladderRows';
 import { defaultMarkerHz, markerView } from './markerView';
 import { outOfReachNote } from './limitText';
@@ -89,6 +89,7 @@ function goalView(result: GoalResult, id: number, problem: Problem): GoalView {
     title: goalTitle(result.goal),
     place: goalPlace(result.goal),
     ok: result.ok,
+    known: isKnownResult(result),
     valueText: goalValueText(result),
     detail: goalDetail(result),
     marginText: goalMarginText(result),

@@ -4,7 +4,7 @@ import { goalDiscs } from '../study/discs';
 import type { CaseTrace, Evaluation } from '../study/evaluation';
 import type { Goal, GoalResult } from '../study/goal';
 import type { Problem } from '../study/problem';
-import { goalTitle } from './goalText';
+import { goalTitle, isKnownResult } from './goalText';
 
 /** Enough digits for a screen at any zoom, short enough to send at every keystroke. */
 const rounded = (value: number, known: number): number | null => (known && Number.isFinite(value) ? Math.round(value * 1e5) / 1e5 : null);
@@ -42,7 +42,7 @@ export function maskViews(problem: Problem, results: readonly GoalResult[]): Mas
   return results.flatMap((result, goalId) => {
     const { goal } = result;
     const level = maskLevel(goal);
-    if (!level || goal.into !== null) return [];
+    if (!level || goal.into !== null || !isKnownResult(result)) return [];
     return spansOf(goal, problem).map(([startHz, stopHz]) => ({ ...level, startHz, stopHz, ok: result.ok, goalId }));
   });
 }

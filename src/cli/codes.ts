@@ -91,6 +91,7 @@ function firmwareFiles(files: readonly Coded[], write: boolean, around: Surround
     }
   }
   if (!asked) fail('ohmward: no description here says where a firmware table goes\n');
+  else if (good && !write) around.error(`ohmward: ${claimed.size === 1 ? 'the table agrees with its description' : `${claimed.size} tables agree with their descriptions`}\n`);
   return good;
 }
 

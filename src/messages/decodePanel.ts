@@ -5,7 +5,7 @@ const maybeNumbers = listOf(orNull(number));
 const point = shape<{ re: number; im: number }>({ re: number, im: number });
 const points: Decoder<PointList> = shape<PointList>({ re: maybeNumbers, im: maybeNumbers });
 
-const goal = shape<GoalView>({ id: whole, title: text, place: text, ok: flag, valueText: text, detail: text, marginText: text, note: text, bar: orNull(number), line: whole });
+const goal = shape<GoalView>({ id: whole, title: text, place: text, ok: flag, known: flag, valueText: text, detail: text, marginText: text, note: text, bar: orNull(number), line: whole });
 const problem = shape<ProblemView>({ severity: oneOf('error', 'warning', 'info'), message: text, line: whole });
 const band = shape<BandView>({ name: text, startHz: number, stopHz: number, watch: flag });
 const trace = shape<TraceView>({ caseName: text, reflection: points, reflectionDb: maybeNumbers, gainDb: maybeNumbers, reason: orNull(text) });

@@ -18,6 +18,8 @@ export interface GoalView {
   /** `uplink`, `2 × uplink into 50 Ω`; empty where the goal has no place. */
   readonly place: string;
   readonly ok: boolean;
+  /** False where it cannot be told whether it holds. */
+  readonly known: boolean;
   /** `20.7 dB`, `∞`, or `not known`. */
   readonly valueText: string;
   /** `worst: wet bark, 868.2 MHz`, or the reason why it is not known. */

@@ -20,10 +20,24 @@ const area = { left: 44, right: 24, top: 24, bottom: 26 } as const;
 const deepest = { reflection: -40, gain: -30 } as const;
 const shallowest = { reflection: -10, gain: -3 } as const;
 
+/** Share of what is shown that stays free on both sides. */
+const sideShare = 0.04;
+
+/** The part of the sweep in which something is known, a band lies or the marker stands: the rest would be empty. */
+export function shownSpan({ frequencyHz, traces, bands, markerHz }: Pick<PlotData, 'frequencyHz' | 'traces' | 'bands' | 'markerHz'>): readonly [number, number] {
+  const [start, stop] = [frequencyHz[0], frequencyHz[frequencyHz.length - 1]];
+  const known = frequencyHz.filter((_, k) => traces.some(({ reflectionDb, gainDb }) => (reflectionDb[k] ?? gainDb[k] ?? null) !== null));
+  if (known.length === 0) return [start, stop];
+  const within = [...bands.flatMap(({ startHz, stopHz }) => [startHz, stopHz]), ...(markerHz === null ? [] : [markerHz])].filter((hz) => hz >= start && hz <= stop);
+  const [low, high] = [Math.min(known[0], ...within), Math.max(known[known.length - 1], ...within)];
+  const side = sideShare * (high - low);
+  return [Math.max(start, low - side), Math.min(stop, high + side)];
+}
+
 /** The frequency scale of a plot, shared with whoever drags the marker over it. Null without points. */
-export function frequencyScale(frequencyHz: readonly number[]): ScaleLinear<number, number> | null {
+export function frequencyScale(frequencyHz: readonly number[], span: readonly [number, number] = [frequencyHz[0], frequencyHz[frequencyHz.length - 1]]): ScaleLinear<number, number> | null {
   if (frequencyHz.length === 0) return null;
-  const [low, high] = [frequencyHz[0], frequencyHz[frequencyHz.length - 1]];
+  const [low, high] = span;
   const spread = high > low ? 0 : low * 0.05;
   return scaleLinear([low - spread, high + spread], [area.left, plotSize.width - area.right]);
 }
@@ -36,7 +50,7 @@ export function frequencyUnit(frequencyHz: readonly number[]): { readonly unit: 
 
 /** One plot over frequency, as the content of an SVG of `plotSize`: bands shaded, goals as bars, a line for each case, the marker. */
 export function frequencyPlot(data: PlotData): string {
-  const x = frequencyScale(data.frequencyHz);
+  const x = frequencyScale(data.frequencyHz, shownSpan(data));
   const title = textTag({ class: 'plot-title', x: area.left, y: 14 }, data.plot === 'reflection' ? 'reflection, dB' : 'gain, dB');
   if (!x) return title;
   const y = levelScale(data);
@@ -73,7 +87,8 @@ function masksMarkup({ masks, plot }: PlotData, x: ScaleLinear<number, number>, 
     const middle = (from + to) / 2;
     const half = Math.max((to - from) / 2, 6);
     const foot = side === 'at most' ? -5 : 5;
-    return tag('path', {
+    const sign = ok ? '' : textTag({ class: 'mask-sign', x: middle + half + 4, y: level + 4 }, '✗');
+    return sign + tag('path', {
       class: `mask ${ok ? 'held' : 'missed'}`, 'data-goal': goalId,
       d: polyline([middle - half, middle - half, middle + half, middle + half], [level + foot, level, level, level + foot]),
     });

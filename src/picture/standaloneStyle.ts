@@ -24,6 +24,6 @@ export function standaloneStyle(theme: 'dark' | 'light'): string {
     `.cloud{fill:none;stroke:${cases[0]};stroke-width:.8;stroke-opacity:.35}.hatch{stroke:${good};stroke-width:1.6}.covered{stroke:${good};stroke-width:1.4}.case-cross{fill:none;stroke-width:2.4}`,
     `.stairs{fill:none;stroke-width:2}.chosen{fill:${ink};fill-opacity:.12;stroke:${ink};stroke-width:.8}`,
     `.bar-held{fill:${good}}.bar-missed{fill:${bad}}.bar-limit{stroke:${ink};stroke-width:1.5}.corner-mark{fill:${ink}}`,
-    `.band{fill:${cases[0]};fill-opacity:.14}.marker-line{stroke:${ink};stroke-dasharray:2 3}.mask{fill:none;stroke-width:3}.mask.held{stroke:${good}}.mask.missed{stroke:${bad};stroke-dasharray:4 2}`,
+    `.band{fill:${cases[0]};fill-opacity:.14}.marker-line{stroke:${ink};stroke-dasharray:2 3}.mask{fill:none;stroke-width:3}.mask.held{stroke:${good}}.mask.missed{stroke:${bad}}.mask-sign{fill:${bad}}`,
   ].join('');
 }

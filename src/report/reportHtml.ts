@@ -10,7 +10,7 @@ body{font:14px/1.45 sans-serif;color:#2b2b2b;background:#fff;max-width:60em;marg
 .frame{overflow-x:auto}table{border-collapse:collapse;width:100%;font-variant-numeric:tabular-nums}td,th{padding:.25em .5em;text-align:right;border-bottom:1px solid #ddd;font-weight:400}td:first-child,th:first-child,.left{text-align:left}thead th{color:#666}
 .ok{color:#2d7d3f}.no{color:#c72e0f}.soft{color:#666}svg{display:block}svg.chart{width:min(100%,520px);margin:0 auto}svg.plot{width:100%;max-width:680px}svg.bar{width:110px;height:8px}svg.sample{display:inline-block;vertical-align:middle}svg.reach{flex:0 0 auto;width:90px;height:90px}svg.reach text{display:none}.reaches{list-style:none;padding:0;display:grid;grid-template-columns:repeat(auto-fill,minmax(240px,1fr));gap:.5em 1em}.reaches li{display:flex;gap:.7em;align-items:center;color:#666}tr.chosen td{background:#eef2f6;fill-opacity:1}
 .wire{fill:none;stroke:#2b2b2b;stroke-width:1.6}.wire.filled{fill:#fff}.wire.dashed{stroke-dasharray:3 3}.node{fill:#2b2b2b}.bar-track{fill:#eee}
-.cautions,.not-inserted{border:1px solid #b58900;padding:.5em 1em}@media print{body{margin:0;max-width:none}h2,h3{break-after:avoid}svg,tr{break-inside:avoid}.frame{overflow:visible}}`;
+.cautions,.not-inserted{border:1px solid #b58900;padding:.5em 1em}td{white-space:nowrap}td.wide,tr.soft td{white-space:normal}@media print{body{margin:0;max-width:none}h2,h3{break-after:avoid}svg,tr,.whole{break-inside:avoid}p{orphans:3;widows:3}hr{break-after:page;border:0;margin:0}.frame{overflow:visible}td{padding:.2em .35em}}`;
 
 /** What one description's part of a report is made of. */
 export interface ReportedFile {

@@ -9,7 +9,7 @@ const rowsAtMost = 41;
 export function sweepText(path: string, evaluation: Evaluation): string {
   const step = Math.max(1, Math.ceil(evaluation.frequencyHz.length / rowsAtMost));
   const blocks = evaluation.traces.map((trace) => {
-    const head = `${path}${trace.caseName === null ? '' : `, ${trace.caseName}`}${step > 1 ? ` (every ${step}. point)` : ''}`;
+    const head = `${path}${trace.caseName === null ? '' : `, ${trace.caseName}`}${step > 1 ? ` (one point in ${step})` : ''}`;
     const rows = [['frequency', 'reflection', 'impedance', 'gain']];
     for (let k = 0; k < evaluation.frequencyHz.length; k += step) {
       const frequency = printQuantity(evaluation.frequencyHz[k], 'Hz', { digits: 6 });

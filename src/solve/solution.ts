@@ -28,6 +28,8 @@ export interface Solution {
   readonly marginDb: number;
   /** Goals without a margin in dB (parts, direct current, resistance, stress …) that it misses. */
   readonly conditionsMissed: number;
+  /** Texts of the goals that it misses, in the order of the description. */
+  readonly missedGoals: readonly string[];
   /** Every goal holds; a goal on yield by `yield`. */
   readonly holds: boolean;
   /** Share of some random builds that meet every other goal; null where no part has a tolerance. Not part of the proof. */

@@ -34,6 +34,7 @@ export function solutionOf(problem: Problem, solved: readonly SolvedElement[], l
     solved, ladder,
     marginDb: margins.length > 0 ? Math.min(...margins) : decibels(worstGain),
     conditionsMissed: judgedGoals.filter(({ goal, ok }) => isCondition(goal) && !ok).length,
+    missedGoals: judgedGoals.filter(({ ok }) => !ok).map(({ goal }) => goal.text),
     holds: judgedGoals.every(({ ok }) => ok),
     yield: null,
     worstReflection, worstGain,

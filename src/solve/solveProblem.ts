@@ -1,4 +1,5 @@
 import { decibels } from '../network/figures';
+import { printQuantity } from '../quantity/printQuantity';
 import type { Goal } from '../study/goal';
 import type { Problem } from '../study/problem';
 import { codeCombinationsAtMost } from '../study/limits';
@@ -53,7 +54,7 @@ export function solveProblem(problem: Problem, options: SolveOptions = {}): Solv
   const { solutions, byParts } = ranked(problem, candidates, aim, top);
   const hints = [...hintsOf(problem, aim, lossless), ...cutHints(problem, forms)];
   const better = betterBuild(solutions);
-  if (better) hints.push(`The largest margin is not the best build: ${better.solved.map(({ name }) => name).join(', ')} of solution ${solutions.indexOf(better) + 1} hold in ${percent(better.yield)} of builds, those of the first in ${percent(solutions[0].yield)}.`);
+  if (better) hints.push(`More builds hold with ${partsText(better)} (${percent(better.yield)}) than with the first (${percent(solutions[0].yield)}), though its margin is smaller.`);
   return { solutions, byParts, reason: null, hints, outOfReach };
 }
 
@@ -87,6 +88,11 @@ function ranked(problem: Problem, candidates: readonly Candidate[], aim: Aim, to
 
 /** True where codes set some of the ladder's parts, in a number of combinations that can be tried. */
 const isTuned = (problem: Problem): boolean => usedTunables(problem).length > 0 && (problem.channelsHz?.length ?? 0) > 0 && codeSpace(problem).count <= codeCombinationsAtMost;
+
+const units = { resistor: 'Ω', inductor: 'H', capacitor: 'F' } as const;
+
+/** `L1 10 nH, C2 13 pF`: parts that were chosen; what is left out or no part goes without saying. */
+const partsText = ({ solved }: Solution): string => solved.flatMap(({ name, part }) => (part ? [`${name} ${printQuantity(part.value, units[part.kind], { digits: 3 })}`] : [])).join(', ');
 
 const percent = (share: number | null): string => `${((share ?? 0) * 100).toFixed(1)} %`;
 

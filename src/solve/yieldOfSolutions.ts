@@ -15,13 +15,13 @@ export function withYields(problem: Problem, solutions: readonly Solution[]): So
   const slow = checkedPoints(problem).others.some((at) => !structural.has(problem.goals[at].quantity));
   const judged = solutions.map((solution): Solution => {
     const own = withLadder(problem, solution.ladder);
-    if (spreadObstacle(own) !== null) return wanted === null ? solution : { ...solution, holds: false, conditionsMissed: solution.conditionsMissed + 1 };
+    if (spreadObstacle(own) !== null) return wanted === null ? solution : { ...solution, holds: false, conditionsMissed: solution.conditionsMissed + 1, missedGoals: [...solution.missedGoals, 'yield'] };
     const builds = Math.min(problem.spread.builds, slow ? slowBuilds : quickBuilds);
     const run = spreadOfBuilds(shareCodes(own, { ...own, spread: { ...own.spread, builds } }));
     run.more(builds);
     const share = run.result().yield;
     const missed = wanted !== null && share < wanted;
-    return { ...solution, yield: share, holds: solution.holds && !missed, conditionsMissed: solution.conditionsMissed + (missed ? 1 : 0) };
+    return { ...solution, yield: share, holds: solution.holds && !missed, conditionsMissed: solution.conditionsMissed + (missed ? 1 : 0), missedGoals: missed ? [...solution.missedGoals, 'yield'] : solution.missedGoals };
   });
   return wanted === null ? judged : judged.map((solution, at) => ({ solution, at })).sort((a, b) => a.solution.conditionsMissed - b.solution.conditionsMissed || a.at - b.at).map(({ solution }) => solution);
 }

@@ -35,8 +35,8 @@ describe('codes in the panel’s view', () => {
     const { shown, stepsText, channels } = codesAt(869.2e6);
     assert.equal(channels[shown].text, '869 MHz');
     const [{ lowerDb, higherDb }] = bestCodes(problem)[shown].steps;
-    const sides = [lowerDb === null ? '' : '−1', higherDb === null ? '' : '\\+1'].filter((side) => side !== '').map((side) => `${side} −?[\\d.]+ dB`);
-    assert.match(stepsText, new RegExp(`^One code off at 869 MHz leaves a margin of: bank ${sides.join(', ')}$`));
+    const sides = [lowerDb === null ? '' : 'one lower', higherDb === null ? '' : 'one higher'].filter((side) => side !== '').map((side) => `${side} −?[\\d.]+ dB`);
+    assert.match(stepsText, new RegExp(`^A wrong code at 869 MHz leaves a margin of: bank ${sides.join(', ')}$`));
   });
 
   it('have the coverage of that channel, and none of another', () => {

@@ -6,7 +6,7 @@ import type { PanelView, ToHost, ToPage } from '../../src/messages/panel';
 
 const view: PanelView = {
   title: 'Orchard frost sensor', fileName: 'frost.match.yaml', pinned: false, verdict: '3 of 4 goals hold',
-  goals: [{ id: 0, title: 'return loss ≥ 12 dB', place: 'uplink', ok: true, valueText: '20.7 dB', detail: 'worst: wet bark, 868.2 MHz', marginText: '8.7 dB to spare', note: '', bar: 0.4, line: 12 }],
+  goals: [{ id: 0, title: 'return loss ≥ 12 dB', place: 'uplink', ok: true, known: true, valueText: '20.7 dB', detail: 'worst: wet bark, 868.2 MHz', marginText: '8.7 dB to spare', note: '', bar: 0.4, line: 12 }],
   problems: [{ severity: 'warning', message: 'an invented problem', line: 3 }], cautions: ['an invented caution'], z0Ohm: 50, frequencyHz: [863e6, 870e6], bands: [{ name: 'uplink', startHz: 863e6, stopHz: 870e6, watch: false }],
   traces: [{ caseName: 'load', reflection: { re: [0.1, null], im: [0.2, null] }, reflectionDb: [-13, null], gainDb: [-0.2, null], reason: null }],
   discs: [{ centreRe: 0, centreIm: 0, radius: 0.25, label: '12 dB' }], limits: [{ centreRe: 0, centreIm: 0, radius: 0.1, label: 'Bode–Fano' }], masks: [{ plot: 'reflection', side: 'at most', levelDb: -12, startHz: 863e6, stopHz: 870e6, ok: true, goalId: 0 }],

@@ -320,7 +320,7 @@ describe('the panel’s page', function () {
   it('copies the table and saves the chart as SVG and PNG', async () => {
     const served = await openPage('light', 580);
     await served.post(viewMessage(sampleView()));
-    await served.page.click('text=Copy table as CSV');
+    await served.page.click('text=Copy ladder as CSV');
     const csv = await last(served, 'copy');
     assert.ok(csv?.type === 'copy' && csv.text.includes('C1,shunt,4.3 pF'), JSON.stringify(csv));
     await served.page.click('text=Save chart as PNG');

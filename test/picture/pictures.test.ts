@@ -170,7 +170,7 @@ describe('pictures', () => {
     assert.match(chartSummary(view), /^Smith chart with the reflection trace of free air, wet bark\. At 866\.493 MHz, free air: Γ\u00a0/);
   });
 
-  it('a mask has its feet on the side on which the trace may not be, and is dashed where missed', () => {
+  it('a mask has its feet on the side on which the trace may not be, and a cross beside it where missed', () => {
     const draw = (side: 'at most' | 'at least', ok: boolean) => frequencyPlot({
       plot: 'reflection', frequencyHz: [1e9, 2e9], traces: [], bands: [], markerHz: null,
       masks: [{ plot: 'reflection', side, levelDb: -10, startHz: 1.2e9, stopHz: 1.4e9, ok, goalId: 0 }],
