@@ -7,7 +7,7 @@ import { chromiumArguments, prepareChromium } from './preparePrograms';
 /** The README's picture: the window that the suite took, made small. `npm run pictures` runs the suite before. */
 const taken = fileURLToPath(new URL('../../out/pictures/panel-first.png', import.meta.url));
 const folder = fileURLToPath(new URL('../../media/pictures/', import.meta.url));
-const quality = 84;
+const quality = 66;
 
 if (!existsSync(taken)) throw new Error('out/pictures/panel-first.png is not there: run the suite «panel» first');
 const browser = await chromium.launch({ executablePath: await prepareChromium(), args: chromiumArguments });
