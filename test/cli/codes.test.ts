@@ -1,34 +1,12 @@
 import assert from 'node:assert/strict';
-import { cpSync, existsSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { fileURLToPath } from 'node:url';
-import { runCommandLine } from '../../src/cli/runCommandLine';
+import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { inFolder, run } from './inFolder';
 
-const sample = fileURLToPath(new URL('../../media/samples/', import.meta.url));
 const description = 'gate-reader/gate.match.yaml';
 const header = 'gate-reader/firmware/gate_codes.h';
 
 describe('codes on the command line', () => {
-  const before = process.cwd();
-  let folder = '';
-
-  beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    cpSync(sample, folder, { recursive: true });
-    process.chdir(folder);
-  });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
-
-  async function run(...words: string[]) {
-    let out = '';
-    let error = '';
-    const code = await runCommandLine(words, { out: (text) => { out += text; }, error: (text) => { error += text; }, colour: false });
-    return { code, out, error };
-  }
+  inFolder({ withSamples: true });
 
   const change = (from: string, to: string) => {
     const text = readFileSync(description, 'utf8');

@@ -1,31 +1,16 @@
 import assert from 'node:assert/strict';
-import { lstatSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { runCommandLine } from '../../src/cli/runCommandLine';
+import { lstatSync, mkdirSync, readFileSync, symlinkSync, writeFileSync } from 'node:fs';
+import { inFolder, run } from './inFolder';
 
 // Cases that went wrong once. All data is invented.
 describe('codes in odd cases', () => {
-  const before = process.cwd();
-  let folder = '';
+  inFolder();
 
-  beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    process.chdir(folder);
-  });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
-
-  async function run(text: string | Record<string, string>, ...words: string[]) {
+  async function runOn(text: string | Record<string, string>, ...words: string[]) {
     for (const [name, content] of Object.entries(typeof text === 'string' ? { 'a.match.yaml': text } : text)) writeFileSync(name, content);
-    let out = '';
-    let error = '';
-    const code = await runCommandLine(words, { out: (told) => { out += told; }, error: (told) => { error += told; }, colour: false });
-    return { code, out, error };
+    return run(...words);
   }
-  const json = async (text: string, ...words: string[]) => JSON.parse((await run(text, ...words, '--format', 'json', 'a.match.yaml')).out).files[0];
+  const json = async (text: string, ...words: string[]) => JSON.parse((await runOn(text, ...words, '--format', 'json', 'a.match.yaml')).out).files[0];
 
   it('a channel outside of every band has the source of the nearest one', async () => {
     const text = (source: string) => `ohmward: 1
@@ -91,7 +76,7 @@ ${more}`;
     ...['_stdint', 'int8_t', 'uint_least16_t', 'INT8_MAX', '__LINE__', 'main', '_Generic'].map((symbol) => [`firmware: {header: a.h, symbol: ${symbol}}`, 'bad-symbol']),
   ]) {
     it(`is a mistake with its place: ${what}`, async () => {
-      const { code: exit, error } = await run(small(`${what}\n`), 'check', 'a.match.yaml');
+      const { code: exit, error } = await runOn(small(`${what}\n`), 'check', 'a.match.yaml');
       assert.equal(exit, 1);
       assert.match(error, new RegExp(`a\\.match\\.yaml:8:\\d+: error: .*${code}`), error);
     });
@@ -99,7 +84,7 @@ ${more}`;
 
   for (const [rows, message] of [['{}', /has no codes/], ['{1: solve, 2: 2 pF}', /stands for one value/], ['{1: tunable u, 2: 2 pF}', /stands for one value/], ['{1: pair 1 pF}', /a\.match\.yaml:4:\d+: error/]] as const) {
     it(`is a mistake with its place: a tunable ${rows}`, async () => {
-      const { code, error } = await run(small('').replace('{0: 1 pF, 1: 6 pF}', rows), 'check', 'a.match.yaml');
+      const { code, error } = await runOn(small('').replace('{0: 1 pF, 1: 6 pF}', rows), 'check', 'a.match.yaml');
       assert.equal(code, 1);
       assert.match(error, message);
       assert.doesNotMatch(error, /«pair» is no value; pair/);
@@ -109,7 +94,7 @@ ${more}`;
   it('a header that is a folder is told, and nothing is written', async () => {
     mkdirSync('isdir');
     for (const option of ['--write', '--verify']) {
-      const { code, error } = await run(small('firmware: {header: isdir, symbol: a}\n'), 'codes', option, 'a.match.yaml');
+      const { code, error } = await runOn(small('firmware: {header: isdir, symbol: a}\n'), 'codes', option, 'a.match.yaml');
       assert.equal(code, 1);
       assert.match(error, /^isdir: is a folder/m);
     }
@@ -117,37 +102,37 @@ ${more}`;
 
   it('two descriptions do not overwrite each other’s table, but may share one', async () => {
     const one = small('firmware: {header: t.h, symbol: a}\n');
-    const clash = await run({ 'a.match.yaml': one, 'b.match.yaml': one.replace('symbol: a', 'symbol: b') }, 'codes', '--write', '.');
+    const clash = await runOn({ 'a.match.yaml': one, 'b.match.yaml': one.replace('symbol: a', 'symbol: b') }, 'codes', '--write', '.');
     assert.equal(clash.code, 1);
     assert.match(clash.error, /b\.match\.yaml: writes another table to t\.h than a\.match\.yaml does/);
     assert.match(readFileSync('t.h', 'utf8'), /struct a_row/);
-    assert.equal((await run({ 'b.match.yaml': one }, 'codes', '--verify', '.')).code, 0);
+    assert.equal((await runOn({ 'b.match.yaml': one }, 'codes', '--verify', '.')).code, 0);
   });
 
   it('a table is out of date where a blank tears a number or is missing between words, and not where it is laid out anew', async () => {
     const text = small('firmware: {header: t.h, symbol: a}\n');
-    await run(text, 'codes', '--write', 'a.match.yaml');
+    await runOn(text, 'codes', '--write', 'a.match.yaml');
     const table = readFileSync('t.h', 'utf8');
     for (const [from, to, code] of [['868000000', '8680 00000', 1], ['static const', 'staticconst', 1], ['#define A_COUNT 1\n\n', '#define A_COUNT 1 ', 1], ['#define A_COUNT 1\n', '#define A_COUNT\n1\n', 1], ['    { ', '{', 0], ['[A_COUNT] = {', '[ A_COUNT ]\n    = {', 0], ['\n', '\r\n', 0]] as const) {
       writeFileSync('t.h', table.replace(from, to));
       assert.notEqual(readFileSync('t.h', 'utf8'), table);
-      assert.equal((await run(text, 'codes', '--verify', 'a.match.yaml')).code, code, `${from} → ${to}`);
+      assert.equal((await runOn(text, 'codes', '--verify', 'a.match.yaml')).code, code, `${from} → ${to}`);
     }
   });
 
   it('without codes it is told why there is no table', async () => {
-    const { code, error } = await run(small('firmware: {header: t.h, symbol: a}\n').replace('12 nH', 'solve 1 .. 30 nH'), 'codes', '--write', 'a.match.yaml');
+    const { code, error } = await runOn(small('firmware: {header: t.h, symbol: a}\n').replace('12 nH', 'solve 1 .. 30 nH'), 'codes', '--write', 'a.match.yaml');
     assert.equal(code, 1);
     assert.match(error, /^a\.match\.yaml: there is no table: L1 is still to be solved$/m);
     assert.doesNotMatch(error, /no description here says/);
-    const close = await run(small('channels: [868 MHz, 868.0000001 MHz]\nfirmware: {header: t.h, symbol: a}\n'), 'codes', '--write', 'a.match.yaml');
+    const close = await runOn(small('channels: [868 MHz, 868.0000001 MHz]\nfirmware: {header: t.h, symbol: a}\n'), 'codes', '--write', 'a.match.yaml');
     assert.match(close.error, /there is no table: two channels are less than 1 Hz apart/);
   });
 
   it('a link stays a link, also where it leads to nothing yet', async () => {
     mkdirSync('real');
     symlinkSync('real/t.h', 't.h');
-    const { code } = await run(small('firmware: {header: t.h, symbol: a}\n'), 'codes', '--write', 'a.match.yaml');
+    const { code } = await runOn(small('firmware: {header: t.h, symbol: a}\n'), 'codes', '--write', 'a.match.yaml');
     assert.equal(code, 0);
     assert.ok(lstatSync('t.h').isSymbolicLink());
     assert.match(readFileSync('real/t.h', 'utf8'), /struct a_row/);

@@ -1,39 +1,12 @@
 import assert from 'node:assert/strict';
-import { cpSync, lstatSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { cpSync, lstatSync, mkdirSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
-import { fileURLToPath } from 'node:url';
-import { runCommandLine } from '../../src/cli/runCommandLine';
 import { readTouchstone } from '../../src/network/touchstone/readTouchstone';
+import { inFolder, run } from './inFolder';
 
-const samples = fileURLToPath(new URL('../../media/samples/', import.meta.url));
-
-interface Outcome {
-  readonly code: number;
-  readonly out: string;
-  readonly error: string;
-}
 
 describe('command line', () => {
-  const before = process.cwd();
-  let folder = '';
-
-  beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    cpSync(samples, folder, { recursive: true });
-    process.chdir(folder);
-  });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
-
-  async function run(...words: string[]): Promise<Outcome> {
-    let out = '';
-    let error = '';
-    const code = await runCommandLine(words, { out: (text) => { out += text; }, error: (text) => { error += text; }, colour: false });
-    return { code, out, error };
-  }
+  const place = inFolder({ withSamples: true });
 
   const change = (from: string, to: string) => {
     const path = 'orchard/frost.match.yaml';
@@ -144,7 +117,7 @@ describe('command line', () => {
     });
 
     it('compares each goal with an earlier version', async () => {
-      cpSync('orchard/frost.match.yaml', join(folder, 'earlier.yaml'));
+      cpSync('orchard/frost.match.yaml', join(place.folder, 'earlier.yaml'));
       change('series L1: 10 nH', 'series L1: 11 nH');
       const { out } = await run('check', 'orchard', '--since', 'earlier.yaml');
       assert.match(out, /return loss ≥ 14 dB, uplink .*was 16\.8 dB/);

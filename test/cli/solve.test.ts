@@ -1,8 +1,6 @@
 import assert from 'node:assert/strict';
-import { mkdtempSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { runCommandLine } from '../../src/cli/runCommandLine';
+import { readFileSync, writeFileSync } from 'node:fs';
+import { inFolder, run } from './inFolder';
 
 // Invented: a soil probe's antenna.
 const text = `ohmward: 1
@@ -21,25 +19,10 @@ goals:
 `;
 
 describe('solve on the command line', () => {
-  const before = process.cwd();
-  let folder = '';
-
+  inFolder();
   beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    process.chdir(folder);
     writeFileSync('probe.match.yaml', text);
   });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
-
-  async function run(...words: string[]) {
-    let out = '';
-    let error = '';
-    const code = await runCommandLine(words, { out: (more) => { out += more; }, error: (more) => { error += more; }, colour: false });
-    return { code, out, error };
-  }
 
   it('lists the best solutions with the proof, for people', async () => {
     const { code, out, error } = await run('solve', 'probe.match.yaml');

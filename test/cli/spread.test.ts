@@ -1,8 +1,6 @@
 import assert from 'node:assert/strict';
-import { mkdtempSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { runCommandLine } from '../../src/cli/runCommandLine';
+import { writeFileSync } from 'node:fs';
+import { inFolder, run } from './inFolder';
 
 // Invented: a soil probe.
 const text = `ohmward: 1
@@ -23,23 +21,11 @@ seed: 3
 `;
 
 describe('spread on the command line', () => {
-  const before = process.cwd();
-  let folder = '';
-
-  beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    process.chdir(folder);
-  });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
+  inFolder();
 
   async function check(description: string, ...words: string[]) {
     writeFileSync('probe.match.yaml', description);
-    let out = '';
-    const code = await runCommandLine(['check', 'probe.match.yaml', ...words], { out: (more) => { out += more; }, error: () => undefined, colour: false });
-    return { code, out };
+    return run('check', 'probe.match.yaml', ...words);
   }
 
   it('judges a goal on yield, and says what would have to be tightened', async () => {

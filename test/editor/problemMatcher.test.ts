@@ -1,9 +1,8 @@
 import assert from 'node:assert/strict';
-import { cpSync, mkdirSync, mkdtempSync, readFileSync, realpathSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { cpSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { runCommandLine } from '../../src/cli/runCommandLine';
+import { inFolder, run } from '../cli/inFolder';
 
 const top = fileURLToPath(new URL('../../', import.meta.url));
 
@@ -24,24 +23,7 @@ function matched(name: string, text: string): (Record<string, string> | null)[] 
 }
 
 describe('the problem matchers', () => {
-  const before = process.cwd();
-  let folder = '';
-
-  beforeEach(() => {
-    folder = realpathSync(mkdtempSync(join(tmpdir(), 'ohmward-')));
-    process.chdir(folder);
-  });
-  afterEach(() => {
-    process.chdir(before);
-    rmSync(folder, { recursive: true, force: true });
-  });
-
-  async function run(...words: string[]) {
-    let out = '';
-    let error = '';
-    const code = await runCommandLine(words, { out: (text) => { out += text; }, error: (text) => { error += text; }, colour: false });
-    return { code, out, error };
-  }
+  const place = inFolder();
 
   const faulty = 'ohmward: 1\nload: 18 - j37 Ω\nladder:\n  - series L1: 3.9 nX\ngaols:\n  - parts <= 3\n';
 
@@ -79,7 +61,7 @@ describe('the problem matchers', () => {
   });
 
   it('find a table that is missing, foreign or out of date, and a description that is not laid out', async () => {
-    cpSync(join(top, 'media', 'samples', 'gate-reader'), folder, { recursive: true });
+    cpSync(join(top, 'media', 'samples', 'gate-reader'), place.folder, { recursive: true });
     const header = 'firmware/gate_codes.h';
     const table = readFileSync(header, 'utf8');
     const state = async (expected: RegExp) => {
@@ -101,7 +83,7 @@ describe('the problem matchers', () => {
   });
 
   it('pass over the verdict and what is told of the call', async () => {
-    cpSync(join(top, 'media', 'samples'), folder, { recursive: true });
+    cpSync(join(top, 'media', 'samples'), place.folder, { recursive: true });
     const { out } = await run('check', '.');
     const { error } = await run('check', 'nowhere');
     const { error: nothing } = await run('codes', '--verify', 'orchard');
