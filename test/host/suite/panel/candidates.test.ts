@@ -1,6 +1,6 @@
 import assert from 'node:assert/strict';
 import * as vscode from 'vscode';
-import { openSample, openText, replace, undo } from '../descriptions';
+import { openSample, openText, replace, sampleUri, undo } from '../descriptions';
 import { page } from '../page';
 import { closeAll, eventually } from '../waiting';
 
@@ -8,6 +8,7 @@ const FROST = 'orchard/frost.match.yaml';
 
 describe('candidates in the panel', () => {
   afterEach(closeAll);
+  after(() => vscode.workspace.fs.delete(sampleUri('orchard/valve.match.yaml')));
 
   async function openUnsolved(): Promise<vscode.TextEditor> {
     const editor = await openSample(FROST);
