@@ -9,7 +9,7 @@ type Keyword = ElementSyntax['keyword'];
 
 export const elementKeywords: readonly Keyword[] = ['series', 'shunt', 'line', 'stub open', 'stub short', 'transformer', 'block'];
 
-const others: Readonly<Record<string, Keyword>> = { parallel: 'shunt', 'open stub': 'stub open', 'short stub': 'stub short', 'stub shorted': 'stub short' };
+const others: ReadonlyMap<string, Keyword> = new Map([['parallel', 'shunt'], ['open stub', 'stub open'], ['short stub', 'stub short'], ['stub shorted', 'stub short']]);
 
 /** `series L1`, `stub open S2`; null (reported) where it is no such key. */
 export function readElementKey(key: Phrase, context: PhraseContext): { keyword: Keyword; name: Located<string> } | null {
@@ -18,7 +18,7 @@ export function readElementKey(key: Phrase, context: PhraseContext): { keyword: 
   if (!keyword) {
     const words = key.text.trim().split(/\s+/);
     const written = words.length > 2 ? words.slice(0, 2).join(' ') : words[0];
-    const meant = others[written] ?? nearestWord(written, elementKeywords) ?? others[words[0]] ?? nearestWord(words[0], elementKeywords);
+    const meant = others.get(written) ?? nearestWord(written, elementKeywords) ?? others.get(words[0]) ?? nearestWord(words[0], elementKeywords);
     const span = spanOf(s, key.text.length - key.text.trimStart().length, key.text.trimEnd().length);
     const first = spanOf(s, key.text.indexOf(written), key.text.indexOf(written) + written.length);
     complain(s, 'element-keyword', `A ladder's entry begins with ${elementKeywords.join(', ')}, not with «${written}»${meant ? `; ${meant} was probably meant` : ''}.`, span,

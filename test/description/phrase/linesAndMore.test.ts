@@ -1,4 +1,5 @@
 import assert from 'node:assert/strict';
+import { readDescription } from '../../../src/description/readDescription';
 import { readBandPhrase } from '../../../src/description/phrase/readBand';
 import { readChannelsPhrase } from '../../../src/description/phrase/readChannels';
 import { readElementKey } from '../../../src/description/phrase/readElementKey';
@@ -89,6 +90,8 @@ describe('keys of the ladder', () => {
     checkCarets(readElementKey, 'series', '^^^^^^ element-name');
     checkCarets(readElementKey, 'series L 1', '       ^^^ name');
     checkCarets(readElementKey, 'shunt load', '      ^^^^ name');
+    // Words that every object has are words like others.
+    for (const text of ['__proto__ L1', 'constructor L1', 'toString']) assert.doesNotMatch(readDescription(`ladder:\n  - ${text}: 3 nH\n`, { expressions: true }).diagnostics.map(({ message }) => message).join(), /object Object|native code|probably meant/);
     for (const [text, fixed] of [['seriess L1', 'series L1'], ['Series L1', 'series L1'], ['parallel C1', 'shunt C1'], ['open stub S1', 'stub open S1'], ['stub S1', 'stub open S1']] as const) assert.deepEqual(mended(readElementKey, text), { code: 'element-keyword', text: fixed });
   });
 });
